@@ -1,0 +1,40 @@
+import type { z } from 'zod'
+import type { Role } from './accounts'
+import type { ProblemSlug } from './problems'
+
+/** Who may call: anyone; whoever is signed in; administrators; or members of the sheet with one of the roles.
+ *  Every membership may read its sheet, so `roles` is stated only where the call does more than read. */
+export type Access =
+  { to: 'anyone' } | { to: 'signed-in' } | { to: 'administrator' } | { to: 'members'; roles: readonly Role[] }
+
+/** An endpoint as data: the server serves it, the client calls it, OpenAPI and the route × role test are made from it. */
+export interface Endpoint<
+  P extends z.ZodType = z.ZodType,
+  Q extends z.ZodType = z.ZodType,
+  B extends z.ZodType = z.ZodType,
+  A extends z.ZodType = z.ZodType,
+> {
+  /** Unique, camelCase: the OpenAPI operation id. */
+  id: string
+  room: string
+  method: 'get' | 'post' | 'put' | 'delete'
+  /** Path under /api with {name} parameters, for example /sheets/{sheet}/items. */
+  path: string
+  summary: string
+  access: Access
+  params: P
+  query: Q
+  /** JSON body; of an upload, the fields beside the file. */
+  body: B
+  answer: A
+  /** 'json' unless the call takes a file (multipart, field `file`), answers with one, or streams events. */
+  form?: 'json' | 'upload' | 'download' | 'events'
+  /** Success status; 200 unless given. */
+  status?: 200 | 201 | 202 | 204
+  problems: readonly ProblemSlug[]
+}
+
+/** Gives an endpoint its exact types. */
+export const endpoint = <P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, A extends z.ZodType>(
+  definition: Endpoint<P, Q, B, A>,
+): Endpoint<P, Q, B, A> => definition

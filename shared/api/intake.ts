@@ -1,0 +1,186 @@
+import { z } from 'zod'
+import { mappingSchema } from '../intake/mapping'
+import { roles } from './accounts'
+import { empty, nothing, sheetParams, timestamp } from './common'
+import { endpoint } from './endpoint'
+import { ledgerEntrySchema } from './sheets'
+
+export const columnSchema = z.strictObject({
+  name: z.string(),
+  /** Up to five different values, as text. */
+  samples: z.array(z.string()),
+  /** Different values with their counts, most frequent first, at most 60; empty if there are more (numbers, names). */
+  values: z.array(z.strictObject({ value: z.string(), count: z.number().int() })),
+  filled: z.number().int(),
+})
+export type IntakeColumn = z.infer<typeof columnSchema>
+
+/** What was read from an uploaded file. */
+export const intakeSchema = z
+  .strictObject({
+    id: z.uuid(),
+    file: z.string(),
+    bytes: z.number().int(),
+    sha256: z.string(),
+    reader: z.enum(['geojson', 'kml']),
+    state: z.enum(['read', 'taken-in', 'discarded']),
+    at: timestamp,
+    records: z.number().int(),
+    points: z.number().int(),
+    lines: z.number().int(),
+    /** Records with neither points nor lines. */
+    others: z.number().int(),
+    columns: z.array(columnSchema),
+    /** Extent of the file, WGS 84 degrees: west, south, east, north; null without geometry. */
+    extent: z.tuple([z.number(), z.number(), z.number(), z.number()]).nullable(),
+    /** Anything a person should know about how the file was read. */
+    notes: z.array(z.string()),
+    proposal: mappingSchema,
+    /** Revision that it became. */
+    revision: z.number().int().nullable(),
+    /** An earlier intake of the same bytes on this sheet, in words; null if there was none. */
+    sameFileTakenIn: z.string().nullable(),
+  })
+  .meta({ id: 'Intake' })
+export type Intake = z.infer<typeof intakeSchema>
+
+export const refusalSchema = z.strictObject({
+  /** Number of the record in the file, from 1. */
+  record: z.number().int(),
+  field: z.string(),
+  value: z.string(),
+  reason: z.string(),
+})
+export type Refusal = z.infer<typeof refusalSchema>
+
+export const previewSchema = z
+  .strictObject({
+    accepted: z.number().int(),
+    refused: z.number().int(),
+    byKind: z.array(z.strictObject({ kind: z.string(), items: z.number().int() })),
+    refusals: z.array(refusalSchema),
+    /** The first items as they would be taken in, sheet metres: at most 5000, thinned evenly. */
+    sample: z.array(z.strictObject({ kind: z.string(), geometry: z.any() })),
+    outside: z.number().int(),
+  })
+  .meta({ id: 'IntakePreview' })
+export type IntakePreview = z.infer<typeof previewSchema>
+
+const intakeParams = sheetParams.extend({ intake: z.uuid() })
+const writers = ['compiler', 'editor'] as const
+
+export const uploadIntake = endpoint({
+  id: 'uploadIntake',
+  room: 'intake',
+  method: 'post',
+  path: '/sheets/{sheet}/intakes',
+  summary: 'Bring a field file (GeoJSON or KML): it is read, nothing is taken in yet',
+  access: { to: 'members', roles: writers },
+  params: sheetParams,
+  query: nothing,
+  body: nothing,
+  answer: intakeSchema,
+  status: 201,
+  form: 'upload',
+  problems: ['not-found', 'not-allowed', 'file-too-large', 'unreadable-file', 'invalid-input', 'stale-form'],
+})
+
+export const listIntakes = endpoint({
+  id: 'listIntakes',
+  room: 'intake',
+  method: 'get',
+  path: '/sheets/{sheet}/intakes',
+  summary: 'Files brought to a sheet, newest first',
+  access: { to: 'members', roles },
+  params: sheetParams,
+  query: nothing,
+  body: nothing,
+  answer: z.array(intakeSchema),
+  problems: ['not-found'],
+})
+
+export const getIntake = endpoint({
+  id: 'getIntake',
+  room: 'intake',
+  method: 'get',
+  path: '/sheets/{sheet}/intakes/{intake}',
+  summary: 'A file brought to a sheet',
+  access: { to: 'members', roles },
+  params: intakeParams,
+  query: nothing,
+  body: nothing,
+  answer: intakeSchema,
+  problems: ['not-found'],
+})
+
+export const previewIntake = endpoint({
+  id: 'previewIntake',
+  room: 'intake',
+  method: 'post',
+  path: '/sheets/{sheet}/intakes/{intake}/preview',
+  summary: 'What a mapping would take in and refuse; changes nothing',
+  access: { to: 'members', roles: writers },
+  params: intakeParams,
+  query: nothing,
+  body: z.strictObject({ mapping: mappingSchema }),
+  answer: previewSchema,
+  problems: ['invalid-input', 'not-found', 'not-allowed', 'stale-form'],
+})
+
+export const takeInIntake = endpoint({
+  id: 'takeInIntake',
+  room: 'intake',
+  method: 'post',
+  path: '/sheets/{sheet}/intakes/{intake}/items',
+  summary: 'Take a file in as one ledger entry',
+  access: { to: 'members', roles: writers },
+  params: intakeParams,
+  query: nothing,
+  body: z.strictObject({ mapping: mappingSchema, message: z.string().trim().max(500).default('') }),
+  answer: z.strictObject({
+    revision: z.number().int(),
+    entry: ledgerEntrySchema,
+    accepted: z.number().int(),
+    refused: z.number().int(),
+  }),
+  status: 201,
+  problems: [
+    'invalid-input',
+    'not-found',
+    'not-allowed',
+    'wrong-state',
+    'outside-sheet',
+    'nothing-to-take-in',
+    'stale-form',
+  ],
+})
+
+export const discardIntake = endpoint({
+  id: 'discardIntake',
+  room: 'intake',
+  method: 'delete',
+  path: '/sheets/{sheet}/intakes/{intake}',
+  summary: 'Put a file aside without taking it in',
+  access: { to: 'members', roles: writers },
+  params: intakeParams,
+  query: nothing,
+  body: nothing,
+  answer: empty,
+  status: 204,
+  problems: ['not-found', 'not-allowed', 'wrong-state', 'stale-form'],
+})
+
+export const getIntakeFile = endpoint({
+  id: 'getIntakeFile',
+  room: 'intake',
+  method: 'get',
+  path: '/sheets/{sheet}/intakes/{intake}/file',
+  summary: 'The file as it was brought, byte for byte',
+  access: { to: 'members', roles },
+  params: intakeParams,
+  query: nothing,
+  body: nothing,
+  answer: z.any(),
+  form: 'download',
+  problems: ['not-found'],
+})

@@ -1,0 +1,62 @@
+import { z } from 'zod'
+import { locationConfidences } from '../items/confidence'
+import { faultTypes, foldForms, otherLineTypes } from '../items/lines'
+import { attitudeConventions, northReferences, planeTypes } from '../items/points'
+
+/** What one value of the type column (or every line of a file) becomes. */
+export const lineTargetSchema = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('contact') }),
+  z.strictObject({ kind: z.literal('fault'), type: z.enum(faultTypes) }),
+  z.strictObject({ kind: z.literal('axial-trace'), form: z.enum(foldForms) }),
+  z.strictObject({ kind: z.literal('other-line'), type: z.enum(otherLineTypes) }),
+  z.strictObject({ kind: z.literal('leave-out') }),
+])
+export type LineTarget = z.infer<typeof lineTargetSchema>
+
+/** What one value of the type column (or every point of a file) becomes. */
+export const pointTargetSchema = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('attitude'), type: z.enum(planeTypes), overturned: z.boolean() }),
+  z.strictObject({ kind: z.literal('station') }),
+  z.strictObject({ kind: z.literal('leave-out') }),
+])
+export type PointTarget = z.infer<typeof pointTargetSchema>
+
+const column = z.string().max(500).nullable()
+
+/** How the attributes of a file become ours. Columns are named as in the file; null means that there is none. */
+export const mappingSchema = z
+  .strictObject({
+    lines: z.strictObject({
+      /** Column that says what a line is. */
+      typeColumn: column,
+      /** Value of the type column → what it becomes; '' stands for a missing value. */
+      types: z.record(z.string(), lineTargetSchema),
+      /** What lines become whose value is not in `types`, or all if there is no type column. */
+      otherwise: lineTargetSchema,
+      confidenceColumn: column,
+      /** Value of the confidence column → ours; a value that is missing here is refused. */
+      confidences: z.record(z.string(), z.enum(locationConfidences)),
+      nameColumn: column,
+      plungeColumn: column,
+      trendColumn: column,
+      noteColumn: column,
+    }),
+    points: z.strictObject({
+      typeColumn: column,
+      types: z.record(z.string(), pointTargetSchema),
+      otherwise: pointTargetSchema,
+      /** One column with the whole reading as text (`N45E 40SE`, `045/40`), or separate ones below. */
+      readingColumn: column,
+      /** Column with strike or dip direction, as `convention` says. */
+      azimuthColumn: column,
+      dipColumn: column,
+      convention: z.enum(attitudeConventions),
+      northReference: z.enum(northReferences),
+      /** Degrees, east positive; needed where the reference is magnetic. */
+      declination: z.number().min(-180).max(180).nullable(),
+      stationColumn: column,
+      noteColumn: column,
+    }),
+  })
+  .meta({ id: 'IntakeMapping' })
+export type Mapping = z.infer<typeof mappingSchema>

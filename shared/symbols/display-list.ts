@@ -1,0 +1,60 @@
+import type { Degrees, Millimetres, MM } from '../units'
+
+/** Ink names; `shared/symbols/ink.ts` says their colours. Unit fills carry their own colour. */
+export type Ink = 'black' | 'fold' | 'frame' | 'quiet' | 'paper' | 'selection' | `#${string}`
+
+/** One step of a path, millimetres. Curves are cubic, absolute. */
+export type PathStep =
+  | readonly ['move', x: Millimetres, y: Millimetres]
+  | readonly ['line', x: Millimetres, y: Millimetres]
+  | readonly [
+      'curve',
+      x1: Millimetres,
+      y1: Millimetres,
+      x2: Millimetres,
+      y2: Millimetres,
+      x: Millimetres,
+      y: Millimetres,
+    ]
+  | readonly ['close']
+export type Path = readonly PathStep[]
+
+export interface StrokeMark {
+  mark: 'stroke'
+  path: Path
+  width: Millimetres
+  ink: Ink
+  cap?: 'butt' | 'round'
+  /** Lengths drawn and left out in turn. The interpreter cuts them so that a line starts and ends in a dash. */
+  dash?: readonly Millimetres[]
+}
+
+export interface FillMark {
+  mark: 'fill'
+  path: Path
+  ink: Ink
+  /** 0–1; 1 unless given. */
+  opacity?: number
+}
+
+export interface TextMark {
+  mark: 'text'
+  text: string
+  /** Anchor: the middle of the text's height, and its left edge, middle or right edge as `align` says. */
+  at: MM
+  /** Em size. */
+  size: Millimetres
+  weight: 400 | 700 | 900
+  ink: Ink
+  align: 'start' | 'middle' | 'end'
+  /** Turn of the text's base line, degrees clockwise from the page's right; numerals keep 0. */
+  turn?: Degrees
+  /** Width of a paper-coloured outline beneath the text, so that it reads on any fill. */
+  halo?: Millimetres
+}
+
+export type Mark = StrokeMark | FillMark | TextMark
+
+/** What a definition turns an item and its sheet into: plain numbers in page millimetres, x right, y up. It can be
+ *  cached, compared, posted to a worker and drawn by every surface. Marks are drawn in order. */
+export type DisplayList = readonly Mark[]
