@@ -8,8 +8,9 @@ export interface Box {
   height: Millimetres
 }
 
-/** White edges around the map face: room for grid figures, and for the scale bar below. */
-export const EDGE = { left: 18, top: 18, bottom: 30, gutter: 14, right: 14 } as const
+/** White edges around the map face: room for its figures (latitudes on the right are the widest), and for the scale
+ *  bar below. */
+export const EDGE = { left: 18, top: 18, bottom: 36, gutter: 22, right: 14 } as const
 /** Narrowest column that a legend can be read in. */
 export const LEGEND_WIDTH: Millimetres = 110
 

@@ -47,6 +47,8 @@ export interface TextMark {
   weight: 400 | 700 | 900
   ink: Ink
   align: 'start' | 'middle' | 'end'
+  /** Space added after each letter, for tracked capitals; 0 unless given. */
+  tracking?: Millimetres
   /** Turn of the text's base line, degrees clockwise from the page's right; numerals keep 0. */
   turn?: Degrees
   /** Width of a paper-coloured outline beneath the text, so that it reads on any fill. */
