@@ -1,0 +1,22 @@
+import type { UnitProperties } from '../items/legend'
+import { labelReadsOn } from './colours'
+
+/** A unit as the legend's checks see it. */
+export interface LegendUnit {
+  id: string
+  properties: UnitProperties
+}
+
+/** What is doubtful about a unit beside the others, as plain sentences; an empty list if nothing is. Warnings never
+ *  stop anyone: two units may share a colour for a while. */
+export function unitWarnings(unit: LegendUnit, units: readonly LegendUnit[]): string[] {
+  const others = units.filter((other) => other.id !== unit.id)
+  const { label, colour } = unit.properties
+  const sameLabel = others.find((other) => other.properties.label === label)
+  const sameColour = others.find((other) => other.properties.colour === colour)
+  return [
+    sameLabel && `${sameLabel.properties.name} carries the label ${label} too.`,
+    sameColour && `${sameColour.properties.name} has this colour too.`,
+    !labelReadsOn(colour) && 'The label is hard to read on this colour; choose a lighter one.',
+  ].filter((warning) => typeof warning === 'string')
+}
