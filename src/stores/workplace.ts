@@ -1,0 +1,124 @@
+import { defineStore } from 'pinia'
+import { ref, shallowRef } from 'vue'
+import type { LegendEntry } from '@shared/symbols/legend-entries'
+import type { XY } from '@shared/units'
+
+/** Instruments of the workplace; `draw` draws with what is picked in the legend margin. */
+export type Tool = 'select' | 'draw' | 'vertices' | 'measure'
+
+/** What one draws with: a legend entry, or the label of a unit. */
+export type DrawWith = LegendEntry | { unit: string }
+
+export const isUnitPen = (pen: DrawWith): pen is { unit: string } => 'unit' in pen
+
+/** Where to move the view: to some items, to the whole page, or to a place at a percentage of print size. */
+export type ViewRequest =
+  { to: 'items'; ids: readonly string[] } | { to: 'page' } | { to: 'place'; at: XY; percent: number }
+
+/** What is going on in the workplace just now: instrument, pen, selection, what is hovered. Nothing here is stored. */
+export const useWorkplaceStore = defineStore('workplace', () => {
+  const tool = ref<Tool>('select')
+  const drawWith = shallowRef<DrawWith | null>(null)
+  const selected = shallowRef<readonly string[]>([])
+  /** Items under the pointer, or of the legend row under it. */
+  const hovered = shallowRef<readonly string[]>([])
+  /** Legend entry, or unit, of what is under the pointer on the map or in the margin. */
+  const hoveredEntry = ref<string | null>(null)
+  /** Entries and units that are not drawn on the map now. */
+  const hiddenEntries = ref<ReadonlySet<string>>(new Set())
+  const snapping = ref(true)
+  /** Symbols above 100 %: grow with the sheet (print size), or stay as at 100 % (screen size). */
+  const symbolSize = ref<'print' | 'screen'>('print')
+  /** A place was clicked for an attitude; the reading is asked for beside the map. */
+  const pendingAttitudePlace = shallowRef<XY | null>(null)
+  /** Pointer on the sheet, sheet metres; null outside. */
+  const cursor = shallowRef<XY | null>(null)
+  /** Unit under the pointer. */
+  const unitHere = ref<string | null>(null)
+  /** Scale of the view, per cent of print size. */
+  const percent = ref(100)
+  const viewRequest = shallowRef<ViewRequest | null>(null)
+  /** One plain sentence for the foot: what the instrument expects, or why it refused. */
+  const hint = ref('')
+
+  function choose(next: Tool): void {
+    tool.value = next
+    if (next !== 'draw') drawWith.value = null
+    pendingAttitudePlace.value = null
+  }
+
+  /** Picks what to draw with, or puts the pen down where the same is picked again. */
+  function draw(pen: DrawWith | null): void {
+    if (!pen || isSamePen(pen, drawWith.value)) return choose('select')
+    drawWith.value = pen
+    tool.value = 'draw'
+    pendingAttitudePlace.value = null
+    selected.value = []
+  }
+
+  function select(ids: readonly string[]): void {
+    selected.value = [...ids]
+  }
+
+  function zoomTo(ids: readonly string[]): void {
+    viewRequest.value = { to: 'items', ids: [...ids] }
+  }
+
+  function showPage(): void {
+    viewRequest.value = { to: 'page' }
+  }
+
+  function showPlace(at: XY, toPercent: number): void {
+    viewRequest.value = { to: 'place', at, percent: toPercent }
+  }
+
+  function toggleHidden(entry: string): void {
+    const next = new Set(hiddenEntries.value)
+    if (!next.delete(entry)) next.add(entry)
+    hiddenEntries.value = next
+  }
+
+  /** Back to how the workplace opens, for another sheet. */
+  function reset(): void {
+    choose('select')
+    selected.value = []
+    hovered.value = []
+    hoveredEntry.value = null
+    hiddenEntries.value = new Set()
+    viewRequest.value = null
+    cursor.value = null
+    unitHere.value = null
+    hint.value = ''
+  }
+
+  return {
+    tool,
+    drawWith,
+    selected,
+    hovered,
+    hoveredEntry,
+    hiddenEntries,
+    snapping,
+    symbolSize,
+    pendingAttitudePlace,
+    cursor,
+    unitHere,
+    percent,
+    viewRequest,
+    hint,
+    choose,
+    draw,
+    select,
+    zoomTo,
+    showPage,
+    showPlace,
+    toggleHidden,
+    reset,
+  }
+})
+
+function isSamePen(a: DrawWith, b: DrawWith | null): boolean {
+  if (!b) return false
+  if (isUnitPen(a)) return isUnitPen(b) && a.unit === b.unit
+  return !isUnitPen(b) && a.id === b.id
+}
