@@ -1,0 +1,65 @@
+import type { Mark } from '../symbols/display-list'
+import type { Millimetres } from '../units'
+import { heightOf, isSpace, type Block } from './block'
+
+/** Tolerance of heights added up, millimetres: rounding only. */
+const ROUNDING: Millimetres = 1e-6
+
+/** Sections of blocks set in columns of one height. Sections that fit a column each get one; otherwise they run on from
+ *  column to column, broken between blocks and never after a heading.
+ *  Undefined where they do not fit: nothing is ever cut. */
+export function fillColumns(
+  sections: readonly (readonly Block[])[],
+  count: number,
+  height: Millimetres,
+): Block[][] | undefined {
+  const filled = sections.filter((section) => section.length > 0)
+  const each = filled.map((section) => [...section])
+  if (each.length <= count && each.every((section) => heightOf(section) <= height + ROUNDING)) return each
+  return runOn(filled.flat(), count, height)
+}
+
+function runOn(blocks: readonly Block[], count: number, height: Millimetres): Block[][] | undefined {
+  const columns: Block[][] = [[]]
+  for (const group of keptTogether(blocks)) {
+    const column = columns.at(-1) ?? []
+    if (heightOf([...column, ...group]) <= height + ROUNDING) {
+      if (column.length > 0 || !group.every(isSpace)) column.push(...group)
+      continue
+    }
+    if (group.every(isSpace)) continue
+    const moved = group.slice(group.findIndex((block) => !isSpace(block)))
+    if (heightOf(moved) > height + ROUNDING) return undefined
+    columns.push(moved)
+  }
+  return columns.length <= count ? columns : undefined
+}
+
+/** Blocks with the headings that must not be parted from them. */
+function keptTogether(blocks: readonly Block[]): Block[][] {
+  const groups: Block[][] = []
+  let open: Block[] = []
+  for (const block of blocks) {
+    open.push(block)
+    if (block.staysWithNext) continue
+    groups.push(open)
+    open = []
+  }
+  return open.length > 0 ? [...groups, open] : groups
+}
+
+/** Marks of columns set side by side. */
+export function drawColumns(
+  columns: readonly (readonly Block[])[],
+  at: { x: Millimetres; top: Millimetres; width: Millimetres; gutter: Millimetres },
+): Mark[] {
+  return columns.flatMap((column, index) => {
+    const x = at.x + index * (at.width + at.gutter)
+    let top = at.top
+    return column.flatMap((block) => {
+      const marks = block.draw(x, top)
+      top -= block.height
+      return marks
+    })
+  })
+}

@@ -1,0 +1,101 @@
+import type { Face } from '../api/faces'
+import type { Sheet } from '../api/sheets'
+import { sheetProjection } from '../geometry/projection'
+import type { Item, ItemKind } from '../items/item'
+import type { UnitProperties } from '../items/legend'
+import type { DisplayList } from '../symbols/display-list'
+import { drawFace } from '../symbols/draw-face'
+import { drawItem } from '../symbols/draw-item'
+import { mmPerMetreAtScale, toMm, type DrawingFrame } from '../symbols/frame'
+import { drawSheetFrame, facePath } from './graticule'
+import { closedPath } from './neatline'
+import { neatlineBounds, pageLayout } from './page-layout'
+
+/** A part of the page, drawn when asked for, so that a large sheet can be drawn a little at a time. */
+export interface SheetPart {
+  /** What is drawn, in words for a progress message. */
+  words: string
+  draw(): DisplayList
+}
+
+/** Items of one part: few enough to draw in a moment, enough that parts stay few. */
+const ITEMS_PER_PART = 500
+
+/** Kinds in the order of drawing: what must stay readable comes later. */
+const drawingOrder: readonly { kind: ItemKind; words: string }[] = [
+  { kind: 'contact', words: 'contacts' },
+  { kind: 'other-line', words: 'lines' },
+  { kind: 'fault', words: 'faults' },
+  { kind: 'axial-trace', words: 'axial traces' },
+  { kind: 'station', words: 'stations' },
+  { kind: 'attitude', words: 'attitudes' },
+  { kind: 'unit-label', words: 'unit labels' },
+]
+
+type GroundOfSheet = Pick<Sheet, 'crs' | 'neatline' | 'page' | 'scale'>
+
+/** How the ground lies on the printed page: the map face stands where the page's layout has it. */
+export function printFrame(sheet: GroundOfSheet): DrawingFrame {
+  const { face } = pageLayout(sheet)
+  const { min } = neatlineBounds(sheet.neatline)
+  const mmPerMetre = mmPerMetreAtScale(sheet.scale)
+  return {
+    origin: [min[0] - face.x / mmPerMetre, min[1] - face.y / mmPerMetre],
+    mmPerMetre,
+    convergenceAt: sheetProjection(sheet.crs.proj4).convergenceAt,
+  }
+}
+
+/** The map face in drawing order: unit areas, linework, attitudes, labels, all within the neatline; then the frame. */
+export function composeFace(
+  sheet: GroundOfSheet,
+  items: readonly Item[],
+  faces: readonly Face[],
+): SheetPart[] {
+  const frame = printFrame(sheet)
+  const clip = facePath(sheet, frame)
+  const clipped = (name: string, marks: DisplayList): DisplayList => [{ mark: 'group', name, clip, marks }]
+  const units = unitsById(items)
+  const unitOf = (id: string): UnitProperties | undefined => units.get(id)
+  return [
+    ...inParts(faces).map((some) => ({
+      words: 'unit areas',
+      draw: () =>
+        clipped(
+          'unit areas',
+          some.flatMap((face) => faceMarks(face, frame, unitOf)),
+        ),
+    })),
+    ...drawingOrder.flatMap(({ kind, words }) =>
+      inParts(items.filter((item) => item.kind === kind)).map((some) => ({
+        words,
+        draw: () =>
+          clipped(
+            words,
+            some.flatMap((item) => drawItem(item, frame, { unitOf })),
+          ),
+      })),
+    ),
+    { words: 'frame', draw: () => drawSheetFrame(sheet, sheetProjection(sheet.crs.proj4), frame) },
+  ]
+}
+
+export const unitsById = (items: readonly Item[]): Map<string, UnitProperties> =>
+  new Map(items.flatMap((item) => (item.kind === 'unit' ? [[item.id, item.properties] as const] : [])))
+
+function faceMarks(
+  face: Face,
+  frame: DrawingFrame,
+  unitOf: (id: string) => UnitProperties | undefined,
+): DisplayList {
+  const unit = face.unit === null ? undefined : unitOf(face.unit)
+  if (!unit) return []
+  const rings = face.rings.flatMap((ring) => closedPath(ring.slice(0, -1).map((xy) => toMm(frame, xy))))
+  return drawFace(rings, unit)
+}
+
+function inParts<T>(all: readonly T[]): T[][] {
+  return Array.from({ length: Math.ceil(all.length / ITEMS_PER_PART) }, (_, index) =>
+    all.slice(index * ITEMS_PER_PART, (index + 1) * ITEMS_PER_PART),
+  )
+}

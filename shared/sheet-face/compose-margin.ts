@@ -1,0 +1,163 @@
+import type { Sheet } from '../api/sheets'
+import { sheetProjection } from '../geometry/projection'
+import type { Item } from '../items/item'
+import type { SheetFaceProperties } from '../items/legend'
+import type { Mark } from '../symbols/display-list'
+import type { Millimetres, XY } from '../units'
+import { heightOf, space, stack, type Block } from './block'
+import { drawColumns, fillColumns } from './columns'
+import { unitsById } from './compose-face'
+import type { EditionStatement } from './edition-statement'
+import { northDiagram } from './north-diagram'
+import { neatlineBounds, pageLayout, type Box } from './page-layout'
+import { scaleBar } from './scale-bar'
+import { cautionBox, creditsBlock, projectionBlock } from './statements'
+import { entriesInUse, symbolsList } from './symbols-list'
+import { titleBlock } from './title-block'
+import { typeLadder, type TypeScale } from './type-scale'
+import { unitsList } from './units-list'
+
+/** Room below the neatline for corner figures, and the white edge at the page's foot. */
+const BELOW_FACE: Millimetres = 15
+const FOOT: Millimetres = 12
+const COLUMN_GUTTER: Millimetres = 12
+/** Text columns: a narrower one cannot be read, a wider one loses the eye. */
+const NARROWEST: Millimetres = 52
+const WIDEST: Millimetres = 185
+/** Narrowest column of the row of statements under the map face. */
+const STATEMENT_WIDTH: Millimetres = 62
+
+export interface SheetFaceInput {
+  sheet: Pick<Sheet, 'number' | 'title' | 'scale' | 'crs' | 'neatline' | 'page'>
+  items: readonly Item[]
+  edition: EditionStatement
+}
+
+export type MarginOutcome =
+  | { outcome: 'composed'; marks: Mark[]; type: TypeScale }
+  /** Nothing is left out to make things fit: the reason says what to do instead. */
+  | { outcome: 'does-not-fit'; reason: string }
+
+/** What a sheet prints around its map face, from its one sheet-face item. */
+export function sheetFaceOf(items: readonly Item[]): Pick<SheetFaceProperties, 'authors' | 'credit'> {
+  const item = items.find((candidate) => candidate.kind === 'sheet-face')
+  return item?.kind === 'sheet-face' ? item.properties : { authors: '', credit: '' }
+}
+
+/** Composes everything around the map face: title, units, explanation of symbols, scale, norths, projection, credits
+ *  and caution. Tries the largest type first and smaller or closer settings until all of it fits. */
+export function composeMargin(input: SheetFaceInput): MarginOutcome {
+  const layout = pageLayout(input.sheet)
+  const room = roomProblem(layout.face, layout.margin)
+  if (room !== undefined) return { outcome: 'does-not-fit', reason: room }
+  for (const type of typeLadder) {
+    const marks = setMargin(input, layout.face, layout.margin, type)
+    if (marks) return { outcome: 'composed', marks, type }
+  }
+  return { outcome: 'does-not-fit', reason: tooFull(input.items, layout.margin) }
+}
+
+function roomProblem(face: Box, margin: Box): string | undefined {
+  if (face.y < BELOW_FACE + FOOT) {
+    return `The map face is ${face.height.toFixed(0)} mm high and does not leave room below it for the scale bar. Choose a higher page.`
+  }
+  const narrowest = NARROWEST * 0.8
+  if (margin.width >= narrowest) return undefined
+  return `The page leaves ${Math.max(0, margin.width).toFixed(0)} mm beside the map face; the legend needs at least ${narrowest.toFixed(0)} mm. Choose a wider page.`
+}
+
+function tooFull(items: readonly Item[], margin: Box): string {
+  const units = unitsById(items).size
+  const symbols = entriesInUse(items).length
+  return `The legend (${units} units, ${symbols} symbols) does not fit the ${margin.width.toFixed(0)} × ${margin.height.toFixed(0)} mm beside the map face even in the smallest readable type. Choose a larger page or shorten the descriptions of units.`
+}
+
+function setMargin(input: SheetFaceInput, face: Box, margin: Box, type: TypeScale): Mark[] | undefined {
+  const below = setBelowFace(input, face, type)
+  if (!below) return undefined
+  const title = titleBlock(input.sheet, sheetFaceOf(input.items).authors, input.edition, margin.width, type)
+  const top = margin.y + margin.height
+  const columns = setColumns(
+    input,
+    { ...margin, height: margin.height - title.height },
+    type,
+    below.hasStatements ? [] : ['statements'],
+  )
+  return columns && [...title.draw(margin.x, top), ...columns, ...below.marks]
+}
+
+function setColumns(
+  { sheet, items, edition }: SheetFaceInput,
+  box: Box,
+  type: TypeScale,
+  extra: readonly 'statements'[],
+): Mark[] | undefined {
+  const units = [...unitsById(items).values()]
+  const entries = entriesInUse(items)
+  for (const count of columnCounts(box.width, type)) {
+    const width = (box.width - (count - 1) * COLUMN_GUTTER) / count
+    const statements = extra.flatMap(() =>
+      statementBlocks({ sheet, items, edition }, width, type).flatMap((block) => [
+        space(5 * type.factor),
+        block,
+      ]),
+    )
+    const sections = [unitsList(units, width, type), symbolsList(entries, width, type), statements]
+    const columns = fillColumns(sections, count, box.height)
+    if (columns) {
+      return drawColumns(columns, { x: box.x, top: box.y + box.height, width, gutter: COLUMN_GUTTER })
+    }
+  }
+  return undefined
+}
+
+/** Numbers of columns that give readable widths, fewest first. */
+function columnCounts(width: Millimetres, type: TypeScale): number[] {
+  return [1, 2, 3, 4, 5, 6].filter((count) => {
+    const each = (width - (count - 1) * COLUMN_GUTTER) / count
+    return each >= NARROWEST * type.factor && (each <= WIDEST || count === 6)
+  })
+}
+
+const statementBlocks = (
+  { sheet, items, edition }: SheetFaceInput,
+  width: Millimetres,
+  type: TypeScale,
+): Block[] => {
+  const { min, max } = neatlineBounds(sheet.neatline)
+  const centre: XY = [(min[0] + max[0]) / 2, (min[1] + max[1]) / 2]
+  const convergence = sheetProjection(sheet.crs.proj4).convergenceAt(centre)
+  return [
+    northDiagram(convergence, width, type),
+    projectionBlock(sheet.crs, width, type),
+    creditsBlock(sheetFaceOf(items), edition, width, type),
+    cautionBox(width, type),
+  ]
+}
+
+/** The scale bar under the map face and, where the page is high enough, the statements in a row below it. */
+function setBelowFace(
+  input: SheetFaceInput,
+  face: Box,
+  type: TypeScale,
+): { marks: Mark[]; hasStatements: boolean } | undefined {
+  const top = face.y - BELOW_FACE
+  const bar = scaleBar(input.sheet.scale, face.width)
+  if (bar.height > top - FOOT) return undefined
+  const scale = bar.draw(face.x, top)
+  const row = statementRow(input, face.width, type)
+  const rowTop = top - bar.height - 7 * type.factor
+  if (!row || heightOf([row]) > rowTop - FOOT) return { marks: scale, hasStatements: false }
+  return { marks: [...scale, ...row.draw(face.x, rowTop)], hasStatements: true }
+}
+
+function statementRow(input: SheetFaceInput, width: Millimetres, type: TypeScale): Block | undefined {
+  const each = (width - 3 * COLUMN_GUTTER) / 4
+  if (each < STATEMENT_WIDTH * type.factor) return undefined
+  const blocks = statementBlocks(input, each, type)
+  return {
+    height: Math.max(...blocks.map((block) => block.height)),
+    draw: (x, top) =>
+      blocks.flatMap((block, index) => stack([block]).draw(x + index * (each + COLUMN_GUTTER), top)),
+  }
+}

@@ -1,0 +1,84 @@
+import type { Mark } from '../symbols/display-list'
+import { toRadians, type Degrees, type Millimetres, type MM } from '../units'
+import { stack, paragraph, space, type Block } from './block'
+import { angleInWords } from './figures'
+import { textLines } from './text-block'
+import type { TypeScale } from './type-scale'
+
+const ARM: Millimetres = 20
+/** Least drawn angle between the two norths: a smaller one could not be told apart. */
+const LEAST_DRAWN: Degrees = 7
+
+/** Where grid north lies, in figures. */
+export function convergenceWords(convergence: Degrees): string {
+  if (Math.round(Math.abs(convergence) * 60) === 0)
+    return 'Grid north and true north agree at the centre of the sheet.'
+  return `At the centre of the sheet, grid north lies ${angleInWords(convergence)} of true north.`
+}
+
+/** True and grid north from one point with the convergence in figures. Magnetic north is not computed, and it says so.
+ *  @param convergence azimuth of grid north from true north at the sheet's centre, degrees, clockwise positive */
+export function northDiagram(convergence: Degrees, width: Millimetres, type: TypeScale): Block {
+  const drawing: Block = {
+    height: ARM + 8,
+    draw: (x, top) => arrows(convergence, [x + 14, top - ARM - 6], type),
+  }
+  return stack([
+    drawing,
+    space(1.5),
+    paragraph(
+      `${convergenceWords(convergence)} Magnetic declination is not stated. The angle is not drawn to scale.`,
+      width,
+      type.small,
+    ),
+  ])
+}
+
+function arrows(convergence: Degrees, foot: MM, type: TypeScale): Mark[] {
+  const agree = Math.round(Math.abs(convergence) * 60) === 0
+  // The frame's up is grid north; true north lies the other way round from it.
+  const drawn = agree ? 0 : -Math.sign(convergence) * Math.max(LEAST_DRAWN, Math.abs(convergence))
+  const grid = tip(foot, 0, ARM)
+  const north = tip(foot, drawn, ARM)
+  const outside = drawn < 0 ? -1 : 1
+  const label = (text: string, at: MM, side: number): Mark[] =>
+    textLines(
+      [text],
+      { x: at[0] + side, top: at[1] + 3.6, align: side < 0 ? 'end' : side > 0 ? 'start' : 'middle' },
+      { ...type.small, size: 2.4, weight: 700 },
+    )
+  return [
+    line(foot, grid),
+    ...(agree ? [] : [line(foot, north)]),
+    head(north, drawn),
+    ...label(agree ? 'true and grid north' : 'true north', north, agree ? 0 : outside),
+    ...(agree ? [] : label('grid north', grid, -outside)),
+  ]
+}
+
+const tip = ([x, y]: MM, azimuth: Degrees, length: Millimetres): MM => [
+  x + Math.sin(toRadians(azimuth)) * length,
+  y + Math.cos(toRadians(azimuth)) * length,
+]
+
+const line = (from: MM, to: MM): Mark => ({
+  mark: 'stroke',
+  path: [
+    ['move', from[0], from[1]],
+    ['line', to[0], to[1]],
+  ],
+  width: 0.2,
+  ink: 'frame',
+})
+
+/** A slim solid head at the tip of the true north line. */
+function head(at: MM, azimuth: Degrees): Mark {
+  const back = tip(at, azimuth + 180, 4)
+  const left = tip(back, azimuth - 90, 0.9)
+  const right = tip(back, azimuth + 90, 0.9)
+  return {
+    mark: 'fill',
+    path: [['move', at[0], at[1]], ['line', left[0], left[1]], ['line', right[0], right[1]], ['close']],
+    ink: 'frame',
+  }
+}

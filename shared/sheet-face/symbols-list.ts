@@ -1,0 +1,46 @@
+import type { Item } from '../items/item'
+import { drawEntry, legendEntries, legendEntryOf, type LegendEntry } from '../symbols/legend-entries'
+import type { Millimetres } from '../units'
+import { paragraph, space, type Block } from './block'
+import { place } from './place'
+import { sectionHeading } from './section-heading'
+import type { TypeScale } from './type-scale'
+
+/** Legend entries that stand on the sheet, in the order of the legend. */
+export function entriesInUse(items: Iterable<Item>): LegendEntry[] {
+  const used = new Set<string>()
+  for (const item of items) {
+    const entry = item.geometry === null ? undefined : legendEntryOf(item)
+    if (entry) used.add(entry.id)
+  }
+  return legendEntries.filter((entry) => used.has(entry.id))
+}
+
+const NOTE =
+  'Strikes and trends are azimuths from true north; numerals are dips and plunges in degrees below the horizontal.'
+
+/** The explanation of lines and points: every symbol on the map face, drawn by the definitions that draw it there. */
+export function symbolsList(entries: readonly LegendEntry[], width: Millimetres, type: TypeScale): Block[] {
+  if (entries.length === 0) return []
+  return [
+    ...sectionHeading('Lines and points', width, type),
+    ...entries.flatMap((entry) => [entryRow(entry, width, type), space(0.8 * type.factor)]),
+    space(1.6 * type.factor),
+    paragraph(NOTE, width, type.text),
+  ]
+}
+
+function entryRow(entry: LegendEntry, width: Millimetres, type: TypeScale): Block {
+  // Symbols stay at the size they have on the map; only the type around them follows the page.
+  const sample = { width: 18, height: 8 }
+  const indent = sample.width + 4 * type.factor
+  const words = paragraph(entry.title, width - indent, { ...type.text, ink: 'black' })
+  const height = Math.max(sample.height, words.height)
+  return {
+    height,
+    draw: (x, top) => [
+      ...place(drawEntry(entry, sample), x, top - (height + sample.height) / 2),
+      ...words.draw(x + indent, top - (height - words.height) / 2),
+    ],
+  }
+}

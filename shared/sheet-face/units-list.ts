@@ -1,0 +1,60 @@
+import type { UnitProperties } from '../items/legend'
+import { drawUnitSwatch } from '../symbols/legend-entries'
+import type { Millimetres } from '../units'
+import { heightOf, paragraph, space, stack, type Block } from './block'
+import { sectionHeading } from './section-heading'
+import { place } from './place'
+import type { TypeScale } from './type-scale'
+
+/** Units youngest first, under the headings of their ages. A heading comes again where an age comes again, so that the
+ *  order of the list is always the order of rank. */
+export function unitsByAge(units: readonly UnitProperties[]): { age: string; units: UnitProperties[] }[] {
+  const groups: { age: string; units: UnitProperties[] }[] = []
+  for (const unit of units.toSorted((a, b) => a.rank - b.rank)) {
+    const last = groups.at(-1)
+    if (last && last.age === unit.age) last.units.push(unit)
+    else groups.push({ age: unit.age, units: [unit] })
+  }
+  return groups
+}
+
+/** The list of units: swatch with label, name, description. */
+export function unitsList(units: readonly UnitProperties[], width: Millimetres, type: TypeScale): Block[] {
+  if (units.length === 0) return []
+  return [
+    ...sectionHeading('Units', width, type),
+    ...unitsByAge(units).flatMap((group) => [
+      ...ageHeading(group.age, width, type),
+      ...group.units.flatMap((unit) => [unitRow(unit, width, type), space(1.7 * type.factor)]),
+    ]),
+  ]
+}
+
+function ageHeading(age: string, width: Millimetres, type: TypeScale): Block[] {
+  if (age === '') return []
+  return [
+    { ...space(0.9 * type.factor), staysWithNext: true },
+    paragraph(age.toUpperCase(), width, type.age, { staysWithNext: true }),
+    { ...space(0.7 * type.factor), staysWithNext: true },
+  ]
+}
+
+function unitRow(unit: UnitProperties, width: Millimetres, type: TypeScale): Block {
+  const indent = type.swatch.width + 3 * type.factor
+  const words = [
+    paragraph(unit.name, width - indent, type.name),
+    paragraph(unit.description.trim(), width - indent, type.text),
+  ]
+  const text = stack(words)
+  const height = Math.max(type.swatch.height, heightOf(words))
+  return {
+    height,
+    draw(x, top) {
+      const lift = Math.max(0, (type.swatch.height - text.height) / 2)
+      return [
+        ...place(drawUnitSwatch(unit, type.swatch), x, top - type.swatch.height),
+        ...text.draw(x + indent, top - lift),
+      ]
+    },
+  }
+}
