@@ -1,4 +1,5 @@
 import type { Mark } from '../symbols/display-list'
+import { polyline } from '../symbols/paths'
 import type { Millimetres } from '../units'
 import { linesHeight, textLines, wrapText, type TextStyle } from './text-block'
 
@@ -41,10 +42,10 @@ export const rule = (width: Millimetres, thickness: Millimetres): Block => ({
   draw: (x, top) => [
     {
       mark: 'stroke',
-      path: [
-        ['move', x, top - thickness / 2],
-        ['line', x + width, top - thickness / 2],
-      ],
+      path: polyline([
+        [x, top - thickness / 2],
+        [x + width, top - thickness / 2],
+      ]),
       width: thickness,
       ink: 'frame',
     },

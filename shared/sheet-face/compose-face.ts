@@ -7,8 +7,8 @@ import type { DisplayList } from '../symbols/display-list'
 import { drawFace } from '../symbols/draw-face'
 import { drawItem } from '../symbols/draw-item'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '../symbols/frame'
+import { polyline } from '../symbols/paths'
 import { drawSheetFrame, facePath } from './graticule'
-import { closedPath } from './neatline'
 import { neatlineBounds, pageLayout } from './page-layout'
 
 /** A part of the page, drawn when asked for, so that a large sheet can be drawn a little at a time. */
@@ -90,7 +90,12 @@ function faceMarks(
 ): DisplayList {
   const unit = face.unit === null ? undefined : unitOf(face.unit)
   if (!unit) return []
-  const rings = face.rings.flatMap((ring) => closedPath(ring.slice(0, -1).map((xy) => toMm(frame, xy))))
+  const rings = face.rings.flatMap((ring) =>
+    polyline(
+      ring.slice(0, -1).map((xy) => toMm(frame, xy)),
+      true,
+    ),
+  )
   return drawFace(rings, unit)
 }
 

@@ -10,6 +10,7 @@ import { unitsById } from './compose-face'
 import type { EditionStatement } from './edition-statement'
 import { northDiagram } from './north-diagram'
 import { neatlineBounds, pageLayout, type Box } from './page-layout'
+import { findUnprintable } from './printable'
 import { scaleBar } from './scale-bar'
 import { cautionBox, creditsBlock, projectionBlock } from './statements'
 import { entriesInUse, symbolsList } from './symbols-list'
@@ -36,7 +37,7 @@ export interface SheetFaceInput {
 export type MarginOutcome =
   | { outcome: 'composed'; marks: Mark[]; type: TypeScale }
   /** Nothing is left out to make things fit: the reason says what to do instead. */
-  | { outcome: 'does-not-fit'; reason: string }
+  | { outcome: 'cannot-print'; reason: string }
 
 /** What a sheet prints around its map face, from its one sheet-face item. */
 export function sheetFaceOf(items: readonly Item[]): Pick<SheetFaceProperties, 'authors' | 'credit'> {
@@ -49,12 +50,12 @@ export function sheetFaceOf(items: readonly Item[]): Pick<SheetFaceProperties, '
 export function composeMargin(input: SheetFaceInput): MarginOutcome {
   const layout = pageLayout(input.sheet)
   const room = roomProblem(layout.face, layout.margin)
-  if (room !== undefined) return { outcome: 'does-not-fit', reason: room }
+  if (room !== undefined) return { outcome: 'cannot-print', reason: room }
   for (const type of typeLadder) {
     const marks = setMargin(input, layout.face, layout.margin, type)
-    if (marks) return { outcome: 'composed', marks, type }
+    if (marks) return unprintable(marks) ?? { outcome: 'composed', marks, type }
   }
-  return { outcome: 'does-not-fit', reason: tooFull(input.items, layout.margin) }
+  return { outcome: 'cannot-print', reason: tooFull(input.items, layout.margin) }
 }
 
 function roomProblem(face: Box, margin: Box): string | undefined {
@@ -64,6 +65,16 @@ function roomProblem(face: Box, margin: Box): string | undefined {
   const narrowest = NARROWEST * 0.8
   if (margin.width >= narrowest) return undefined
   return `The page leaves ${Math.max(0, margin.width).toFixed(0)} mm beside the map face; the legend needs at least ${narrowest.toFixed(0)} mm. Choose a wider page.`
+}
+
+function unprintable(marks: readonly Mark[]): MarginOutcome | undefined {
+  const found = findUnprintable(marks)
+  return (
+    found && {
+      outcome: 'cannot-print',
+      reason: `The printed type, Lato, has no “${found.character}”, which stands in “${found.text}”. Write it with other letters.`,
+    }
+  )
 }
 
 function tooFull(items: readonly Item[], margin: Box): string {

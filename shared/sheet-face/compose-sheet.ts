@@ -9,12 +9,12 @@ export type { SheetPart } from './compose-face'
 export type SheetComposition =
   | { outcome: 'composed'; page: Page; parts: SheetPart[] }
   /** The page cannot hold what must stand on it. The reason is a plain sentence; it stops a release. */
-  | { outcome: 'does-not-fit'; reason: string }
+  | { outcome: 'cannot-print'; reason: string }
 
 /** Composes the printed page of a sheet: the map face at its scale within its frame, and everything around it. */
 export function composeSheet(input: SheetFaceInput & { faces: readonly Face[] }): SheetComposition {
   const margin = composeMargin(input)
-  if (margin.outcome === 'does-not-fit') return margin
+  if (margin.outcome === 'cannot-print') return margin
   const { sheet, items, faces } = input
   return {
     outcome: 'composed',

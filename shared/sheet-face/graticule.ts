@@ -2,19 +2,12 @@ import type { SheetProjection } from '../geometry/projection'
 import type { Sheet } from '../api/sheets'
 import type { DisplayList, Mark } from '../symbols/display-list'
 import { toMm, type DrawingFrame } from '../symbols/frame'
+import { polyline } from '../symbols/paths'
 import type { Millimetres, MM, XY } from '../units'
 import { cornerFigures, kilometreFigure, latitudeFigure, longitudeFigure } from './figures'
 import { graticuleCrossings, graticuleNodes, gridCrossings, type Crossing } from './frame-ticks'
 import { graticuleInterval, gridInterval } from './intervals'
-import {
-  closedPath,
-  neatlineCorners,
-  neatlineEdges,
-  offsetRing,
-  openRing,
-  type Edge,
-  type Side,
-} from './neatline'
+import { neatlineCorners, neatlineEdges, offsetRing, openRing, type Edge, type Side } from './neatline'
 import { neatlineBounds } from './page-layout'
 
 export { facePath } from './neatline'
@@ -59,8 +52,8 @@ export function drawSheetFrame(
 function neatlines(sheet: Pick<Sheet, 'neatline'>, frame: DrawingFrame): Mark[] {
   const ring = openRing(sheet.neatline).map((xy) => toMm(frame, xy))
   return [
-    { mark: 'stroke', path: closedPath(ring), width: 0.35, ink: 'frame' },
-    { mark: 'stroke', path: closedPath(offsetRing(ring, FRAME_GAP)), width: 0.13, ink: 'frame' },
+    { mark: 'stroke', path: polyline(ring, true), width: 0.35, ink: 'frame' },
+    { mark: 'stroke', path: polyline(offsetRing(ring, FRAME_GAP), true), width: 0.13, ink: 'frame' },
   ]
 }
 
@@ -71,15 +64,7 @@ const shift = ([x, y]: MM, side: Side, distance: Millimetres): MM => [
 
 const tick = (at: MM, side: Side, from: Millimetres, to: Millimetres): Mark => {
   const [start, end] = [shift(at, side, from), shift(at, side, to)]
-  return {
-    mark: 'stroke',
-    path: [
-      ['move', start[0], start[1]],
-      ['line', end[0], end[1]],
-    ],
-    width: 0.13,
-    ink: 'frame',
-  }
+  return { mark: 'stroke', path: polyline([start, end]), width: 0.13, ink: 'frame' }
 }
 
 /** A figure outside the frame: centred above and below, set against the frame at the sides. */

@@ -1,5 +1,6 @@
 import { toMm, type DrawingFrame } from '../symbols/frame'
 import type { Path } from '../symbols/display-list'
+import { polyline } from '../symbols/paths'
 import type { Millimetres, MM, XY } from '../units'
 
 /** A side of the map face by the way its outward normal points. */
@@ -23,10 +24,12 @@ export function openRing(neatline: readonly (readonly [number, number])[]): XY[]
 /** The pieces of a neatline in order. Curved sides of degree sheets come as many short pieces. */
 export function neatlineEdges(neatline: readonly (readonly [number, number])[]): Edge[] {
   const ring = openRing(neatline)
-  return ring.map((from, index) => {
-    const to = ring[(index + 1) % ring.length] ?? from
-    return { from, to, side: sideOf(to[0] - from[0], to[1] - from[1]) }
-  })
+  return ring
+    .map((from, index) => {
+      const to = ring[(index + 1) % ring.length] ?? from
+      return { from, to, side: sideOf(to[0] - from[0], to[1] - from[1]) }
+    })
+    .filter(({ from, to }) => from[0] !== to[0] || from[1] !== to[1])
 }
 
 /** Corners of the map face: where the neatline passes from one side to another; clockwise order is not promised. */
@@ -43,15 +46,11 @@ export function neatlineCorners(edges: readonly Edge[]): { at: XY; sides: [Side,
 export const facePath = (
   sheet: { neatline: readonly (readonly [number, number])[] },
   frame: DrawingFrame,
-): Path => closedPath(openRing(sheet.neatline).map((xy) => toMm(frame, xy)))
-
-/** A closed path through points, millimetres. */
-export function closedPath(points: readonly MM[]): Path {
-  return [
-    ...points.map(([x, y], index) => [index === 0 ? 'move' : 'line', x, y] as const),
-    ['close'] as const,
-  ]
-}
+): Path =>
+  polyline(
+    openRing(sheet.neatline).map((xy) => toMm(frame, xy)),
+    true,
+  )
 
 /** A ring moved outward by a distance, corners mitred. The ring is open and counter-clockwise; sides of a map face
  *  turn gently or squarely, so that mitres stay short. */

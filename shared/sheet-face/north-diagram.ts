@@ -1,4 +1,5 @@
 import type { Mark } from '../symbols/display-list'
+import { polyline } from '../symbols/paths'
 import { toRadians, type Degrees, type Millimetres, type MM } from '../units'
 import { stack, paragraph, space, type Block } from './block'
 import { angleInWords } from './figures'
@@ -63,10 +64,7 @@ const tip = ([x, y]: MM, azimuth: Degrees, length: Millimetres): MM => [
 
 const line = (from: MM, to: MM): Mark => ({
   mark: 'stroke',
-  path: [
-    ['move', from[0], from[1]],
-    ['line', to[0], to[1]],
-  ],
+  path: polyline([from, to]),
   width: 0.2,
   ink: 'frame',
 })
@@ -78,7 +76,7 @@ function head(at: MM, azimuth: Degrees): Mark {
   const right = tip(back, azimuth + 90, 0.9)
   return {
     mark: 'fill',
-    path: [['move', at[0], at[1]], ['line', left[0], left[1]], ['line', right[0], right[1]], ['close']],
+    path: polyline([at, left, right], true),
     ink: 'frame',
   }
 }

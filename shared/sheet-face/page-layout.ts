@@ -1,12 +1,7 @@
+import type { Box } from '../geometry/box'
 import type { Millimetres, XY } from '../units'
 
-/** A rectangle on the page, millimetres from the page's lower left corner, y up. */
-export interface Box {
-  x: Millimetres
-  y: Millimetres
-  width: Millimetres
-  height: Millimetres
-}
+export type { Box } from '../geometry/box'
 
 /** White edges around the map face: room for its figures (latitudes on the right are the widest), and for the scale
  *  bar below. */

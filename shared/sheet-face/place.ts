@@ -1,4 +1,5 @@
-import type { DisplayList, Mark, Path, PathStep } from '../symbols/display-list'
+import type { DisplayList, Mark, Path } from '../symbols/display-list'
+import { mapPath } from '../symbols/paths'
 import type { Millimetres } from '../units'
 
 /** A display list moved on the page. */
@@ -21,15 +22,4 @@ function moveMark(mark: Mark, x: Millimetres, y: Millimetres): Mark {
 }
 
 const movePath = (path: Path, x: Millimetres, y: Millimetres): Path =>
-  path.map((step) => moveStep(step, x, y))
-
-function moveStep(step: PathStep, x: Millimetres, y: Millimetres): PathStep {
-  switch (step[0]) {
-    case 'close':
-      return step
-    case 'curve':
-      return ['curve', step[1] + x, step[2] + y, step[3] + x, step[4] + y, step[5] + x, step[6] + y]
-    default:
-      return [step[0], step[1] + x, step[2] + y]
-  }
-}
+  mapPath(path, (point) => [point[0] + x, point[1] + y])

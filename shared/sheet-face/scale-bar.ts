@@ -1,8 +1,9 @@
-import type { Mark, Path } from '../symbols/display-list'
+import type { Mark } from '../symbols/display-list'
 import { mmPerMetreAtScale } from '../symbols/frame'
 import type { Metres, Millimetres } from '../units'
 import type { Block } from './block'
 import { groupThousands, kilometreFigure } from './figures'
+import { rectangle } from './rectangle'
 import { gridInterval } from './intervals'
 import { textLines, type TextStyle } from './text-block'
 
@@ -77,15 +78,15 @@ function barMarks(plan: ScaleBarPlan, zero: Millimetres, bottom: Millimetres): M
   const dark = [
     ...Array.from({ length: plan.parts }, (_, index) => index)
       .filter((index) => index % 2 === 0)
-      .map((index) => box(zero - (index + 1) * part, bottom, part, BAR_HEIGHT / 2)),
+      .map((index) => rectangle(zero - (index + 1) * part, bottom, part, BAR_HEIGHT / 2)),
     ...Array.from({ length: plan.parts }, (_, index) => index)
       .filter((index) => index % 2 === 1)
-      .map((index) => box(zero - (index + 1) * part, middle, part, BAR_HEIGHT / 2)),
+      .map((index) => rectangle(zero - (index + 1) * part, middle, part, BAR_HEIGHT / 2)),
     ...Array.from({ length: plan.units }, (_, index) =>
-      box(zero + index * plan.unitMm, index % 2 === 0 ? middle : bottom, plan.unitMm, BAR_HEIGHT / 2),
+      rectangle(zero + index * plan.unitMm, index % 2 === 0 ? middle : bottom, plan.unitMm, BAR_HEIGHT / 2),
     ),
   ]
-  const whole = box(zero - plan.unitMm, bottom, plan.unitMm * (plan.units + 1), BAR_HEIGHT)
+  const whole = rectangle(zero - plan.unitMm, bottom, plan.unitMm * (plan.units + 1), BAR_HEIGHT)
   return [
     ...dark.map((path): Mark => ({ mark: 'fill', path, ink: 'frame' })),
     { mark: 'stroke', path: whole, width: 0.13, ink: 'frame' },
@@ -110,11 +111,3 @@ function barFigures(plan: ScaleBarPlan, zero: Millimetres, top: Millimetres): Ma
     ),
   ]
 }
-
-const box = (x: Millimetres, y: Millimetres, width: Millimetres, height: Millimetres): Path => [
-  ['move', x, y],
-  ['line', x + width, y],
-  ['line', x + width, y + height],
-  ['line', x, y + height],
-  ['close'],
-]

@@ -1,5 +1,6 @@
 import type { Sheet } from '../api/sheets'
 import type { SheetFaceProperties } from '../items/legend'
+import { rectangle } from './rectangle'
 import type { Millimetres } from '../units'
 import { paragraph, space, stack, type Block } from './block'
 import { CAUTION } from './caution'
@@ -66,13 +67,7 @@ export function cautionBox(width: Millimetres, type: TypeScale): Block {
     draw: (x, top) => [
       {
         mark: 'stroke',
-        path: [
-          ['move', x, top],
-          ['line', x + width, top],
-          ['line', x + width, top - height],
-          ['line', x, top - height],
-          ['close'],
-        ],
+        path: rectangle(x, top - height, width, height),
         width: 0.2,
         ink: 'frame',
       },

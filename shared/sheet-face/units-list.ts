@@ -1,4 +1,5 @@
 import type { UnitProperties } from '../items/legend'
+import { groupByAge } from '../legend/group-by-age'
 import { drawUnitSwatch } from '../symbols/legend-entries'
 import type { Millimetres } from '../units'
 import { heightOf, paragraph, space, stack, type Block } from './block'
@@ -6,26 +7,14 @@ import { sectionHeading } from './section-heading'
 import { place } from './place'
 import type { TypeScale } from './type-scale'
 
-/** Units youngest first, under the headings of their ages. A heading comes again where an age comes again, so that the
- *  order of the list is always the order of rank. */
-export function unitsByAge(units: readonly UnitProperties[]): { age: string; units: UnitProperties[] }[] {
-  const groups: { age: string; units: UnitProperties[] }[] = []
-  for (const unit of units.toSorted((a, b) => a.rank - b.rank)) {
-    const last = groups.at(-1)
-    if (last && last.age === unit.age) last.units.push(unit)
-    else groups.push({ age: unit.age, units: [unit] })
-  }
-  return groups
-}
-
 /** The list of units: swatch with label, name, description. */
 export function unitsList(units: readonly UnitProperties[], width: Millimetres, type: TypeScale): Block[] {
   if (units.length === 0) return []
   return [
     ...sectionHeading('Units', width, type),
-    ...unitsByAge(units).flatMap((group) => [
+    ...groupByAge(units.map((properties) => ({ properties }))).flatMap((group) => [
       ...ageHeading(group.age, width, type),
-      ...group.units.flatMap((unit) => [unitRow(unit, width, type), space(1.7 * type.factor)]),
+      ...group.units.flatMap((unit) => [unitRow(unit.properties, width, type), space(1.7 * type.factor)]),
     ]),
   ]
 }
