@@ -1,0 +1,41 @@
+import type { FoldForm } from '../items/lines'
+import type { AttitudeConvention } from '../items/points'
+import type { Azimuth, Degrees } from '../units'
+import { azimuthFigure, compassWords } from './compass'
+import { azimuthFor, dipDirectionOf, type Plane } from './plane'
+
+/** A dip or plunge as maps print it: two digits, a tenth only where it has one. */
+export function dipFigure(dip: Degrees): string {
+  const tenths = Math.round(dip * 10) / 10
+  return Number.isInteger(tenths) ? String(tenths).padStart(2, '0') : tenths.toFixed(1).padStart(4, '0')
+}
+
+/** A plane as the team writes it, `045/40` or `135/40`, with ` overturned` where it is; `horizontal` without a dip.
+ *  `parseAttitude` reads it back. */
+export function formatAttitude(plane: Plane, convention: AttitudeConvention): string {
+  if (plane.strike === null || plane.dip === 0) return 'horizontal'
+  const figures = `${azimuthFigure(azimuthFor(plane.strike, convention))}/${dipFigure(plane.dip)}`
+  return plane.overturned ? `${figures} overturned` : figures
+}
+
+/** A plane in words: `Strikes 045°, dips 40° toward 135° (south-east), overturned`. */
+export function describeAttitude(plane: Plane): string {
+  if (plane.strike === null || plane.dip === 0) return 'Horizontal'
+  const strike = `Strikes ${azimuthFigure(plane.strike)}°`
+  const overturned = plane.overturned ? ', overturned' : ''
+  if (plane.dip === 90) return `${strike}, vertical${overturned}`
+  const toward = dipDirectionOf(plane.strike)
+  const dip = `dips ${bareFigure(plane.dip)}° toward ${azimuthFigure(toward)}° (${compassWords(toward)})`
+  return `${strike}, ${dip}${overturned}`
+}
+
+/** A fold and its axis in words: `Anticline, plunging 21° toward 028°`; the form alone where no plunge is stated. */
+export function describeAxis(form: FoldForm, plunge: Degrees | null, trend: Azimuth | null): string {
+  const name = form.charAt(0).toUpperCase() + form.slice(1)
+  if (plunge === null || trend === null) return name
+  if (plunge === 0) return `${name}, axis horizontal, trending ${azimuthFigure(trend)}°`
+  if (plunge === 90) return `${name}, axis vertical`
+  return `${name}, plunging ${bareFigure(plunge)}° toward ${azimuthFigure(trend)}°`
+}
+
+const bareFigure = (value: Degrees): string => String(Math.round(value * 10) / 10)
