@@ -19,6 +19,7 @@ export type PathStep =
   | readonly ['close']
 export type Path = readonly PathStep[]
 
+/** A line; corners are rounded. */
 export interface StrokeMark {
   mark: 'stroke'
   path: Path
@@ -29,6 +30,7 @@ export interface StrokeMark {
   dash?: readonly Millimetres[]
 }
 
+/** An area; the even-odd rule makes an inner ring a hole whatever its winding. */
 export interface FillMark {
   mark: 'fill'
   path: Path
@@ -55,7 +57,16 @@ export interface TextMark {
   halo?: Millimetres
 }
 
-export type Mark = StrokeMark | FillMark | TextMark
+/** Marks that belong together, drawn in order and, where a clip is given, only inside it (even-odd). */
+export interface GroupMark {
+  mark: 'group'
+  /** What the group is, for surfaces that can name it: `map-face`, `linework`. */
+  name: string
+  clip?: Path
+  marks: DisplayList
+}
+
+export type Mark = StrokeMark | FillMark | TextMark | GroupMark
 
 /** What a definition turns an item and its sheet into: plain numbers in page millimetres, x right, y up. It can be
  *  cached, compared, posted to a worker and drawn by every surface. Marks are drawn in order. */
