@@ -1,19 +1,11 @@
 import { z } from 'zod'
 import { mappingSchema } from '../intake/mapping'
+import { columnSchema, proposalNoteSchema, refusalSchema } from '../intake/report'
+import { itemKinds } from '../items/item'
 import { roles } from './accounts'
-import { empty, nothing, sheetParams, timestamp } from './common'
+import { empty, nothing, personSchema, sheetParams, timestamp } from './common'
 import { endpoint } from './endpoint'
 import { ledgerEntrySchema } from './sheets'
-
-export const columnSchema = z.strictObject({
-  name: z.string(),
-  /** Up to five different values, as text. */
-  samples: z.array(z.string()),
-  /** Different values with their counts, most frequent first, at most 60; empty if there are more (numbers, names). */
-  values: z.array(z.strictObject({ value: z.string(), count: z.number().int() })),
-  filled: z.number().int(),
-})
-export type IntakeColumn = z.infer<typeof columnSchema>
 
 /** What was read from an uploaded file. */
 export const intakeSchema = z
@@ -25,6 +17,7 @@ export const intakeSchema = z
     reader: z.enum(['geojson', 'kml']),
     state: z.enum(['read', 'taken-in', 'discarded']),
     at: timestamp,
+    by: personSchema,
     records: z.number().int(),
     points: z.number().int(),
     lines: z.number().int(),
@@ -36,6 +29,7 @@ export const intakeSchema = z
     /** Anything a person should know about how the file was read. */
     notes: z.array(z.string()),
     proposal: mappingSchema,
+    proposalNotes: z.array(proposalNoteSchema),
     /** Revision that it became. */
     revision: z.number().int().nullable(),
     /** An earlier intake of the same bytes on this sheet, in words; null if there was none. */
@@ -44,24 +38,26 @@ export const intakeSchema = z
   .meta({ id: 'Intake' })
 export type Intake = z.infer<typeof intakeSchema>
 
-export const refusalSchema = z.strictObject({
-  /** Number of the record in the file, from 1. */
-  record: z.number().int(),
-  field: z.string(),
-  value: z.string(),
-  reason: z.string(),
-})
-export type Refusal = z.infer<typeof refusalSchema>
+/** Most refusals and drawn items that a preview lists; the counts are always whole. */
+export const MAX_LISTED_REFUSALS = 20_000
+export const MAX_DRAWN_ITEMS = 5000
 
 export const previewSchema = z
   .strictObject({
     accepted: z.number().int(),
     refused: z.number().int(),
-    byKind: z.array(z.strictObject({ kind: z.string(), items: z.number().int() })),
-    refusals: z.array(refusalSchema),
-    /** The first items as they would be taken in, sheet metres: at most 5000, thinned evenly. */
-    sample: z.array(z.strictObject({ kind: z.string(), geometry: z.any() })),
+    /** Of the refused, those that fall outside the neatline. */
     outside: z.number().int(),
+    /** Not refused, but left out as the mapping says. */
+    leftOut: z.number().int(),
+    byKind: z.array(z.strictObject({ kind: z.enum(itemKinds), items: z.number().int() })),
+    /** At most MAX_LISTED_REFUSALS. */
+    refusals: z.array(refusalSchema),
+    /** The first readings, as written and in words. */
+    echoes: z.array(z.strictObject({ record: z.number().int(), text: z.string(), words: z.string() })),
+    /** Items as they would lie on the sheet, to look at: at most MAX_DRAWN_ITEMS, thinned evenly; lines without the
+     *  vertices that cannot be seen at the size of a preview. Places are east, north, east, north …, whole metres. */
+    sample: z.array(z.strictObject({ kind: z.enum(itemKinds), places: z.array(z.number()) })),
   })
   .meta({ id: 'IntakePreview' })
 export type IntakePreview = z.infer<typeof previewSchema>

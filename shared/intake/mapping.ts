@@ -26,6 +26,10 @@ const column = z.string().max(500).nullable()
 /** How the attributes of a file become ours. Columns are named as in the file; null means that there is none. */
 export const mappingSchema = z
   .strictObject({
+    /** What the azimuths of the file (strikes, dip directions, trends) are counted from. */
+    northReference: z.enum(northReferences),
+    /** Degrees, east positive; needed where the reference is magnetic. */
+    declination: z.number().min(-180).max(180).nullable(),
     lines: z.strictObject({
       /** Column that says what a line is. */
       typeColumn: column,
@@ -36,6 +40,11 @@ export const mappingSchema = z
       confidenceColumn: column,
       /** Value of the confidence column → ours; a value that is missing here is refused. */
       confidences: z.record(z.string(), z.enum(locationConfidences)),
+      /** What lines become that state no confidence: no column, or no value in it. */
+      confidenceOtherwise: z.enum(locationConfidences),
+      /** Side of normal, reverse and thrust faults, looking along the line as the file has it, that is the downthrown
+       *  side or the upper plate. Files seldom say so; the person who brings it does. */
+      faultSide: z.enum(['left', 'right']),
       nameColumn: column,
       plungeColumn: column,
       trendColumn: column,
@@ -51,9 +60,6 @@ export const mappingSchema = z
       azimuthColumn: column,
       dipColumn: column,
       convention: z.enum(attitudeConventions),
-      northReference: z.enum(northReferences),
-      /** Degrees, east positive; needed where the reference is magnetic. */
-      declination: z.number().min(-180).max(180).nullable(),
       stationColumn: column,
       noteColumn: column,
     }),

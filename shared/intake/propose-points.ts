@@ -1,0 +1,180 @@
+import type { AttitudeConvention } from '../items/points'
+import { parseAttitude } from '../structure/attitude-text'
+import { columnByValues, columnNamed, isNumeric, isWordy } from './choose-column'
+import type { Mapping, PointTarget } from './mapping'
+import { readPointType, suggestPointType } from './point-words'
+import type { IntakeColumn, ProposalNote } from './report'
+
+type Points = Mapping['points']
+
+const leaveOut: PointTarget = { kind: 'leave-out' }
+
+const strikeNames = [/^strike(_(val|value|rhr|azimuth|deg))?$/, /^(strk|rhr)$/]
+const dipDirectionNames = [/^dip_?(dir|direction|azimuth|azimut|az)(_(val|value|deg))?$/, /^dd$/]
+const azimuthNames = [/^azim(ut|uth)?$/, /^(az|bearing|direction|orientation)$/]
+const dipNames = [/^dip(_?(val|value|angle|amount|deg))?$/]
+const stationNames = [/^(station|stn|site|outcrop|locality|stop)(_?(id|no|name|number))?$/, /^name$/]
+const noteNames = [/^(notes?|remarks?|comments?)$/, /^descr.*$/]
+const typeNames = [/^(point_|plane_|structure_)?type$/, /^(kind|class|category|legend.*|feature)$/]
+
+/** What the points of a file become, proposed from its columns. */
+export function proposePoints(
+  columns: readonly IntakeColumn[],
+  pointCount: number,
+): { proposed: Points; notes: ProposalNote[] } {
+  const notes: ProposalNote[] = []
+  if (pointCount === 0) return { proposed: noPoints, notes }
+  const readings = proposeReadings(columns, notes)
+  const reads = readings.readingColumn !== null || readings.dipColumn !== null
+  const type = proposeTypes(columns, reads, notes)
+  const taken = [type.typeColumn, readings.readingColumn]
+  const free = columns.filter((column) => !taken.includes(column.name))
+  return {
+    proposed: {
+      ...readings,
+      ...type,
+      stationColumn: columnNamed(free, stationNames, (column) => column.filled > 0)?.name ?? null,
+      noteColumn: columnNamed(free, noteNames, isWordy)?.name ?? null,
+    },
+    notes,
+  }
+}
+
+type Readings = Pick<Points, 'readingColumn' | 'azimuthColumn' | 'dipColumn' | 'convention'>
+
+function proposeReadings(columns: readonly IntakeColumn[], notes: ProposalNote[]): Readings {
+  const dip = columnNamed(columns, dipNames, (column) => column.filled > 0)
+  const azimuth = dip && proposeAzimuth(columns, notes)
+  if (dip && azimuth) {
+    return {
+      readingColumn: null,
+      azimuthColumn: azimuth.column.name,
+      dipColumn: dip.name,
+      convention: azimuth.convention,
+    }
+  }
+  const reading = columns.find(holdsReadings)
+  const none = { azimuthColumn: null, dipColumn: null, convention: 'strike-dip' as const }
+  if (!reading) return { readingColumn: null, ...none }
+  notes.push({
+    weight: 'reason',
+    field: 'points.readingColumn',
+    text: `“${reading.name}” holds whole readings, for example “${reading.samples[0] ?? ''}”.`,
+  })
+  if (reading.samples.some(mayBeDipDirection)) notes.push(conventionQuestion(reading.name))
+  return { readingColumn: reading.name, ...none }
+}
+
+function proposeAzimuth(
+  columns: readonly IntakeColumn[],
+  notes: ProposalNote[],
+): { column: IntakeColumn; convention: AttitudeConvention } | undefined {
+  const filled = (column: IntakeColumn) => column.filled > 0
+  const strike = columnNamed(columns, strikeNames, filled)
+  const dipDirection = columnNamed(columns, dipDirectionNames, filled)
+  const field = 'points.azimuthColumn'
+  if (strike && spansCircle(strike)) {
+    notes.push({
+      weight: 'reason',
+      field,
+      text: `“${strike.name}” is named as a strike and runs through the whole circle, so it is read by the right-hand rule.`,
+    })
+    return { column: strike, convention: 'strike-dip' }
+  }
+  if (dipDirection) {
+    notes.push({ weight: 'reason', field, text: `“${dipDirection.name}” is named as a dip direction.` })
+    return { column: dipDirection, convention: 'dip-direction-dip' }
+  }
+  if (strike) {
+    if (strike.numbers) notes.push(halfCircleQuestion(strike))
+    return { column: strike, convention: 'strike-dip' }
+  }
+  const azimuth = columnNamed(columns, azimuthNames, (column) => isNumeric(column, 0, 360))
+  if (!azimuth) return undefined
+  notes.push(conventionQuestion(azimuth.name))
+  return { column: azimuth, convention: 'strike-dip' }
+}
+
+function proposeTypes(
+  columns: readonly IntakeColumn[],
+  reads: boolean,
+  notes: ProposalNote[],
+): Pick<Points, 'typeColumn' | 'types' | 'otherwise'> {
+  const fit = columnByValues(columns, 'points', (value) => readPointType(value) !== undefined, 0.3)
+  const named = columnNamed(columns, typeNames, (column) => column.values.length > 0 && isWordy(column))
+  const column = fit?.column ?? named
+  const field = 'points.typeColumn'
+  if (!column) {
+    const otherwise: PointTarget = reads
+      ? { kind: 'attitude', type: 'bedding', overturned: false }
+      : { kind: 'station' }
+    const what = reads ? 'bedding, not overturned' : 'a station, since none has a reading'
+    notes.push({
+      weight: 'check',
+      field: 'points.otherwise',
+      text: `No column says what the points are: each would be taken as ${what}.`,
+    })
+    return { typeColumn: null, types: {}, otherwise }
+  }
+  if (fit)
+    notes.push({
+      weight: 'reason',
+      field,
+      text: `“${column.name}” says what ${fit.understood} of ${fit.stated} points are.`,
+    })
+  const values = column.values.filter(({ value, points }) => value !== '' && points > 0)
+  const strange = values.filter(({ value }) => !readPointType(value))
+  notes.push(...strange.map(({ value, points }) => strangeValue(value, points)))
+  const types = values.map(({ value }) => [value, readPointType(value) ?? leaveOut] as const)
+  return { typeColumn: column.name, types: Object.fromEntries(types), otherwise: leaveOut }
+}
+
+function strangeValue(value: string, points: number): ProposalNote {
+  const count = points === 1 ? 'one point' : `${points} points`
+  const hint = suggestPointType(value) ? ' A likely meaning is offered beside it.' : ''
+  return {
+    weight: 'check',
+    field: 'points.types',
+    text: `“${value}” (${count}) is not understood and would be left out.${hint}`,
+  }
+}
+
+/** Right-hand-rule strikes fill the circle; strikes written with either end stay within half of it. */
+const spansCircle = (column: IntakeColumn): boolean =>
+  column.numbers !== null && column.numbers.greatest > 180
+
+const halfCircleQuestion = (column: IntakeColumn): ProposalNote => ({
+  weight: 'ask',
+  field: 'points.convention',
+  text: `No strike in “${column.name}” is greater than 180°. Either all beds dip to the east and south, or the file states one end of the strike and not the side of the dip. Are these strikes by the right-hand rule?`,
+})
+
+const conventionQuestion = (name: string): ProposalNote => ({
+  weight: 'ask',
+  field: 'points.convention',
+  text: `The numbers in “${name}” may be strikes or dip directions. Which are they?`,
+})
+
+const holdsReadings = (column: IntakeColumn): boolean =>
+  column.samples.length > 0 &&
+  column.samples.every(
+    (text) => /\d\D+\d/.test(text) && parseAttitude(text, 'strike-dip').outcome === 'plane',
+  )
+
+/** `135/40` reads differently in the two conventions, `N45E 40SE` does not. */
+const mayBeDipDirection = (text: string): boolean => {
+  const reading = parseAttitude(text, 'dip-direction-dip')
+  return reading.outcome === 'plane' && /^\s*\d/.test(text)
+}
+
+const noPoints: Points = {
+  typeColumn: null,
+  types: {},
+  otherwise: leaveOut,
+  readingColumn: null,
+  azimuthColumn: null,
+  dipColumn: null,
+  convention: 'strike-dip',
+  stationColumn: null,
+  noteColumn: null,
+}
