@@ -81,6 +81,11 @@ export const problems = {
     title: 'No record can be taken in',
     todo: 'Look at the reasons given, correct the mapping or the file.',
   },
+  'cannot-print': {
+    status: 422,
+    title: 'The sheet cannot be printed as it is',
+    todo: 'Change what is named here, then submit the sheet again.',
+  },
   'too-many-requests': { status: 429, title: 'Too many tries', todo: 'Wait a little, then try again.' },
   unexpected: {
     status: 500,

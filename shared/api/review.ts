@@ -15,20 +15,14 @@ export const decisionSchema = z.strictObject({
 
 const countSchema = z.strictObject({ kind: z.enum(itemKinds), items: z.number().int() })
 
-/** What an editor hands to an approver: one revision, pinned by its digest. */
-export const submissionSchema = z
+/** What a revision holds, and how it differs from the edition before. */
+export const revisionContentsSchema = z
   .strictObject({
-    id: z.uuid(),
     revision: z.number().int(),
-    /** SHA-256 of exactly what would be released: every item at the revision. */
-    digest: z.string(),
-    submittedBy: personSchema,
-    at: timestamp,
-    message: z.string(),
     /** Revision of the edition before; 0 for a first edition. */
     since: z.number().int(),
     contents: z.array(countSchema),
-    /** Items put, changed and removed since the edition before, per kind. */
+    /** Items put, changed and removed since the edition before, per kind; kinds without any are left out. */
     differences: z.array(
       z.strictObject({
         kind: z.enum(itemKinds),
@@ -39,12 +33,29 @@ export const submissionSchema = z
     ),
     /** Everyone whose changes are in it. */
     authors: z.array(personSchema),
+    /** Ledger entries since the edition before, newest first. */
     entries: z.array(ledgerEntrySchema),
+  })
+  .meta({ id: 'RevisionContents' })
+export type RevisionContents = z.infer<typeof revisionContentsSchema>
+
+/** What an editor hands to an approver: one revision, pinned by its digest. */
+export const submissionSchema = z
+  .strictObject({
+    id: z.uuid(),
+    /** SHA-256 of exactly what would be released: the sheet and every item at the revision. */
+    digest: z.string(),
+    submittedBy: personSchema,
+    at: timestamp,
+    message: z.string(),
+    ...revisionContentsSchema.shape,
     decision: decisionSchema.nullable(),
-    /** Why you may not decide; null if you may. */
+    /** Why you may not decide or release it; null if you may. */
     obstacle: z.string().nullable(),
     /** The release job of an approved submission, once asked for. */
     job: jobSchema.nullable(),
+    /** Number of the edition that it became; null until it is released. */
+    edition: z.number().int().nullable(),
   })
   .meta({ id: 'Submission' })
 export type Submission = z.infer<typeof submissionSchema>
@@ -63,6 +74,24 @@ export const getSubmission = endpoint({
   problems: ['not-found'],
 })
 
+export const getSubmittable = endpoint({
+  id: 'getSubmittable',
+  room: 'review',
+  method: 'get',
+  path: '/sheets/{sheet}/submission/next',
+  summary: 'What a submission of the latest revision would hold',
+  access: { to: 'members', roles },
+  params: sheetParams,
+  query: nothing,
+  body: nothing,
+  answer: z.strictObject({
+    ...revisionContentsSchema.shape,
+    /** Why it cannot be submitted as it is; null if it can. */
+    obstacle: z.string().nullable(),
+  }),
+  problems: ['not-found'],
+})
+
 export const submitSheet = endpoint({
   id: 'submitSheet',
   room: 'review',
@@ -75,7 +104,7 @@ export const submitSheet = endpoint({
   body: z.strictObject({ revision: z.number().int(), message: z.string().trim().max(2000).default('') }),
   answer: submissionSchema,
   status: 201,
-  problems: ['invalid-input', 'not-found', 'not-allowed', 'wrong-state', 'stale-form'],
+  problems: ['invalid-input', 'not-found', 'not-allowed', 'wrong-state', 'cannot-print', 'stale-form'],
 })
 
 export const decideSubmission = endpoint({
@@ -106,6 +135,7 @@ export const decideSubmission = endpoint({
     'wrong-state',
     'already-decided',
     'digest-changed',
+    'cannot-print',
     'stale-form',
   ],
 })
