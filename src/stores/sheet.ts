@@ -64,8 +64,8 @@ const later = (work: () => void, delayMs: number): (() => void) => {
   return () => clearTimeout(timer)
 }
 
-const refusal = (detail: string): CommitOutcome => ({
-  outcome: 'refused',
+const refusal = (detail: string) => ({
+  outcome: 'refused' as const,
   errors: [{ item: '', pointer: '', detail }],
 })
 

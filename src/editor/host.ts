@@ -1,0 +1,28 @@
+import type { LegendEntry } from '@shared/symbols/legend-entries'
+import type { Item } from '@shared/items/item'
+import type { Degrees, XY } from '@shared/units'
+import type { ChangeDraft, EditorView } from './commands/change-draft'
+
+/** What is being drawn with: a legend entry, or a unit's label. */
+export type Pen = Pick<LegendEntry, 'kind' | 'title' | 'properties'>
+
+/** All that a gesture sees of the workplace. */
+export interface EditorHost extends EditorView {
+  selected(): readonly string[]
+  select(ids: readonly string[]): void
+  hover(ids: readonly string[]): void
+  /** Hands a finished change to the one door; answers null, or why it was refused. */
+  commit(draft: ChangeDraft): string | null
+  pen(): Pen | null
+  /** A place was chosen for an attitude; its reading is asked for elsewhere. */
+  askAttitude(at: XY): void
+  /** One plain sentence to the person. */
+  say(sentence: string): void
+  isSnapping(): boolean
+  /** Why nothing may be changed; null where it may. */
+  readOnly(): string | null
+  convergenceAt(xy: XY): Degrees
+  newId(): string
+}
+
+export type { Item }
