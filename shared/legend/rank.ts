@@ -39,3 +39,21 @@ export function placeForAge(age: string, sorted: readonly Ranked[]): number {
 
 /** Whether two ages stand under one heading. */
 export const sameAge = (a: string, b: string): boolean => a.trim().toLowerCase() === b.trim().toLowerCase()
+
+/** Ranks that put a unit at another place of the list: of that unit alone where a number lies between its new neighbours,
+ *  else of all. Ids with their new rank; empty where it stands there already.
+ *  @param sorted units by rank   @param place index that the unit shall have afterwards */
+export function ranksAfterMove(
+  sorted: readonly { id: string; properties: Ranked }[],
+  id: string,
+  place: number,
+): { id: string; rank: number }[] {
+  const moved = sorted.find((unit) => unit.id === id)
+  if (!moved || sorted.indexOf(moved) === place) return []
+  const order = sorted.filter((unit) => unit !== moved)
+  const rank = rankBetween(order[place - 1]?.properties.rank, order[place]?.properties.rank)
+  if (rank !== undefined) return [{ id, rank }]
+  order.splice(place, 0, moved)
+  const ranks = ranksInOrder(order.length)
+  return order.map((unit, index) => ({ id: unit.id, rank: ranks[index] ?? 0 }))
+}
