@@ -1,0 +1,102 @@
+import { plungeAgainstTrace } from '../structure/axial-trace'
+import type { Item, ItemOf, LineItem } from '../items/item'
+import type { UnitProperties } from '../items/legend'
+import type { MM } from '../units'
+import type { LineSymbol } from './definition'
+import { contacts } from './definitions/contacts'
+import { faults } from './definitions/faults'
+import { folds } from './definitions/folds'
+import { otherLines } from './definitions/other-lines'
+import { stationMarks, unitLabelType } from './definitions/points'
+import type { DisplayList, Mark } from './display-list'
+import { drawAttitude } from './draw-attitude'
+import { drawLine, type LineDrawing } from './draw-line'
+import { toMm, type DrawingFrame } from './frame'
+import { placeMarks } from './place-marks'
+
+/** What some items' drawings depend on besides themselves. */
+export interface DrawingContext {
+  unitOf(id: string): UnitProperties | undefined
+}
+
+/** All line symbols, in the order of the palette. */
+export const lineSymbols: readonly LineSymbol[] = [...contacts, ...faults, ...folds, ...otherLines]
+
+/** The type or form that picks a line's symbol within its kind. */
+export function variantOf(item: Pick<LineItem, 'kind' | 'properties'>): string {
+  if ('type' in item.properties) return item.properties.type
+  return 'form' in item.properties ? item.properties.form : ''
+}
+
+/** The symbol of a line item. */
+export function lineSymbolOf(item: Pick<LineItem, 'kind' | 'properties'>): LineSymbol {
+  const variant = variantOf(item)
+  const symbol = lineSymbols.find(
+    (candidate) => candidate.kind === item.kind && candidate.variant === variant,
+  )
+  if (!symbol) throw new RangeError(`There is no symbol for ${item.kind} ${variant}.`)
+  return symbol
+}
+
+/** An item as a display list, in the frame's millimetres: a line whole, a point about its place. Units and the sheet face
+ *  have no drawing of their own and give an empty list.
+ *  @param context where unit labels find their letters; a label without one is drawn `?` */
+export function drawItem(item: Item, frame: DrawingFrame, context?: DrawingContext): DisplayList {
+  switch (item.kind) {
+    case 'contact':
+    case 'fault':
+    case 'axial-trace':
+    case 'other-line':
+      return drawLineItem(item, frame)
+    case 'attitude': {
+      const place = item.geometry.coordinates
+      return drawAttitude(item.properties, toMm(frame, place), frame.convergenceAt(place))
+    }
+    case 'station': {
+      const [x, y] = toMm(frame, item.geometry.coordinates)
+      return placeMarks(stationMarks, ([px, py]) => [x + px, y + py])
+    }
+    case 'unit-label':
+      return [unitLabelMark(item, toMm(frame, item.geometry.coordinates), context)]
+    case 'unit':
+    case 'sheet-face':
+      return []
+  }
+}
+
+function drawLineItem(item: LineItem, frame: DrawingFrame): DisplayList {
+  const points = item.geometry.coordinates.map((place) => toMm(frame, place))
+  const { locationConfidence, identity } = item.properties
+  const isLeft = item.kind === 'fault' && item.properties.side === 'left'
+  const plunge = item.kind === 'axial-trace' ? plungeOf(item, frame) : undefined
+  return drawLine(lineSymbolOf(item), points, {
+    locationConfidence,
+    identity,
+    attributes: { side: isLeft ? 1 : -1 },
+    ...(plunge ? { plunge } : {}),
+  })
+}
+
+/** The arrow of an axis that plunges, by whole degrees; a horizontal axis has none. A trend that contradicts the trace
+ *  still draws at the nearer end: the contradiction is shown by the checks, not by a missing arrow. */
+function plungeOf(item: ItemOf<'axial-trace'>, frame: DrawingFrame): LineDrawing['plunge'] {
+  const { plunge, trend } = item.properties
+  if (plunge === null || trend === null || Math.round(plunge) === 0) return undefined
+  const { end } = plungeAgainstTrace(item.geometry.coordinates, trend, (place) => frame.convergenceAt(place))
+  return { degrees: plunge, end, figure: true }
+}
+
+function unitLabelMark(item: ItemOf<'unit-label'>, at: MM, context: DrawingContext | undefined): Mark {
+  const label = context?.unitOf(item.properties.unit)?.label
+  const doubt = item.properties.identity === 'questionable' ? '?' : ''
+  return {
+    mark: 'text',
+    text: label === undefined ? '?' : label + doubt,
+    at,
+    size: unitLabelType.size,
+    weight: unitLabelType.weight,
+    ink: 'black',
+    align: 'middle',
+    halo: unitLabelType.halo,
+  }
+}
