@@ -55,6 +55,15 @@ function attitudeItem(
 ): PartOutcome {
   const read = readReading(record, mapping.points)
   if (read.outcome === 'refused') return read
+  const overturned = target.overturned || read.overturned
+  if (overturned && read.strike === null) {
+    return {
+      outcome: 'refused',
+      field: 'reading',
+      value: read.text,
+      reason: 'A horizontal plane cannot be overturned.',
+    }
+  }
   const turned =
     read.strike === null
       ? null
@@ -68,7 +77,7 @@ function attitudeItem(
     type: target.type,
     strike: turned?.azimuth ?? null,
     dip: read.dip,
-    overturned: target.overturned || read.overturned,
+    overturned,
     station,
     reading: {
       text: read.text.slice(0, 200),

@@ -60,3 +60,20 @@ const plainName = (name: string): string =>
     .toLowerCase()
     .replace(/[^\p{L}\p{N}]+/gu, '_')
     .replace(/^_|_$/g, '')
+
+/** Values that are not understood, as one remark; undefined if there are none.
+ *  @param hints whether a likely meaning can be offered for a value */
+export function strangeValues(
+  strange: readonly { value: string; count: number }[],
+  { one, many }: { one: string; many: string },
+  hints: (value: string) => boolean,
+): string | undefined {
+  const [first] = strange
+  if (!first) return undefined
+  const records = strange.reduce((sum, { count }) => sum + count, 0)
+  const what = strange.length === 1 ? `“${first.value}” is` : `${strange.length} values are`
+  const hinted = strange.filter(({ value }) => hints(value)).length
+  const offer =
+    hinted === 0 ? '' : ` A likely meaning is offered beside ${hinted === strange.length ? 'each' : hinted}.`
+  return `${what} not understood and would be left out (${records} ${records === 1 ? one : many}).${offer}`
+}

@@ -8,8 +8,8 @@ import type { FilePosition } from './records'
 
 /** What intake needs to know of a sheet. */
 export interface SheetGround {
-  /** Name of the sheet's system, for example EPSG:32626. */
-  crs: string
+  /** From what to what coordinates are converted, in words. */
+  conversion: string
   projection: SheetProjection
   /** Neatline in sheet metres. */
   face: Feature<Polygon>
@@ -19,11 +19,16 @@ export interface SheetGround {
 
 type Box = readonly [west: number, south: number, east: number, north: number]
 
-/** A sheet's ground from its CRS (name and PROJ definition) and neatline, a closed ring in sheet metres. */
-export function sheetGround(crs: { name: string; proj4: string }, neatline: readonly XY[]): SheetGround {
+/** A sheet's ground from its CRS (name and PROJ definition) and neatline, a closed ring in sheet metres.
+ *  @param from what the file's coordinates were, in words */
+export function sheetGround(
+  crs: { name: string; proj4: string },
+  neatline: readonly XY[],
+  from = 'longitude and latitude (WGS 84)',
+): SheetGround {
   const ring = neatline.map(([east, north]) => [east, north])
   return {
-    crs: crs.name,
+    conversion: `${from} to ${crs.name}, to the millimetre`,
     projection: sheetProjection(crs.proj4),
     face: polygon([ring]),
     box: boxOf(neatline),
@@ -126,10 +131,7 @@ function lineConversions(
 
 function conversionsOf(positions: readonly FilePosition[], ground: SheetGround): string[] {
   const heights = positions.some((position) => position.length > 2 && position[2] !== 0)
-  return [
-    `longitude and latitude (WGS 84) to ${ground.crs}, to the millimetre`,
-    ...(heights ? ['heights dropped'] : []),
-  ]
+  return heights ? [ground.conversion, 'heights dropped'] : [ground.conversion]
 }
 
 function boxOf(line: readonly XY[]): Box {

@@ -1,5 +1,12 @@
 import type { LocationConfidence } from '../items/confidence'
-import { columnByValues, columnNamed, isNumeric, isWordy, type ValueFit } from './choose-column'
+import {
+  columnByValues,
+  columnNamed,
+  isNumeric,
+  isWordy,
+  strangeValues,
+  type ValueFit,
+} from './choose-column'
 import { isSenseless, readConfidence, readLineType, suggestLineType } from './line-words'
 import type { LineTarget, Mapping } from './mapping'
 import type { IntakeColumn, ProposalNote } from './report'
@@ -59,28 +66,26 @@ function proposeTypes(
   notes.push(typeNote(column, byValues))
   // A record without a type is refused unless a person says what it is.
   const values = column.values.filter(({ value, lines }) => value !== '' && lines > 0)
-  notes.push(...values.flatMap(({ value, lines }) => valueNotes(value, lines)))
+  notes.push(...valueNotes(values))
   const types = values.map(({ value }) => [value, readLineType(value) ?? leaveOut] as const)
   return { typeColumn: column.name, types: Object.fromEntries(types) }
 }
 
-function valueNotes(value: string, lines: number): ProposalNote[] {
+function valueNotes(values: IntakeColumn['values']): ProposalNote[] {
   const field = 'lines.types'
-  const count = lines === 1 ? 'one line' : `${lines} lines`
-  if (readLineType(value)) {
-    if (!isSenseless(value)) return []
-    return [
-      {
-        weight: 'reason',
-        field,
-        text: `“${value}” (${count}) does not say which way it slips: the type stays unspecified.`,
-      },
-    ]
-  }
-  const hint = suggestLineType(value) ? ' A likely meaning is offered beside it.' : ''
-  return [
-    { weight: 'check', field, text: `“${value}” (${count}) is not understood and would be left out.${hint}` },
-  ]
+  const given = values.map(({ value, lines }) => ({ value, count: lines }))
+  const strange = strangeValues(
+    given.filter(({ value }) => !readLineType(value)),
+    { one: 'line', many: 'lines' },
+    (value) => suggestLineType(value) !== undefined,
+  )
+  const senseless = given.filter(({ value }) => readLineType(value) && isSenseless(value))
+  const unstated = senseless.map(({ value, count }): ProposalNote => ({
+    weight: 'reason',
+    field,
+    text: `“${value}” (${count} ${count === 1 ? 'line' : 'lines'}) does not say which way it slips: the type stays unspecified.`,
+  }))
+  return strange ? [...unstated, { weight: 'check', field, text: strange }] : unstated
 }
 
 function proposeConfidence(

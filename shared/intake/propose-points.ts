@@ -1,6 +1,6 @@
 import type { AttitudeConvention } from '../items/points'
 import { parseAttitude } from '../structure/attitude-text'
-import { columnByValues, columnNamed, isNumeric, isWordy } from './choose-column'
+import { columnByValues, columnNamed, isNumeric, isWordy, strangeValues } from './choose-column'
 import type { Mapping, PointTarget } from './mapping'
 import { readPointType, suggestPointType } from './point-words'
 import type { IntakeColumn, ProposalNote } from './report'
@@ -123,20 +123,16 @@ function proposeTypes(
       text: `“${column.name}” says what ${fit.understood} of ${fit.stated} points are.`,
     })
   const values = column.values.filter(({ value, points }) => value !== '' && points > 0)
-  const strange = values.filter(({ value }) => !readPointType(value))
-  notes.push(...strange.map(({ value, points }) => strangeValue(value, points)))
+  const strange = strangeValues(
+    values
+      .filter(({ value }) => !readPointType(value))
+      .map(({ value, points }) => ({ value, count: points })),
+    { one: 'point', many: 'points' },
+    (value) => suggestPointType(value) !== undefined,
+  )
+  if (strange) notes.push({ weight: 'check', field: 'points.types', text: strange })
   const types = values.map(({ value }) => [value, readPointType(value) ?? leaveOut] as const)
   return { typeColumn: column.name, types: Object.fromEntries(types), otherwise: leaveOut }
-}
-
-function strangeValue(value: string, points: number): ProposalNote {
-  const count = points === 1 ? 'one point' : `${points} points`
-  const hint = suggestPointType(value) ? ' A likely meaning is offered beside it.' : ''
-  return {
-    weight: 'check',
-    field: 'points.types',
-    text: `“${value}” (${count}) is not understood and would be left out.${hint}`,
-  }
 }
 
 /** Right-hand-rule strikes fill the circle; strikes written with either end stay within half of it. */

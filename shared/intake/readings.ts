@@ -1,7 +1,7 @@
 import type { Reading } from '../items/points'
 import { parseAttitude } from '../structure/attitude-text'
 import { toTrueAzimuth } from '../structure/north-reference'
-import { strikeFrom } from '../structure/plane'
+import { planeFromFields } from '../structure/plane-check'
 import { normalizeAzimuth, type Azimuth, type Degrees } from '../units'
 import type { Mapping } from './mapping'
 import { parseNumber } from './numbers'
@@ -61,37 +61,26 @@ function readTwo(
   if (dip === undefined) return refused(dipColumn, dipText, 'The dip is not a number.')
   if (azimuth === undefined && azimuthText !== '')
     return refused(azimuthColumn, azimuthText, `The ${what} is not a number.`)
+  const read = planeFromFields({ azimuth: azimuth ?? null, dip, overturned: false }, mapping.convention)
   const text = `${azimuthText}/${dipText}`
-  return fromNumbers(azimuth, dip, { what, azimuthColumn, dipColumn, text, mapping })
-}
-
-interface Told {
-  what: string
-  azimuthColumn: string
-  dipColumn: string
-  text: string
-  mapping: Mapping['points']
-}
-
-function fromNumbers(azimuth: number | undefined, dip: number, told: Told): ReadingOutcome {
-  if (dip < 0 || dip > 90) return refused(told.dipColumn, String(dip), dipReason(dip))
-  if (azimuth !== undefined && (azimuth < 0 || azimuth > 360)) {
-    return refused(told.azimuthColumn, String(azimuth), `A ${told.what} lies between 0° and 360°.`)
+  if (read.outcome === 'refused') {
+    return dip >= 0 && dip <= 90
+      ? refused(azimuthColumn, azimuthText, read.reason)
+      : refused(dipColumn, dipText, read.reason)
   }
-  const { convention } = told.mapping
-  const plane = { outcome: 'plane' as const, dip, overturned: false, text: told.text, convention }
-  if (dip === 0 || azimuth === undefined) {
-    const dropped = azimuth === undefined ? [] : [`a horizontal plane has no ${told.what}: left away`]
-    return { ...plane, strike: null, conversions: dropped }
-  }
-  const turned =
-    convention === 'strike-dip' ? [] : [`strike = dip direction ${azimuth}° − 90°, right-hand rule`]
-  return { ...plane, strike: strikeFrom(azimuth, convention), conversions: turned }
+  return { ...read, text, conversions: conversionOf(azimuth, read.strike, mapping) }
 }
 
-function dipReason(dip: number): string {
-  if (dip < 0 || dip >= 180) return 'A dip lies between 0° and 90°.'
-  return `A dip lies between 0° and 90°. If an overturned bed is meant, write ${180 - dip}° toward the other side.`
+function conversionOf(
+  azimuth: number | undefined,
+  strike: number | null,
+  mapping: Mapping['points'],
+): string[] {
+  if (azimuth === undefined) return []
+  const direction = mapping.convention === 'dip-direction-dip'
+  if (strike === null)
+    return [`a horizontal plane has no ${direction ? 'dip direction' : 'strike'}: left away`]
+  return direction ? [`strike = dip direction ${azimuth}° − 90°, right-hand rule`] : []
 }
 
 const refused = (field: string, value: string, reason: string): ReadingOutcome => ({

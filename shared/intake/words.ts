@@ -39,10 +39,11 @@ export function understand<Sense>(words: readonly string[], known: Vocabulary<Se
 
 /** The words with misspellings replaced by the nearest known word, at most one slip in short words and two in long. */
 export function correctSpelling<Sense>(words: readonly string[], known: Vocabulary<Sense>): string[] {
+  const spellings = new Set([...known.keys()].flatMap((term) => term.split(' ')))
   return words.map((word) => {
-    if (known.has(word) || word.length < 3) return word
+    if (spellings.has(word) || word.length < 3) return word
     const allowed = word.length < 6 ? 1 : 2
-    const near = [...known.keys()]
+    const near = [...spellings]
       .map((candidate) => ({ candidate, slips: slipsBetween(word, candidate) }))
       .filter(({ slips }) => slips <= allowed)
       .sort((a, b) => a.slips - b.slips)

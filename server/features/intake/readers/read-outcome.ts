@@ -1,0 +1,31 @@
+import type { IntakeRecord } from '@shared/intake/records'
+
+/** What a reader makes of a file: its records in order, or a plain sentence why it cannot. */
+export type ReadOutcome = FileRead | Unreadable
+
+export interface FileRead {
+  outcome: 'read'
+  reader: 'geojson' | 'kml'
+  records: IntakeRecord[]
+  /** What a person should know about how the file was read. */
+  notes: string[]
+}
+
+export interface Unreadable {
+  outcome: 'unreadable'
+  reason: string
+}
+
+/** The file names a coordinate system whose definition the reader needs before it can go on. */
+export interface AsksCrs {
+  outcome: 'asks-crs'
+  srid: number
+}
+
+/** A coordinate system that a file names, with its PROJ definition. */
+export interface FileCrs {
+  srid: number
+  proj4: string
+}
+
+export const unreadable = (reason: string): Unreadable => ({ outcome: 'unreadable', reason })
