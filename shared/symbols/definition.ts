@@ -43,8 +43,8 @@ export interface LineSymbol {
   title: string
   ink: Ink
   strokes: Record<LocationConfidence, LineStroke>
-  /** Drawn along the middle of the stroke, in paper colour: makes the line a double one. */
-  core?: Millimetres
+  /** Drawn along the middle of the stroke: makes the line a double one. */
+  core?: { width: Millimetres; ink: Ink }
   decoration?: Decoration
   published?: Partial<Record<LocationConfidence, Published>>
 }

@@ -8,7 +8,7 @@ import { numeralBeside } from './numeral'
 import { polyline } from './paths'
 import { placeAlong, type Stretch } from './place-along'
 import { alongDirection, placeMarks } from './place-marks'
-import { capHeight, measureText } from './text-metrics'
+import { measureText } from './text-metrics'
 
 /** Everything about a line item that its drawing depends on. */
 export interface LineDrawing {
@@ -92,7 +92,7 @@ function strokes(
   if (path.length === 0) return []
   const mark: StrokeMark = { mark: 'stroke', path, ink: symbol.ink, ...stroke }
   if (symbol.core === undefined) return [mark]
-  return [mark, { ...mark, width: symbol.core, ink: 'paper' }]
+  return [mark, { ...mark, ...symbol.core }]
 }
 
 function decorate(
@@ -143,32 +143,33 @@ function plungeFigure(
 ): Mark[] {
   if (!plunge?.figure) return []
   const [dx, dy] = outwardDirection(line, plunge.end)
-  const tip = tipOf(line, plunge.end)
-  const back = plungeHead.length * 0.6
-  const from: MM = [tip[0] - dx * back, tip[1] - dy * back]
-  const isEast = Math.abs(dy) < 1e-6 ? dx > 0 : dy > 0
-  const east: MM = isEast ? [dy, -dx] : [-dy, dx]
+  const [x, y] = tipOf(line, plunge.end)
+  const from: MM = [x - dx * FIGURE_BEHIND_TIP, y - dy * FIGURE_BEHIND_TIP]
+  const ink = [...head, traceNear(symbol, line, plunge.end)]
   const text = String(Math.round(plunge.degrees))
-  const near: Stretch =
-    plunge.end === 'end' ? [Math.max(0, line.length - 14), line.length] : [0, Math.min(14, line.length)]
-  const trace: Mark = { mark: 'stroke', path: polyline(line.slice(...near)), width: 0.45, ink: symbol.ink }
   const beside = (away: MM) =>
-    numeralBeside(
-      text,
-      { from, away, ink: [...head, trace], furthest: FURTHEST_FIGURE },
-      { ...plungeNumeral, ink: symbol.ink },
-    )
-  const first = beside(east)
-  const nearest =
-    plungeHead.halfWidth +
-    2 * plungeNumeral.gap +
-    measureText(text, plungeNumeral.size, plungeNumeral.weight) / 2 +
-    capHeight(plungeNumeral.size, plungeNumeral.weight)
-  if (distance(first.at, from) <= nearest) return [first]
-  const second = beside([-east[0], -east[1]])
-  return [distance(second.at, from) < distance(first.at, from) ? second : first]
+    numeralBeside(text, { from, away, ink, furthest: FURTHEST_FIGURE }, { ...plungeNumeral, ink: symbol.ink })
+  const rightIsEast = Math.abs(dy) < 1e-6 ? dx > 0 : dy > 0
+  const east = beside(rightIsEast ? [dy, -dx] : [-dy, dx])
+  const west = beside(rightIsEast ? [-dy, dx] : [dy, -dx])
+  const further = Math.hypot(east.at[0] - from[0], east.at[1] - from[1])
+  const nearer = Math.hypot(west.at[0] - from[0], west.at[1] - from[1])
+  return [further - nearer > WORTH_THE_OTHER_SIDE ? west : east]
 }
 
+/** From the tip back to where the figure stands beside the arrowhead. */
+const FIGURE_BEHIND_TIP: Millimetres = plungeHead.length * 0.6
 const FURTHEST_FIGURE: Millimetres = 9
+const WORTH_THE_OTHER_SIDE: Millimetres = 0.5
 
-const distance = (a: MM, b: MM): Millimetres => Math.hypot(a[0] - b[0], a[1] - b[1])
+/** The stretch of the trace that a figure at its end could meet. */
+function traceNear(symbol: LineSymbol, line: MeasuredLine, end: 'start' | 'end'): Mark {
+  const reach = Math.min(line.length, FURTHEST_FIGURE + plungeHead.length)
+  const [from, to] = end === 'end' ? [line.length - reach, line.length] : [0, reach]
+  return {
+    mark: 'stroke',
+    path: polyline(line.slice(from, to)),
+    width: symbol.strokes.certain.width,
+    ink: symbol.ink,
+  }
+}

@@ -1,12 +1,14 @@
 import type { Millimetres, MM } from '../../units'
 import type { AttitudeSymbol } from '../definition'
 import type { Mark, Path } from '../display-list'
-import { circle, halfCircleLeft, polyline } from '../paths'
+import { circle, halfCircleLeft, mapPath, polyline, turnTo } from '../paths'
 
 const STRIKE: Millimetres = 5.6
 const STROKE: Millimetres = 0.34
 const TICK: Millimetres = 1.3
 const CROSS: Millimetres = 2.2
+const BAR: Millimetres = 1.1
+const BAR_HALF: Millimetres = 0.75
 
 const line = (path: Path): Mark => ({ mark: 'stroke', path, width: STROKE, ink: 'black' })
 const outline = (path: Path): Mark => ({ mark: 'stroke', path, width: 0.28, ink: 'black' })
@@ -53,18 +55,18 @@ const triangle = (side: 1 | -1, half: Millimetres, height: Millimetres): Path =>
   )
 const solidTriangle: Head = (side) => solid(triangle(side, 0.95, 1.35))
 const openTriangle: Head = (side) => outline(triangle(side, 0.9, 1.3))
+/** A tick with a bar across its end. */
 const bar: Head = (side) =>
-  solid(
-    polyline(
-      [
-        [0, 0.8],
-        [side * 0.85, 0.8],
-        [side * 0.85, -0.8],
-        [0, -0.8],
-      ],
-      true,
-    ),
-  )
+  line([
+    ...polyline([
+      [0, 0],
+      [side * BAR, 0],
+    ]),
+    ...polyline([
+      [side * BAR, BAR_HALF],
+      [side * BAR, -BAR_HALF],
+    ]),
+  ])
 
 const HOOK: Millimetres = 0.72
 
@@ -77,12 +79,17 @@ const hook = line([
   ['line', TICK, -HOOK],
 ])
 
-const square = (half: Millimetres): MM[] => [
-  [-half, -half],
-  [half, -half],
-  [half, half],
-  [-half, half],
-]
+const crossBars = line(
+  [0, 90, 180, 270].flatMap((azimuth) =>
+    mapPath(
+      polyline([
+        [-BAR_HALF, CROSS],
+        [BAR_HALF, CROSS],
+      ]),
+      turnTo(azimuth, [0, 0]),
+    ),
+  ),
+)
 const diamond = (half: Millimetres): MM[] => [
   [0, -half],
   [half, 0],
@@ -125,7 +132,7 @@ export const attitudes: readonly AttitudeSymbol[] = [
     title: 'Joint',
     cases: {
       inclined: [strikeLine, bar(1)],
-      horizontal: [cross, solid(polyline(square(0.8), true))],
+      horizontal: [cross, crossBars],
       vertical: [strikeLine, ...bothSides(bar)],
     },
   },

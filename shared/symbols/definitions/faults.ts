@@ -97,7 +97,7 @@ function halfArrow(side: 1 | -1, along: 1 | -1): Mark[] {
       path: polyline(
         [
           [tip, y - side * 0.16],
-          [tip - along * BARB, y + side * 0.85],
+          [tip - along * BARB, y + side * 1],
           [tip - along * BARB * 0.8, y - side * 0.16],
         ],
         true,

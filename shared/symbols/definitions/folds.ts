@@ -80,8 +80,8 @@ export const folds: readonly LineSymbol[] = [
   { ...fold, variant: 'monocline', title: 'Monocline', decoration: bars },
 ]
 
-/** The arrowhead of a plunge, on the trace: solid, its back drawn in, about a third as wide as long. */
-export const plungeHead = { length: 4.4, halfWidth: 1.15, notch: 0.7 } as const
+/** The arrowhead of a plunge, on the trace: solid, its back drawn in a little, about half as wide as long. */
+export const plungeHead = { length: 4.5, halfWidth: 1.25, notch: 0.55 } as const
 
 /** The plunge arrowhead with its tip at the origin, pointing along x. */
 export const plungeHeadMarks: readonly Mark[] = [

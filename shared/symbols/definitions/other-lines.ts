@@ -42,7 +42,7 @@ export const otherLines: readonly LineSymbol[] = [
       short: [1.9, 1.1],
       dot: { size: 1.05, apart: 1.8 },
     }),
-    core: 0.6,
+    core: { width: 0.6, ink: '#d795a5' },
   },
   {
     kind: 'other-line',
