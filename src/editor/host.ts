@@ -1,10 +1,14 @@
-import type { LegendEntry } from '@shared/symbols/legend-entries'
-import type { Item } from '@shared/items/item'
+import type { ItemKind } from '@shared/items/item'
 import type { Degrees, XY } from '@shared/units'
 import type { ChangeDraft, EditorView } from './commands/change-draft'
 
 /** What is being drawn with: a legend entry, or a unit's label. */
-export type Pen = Pick<LegendEntry, 'kind' | 'title' | 'properties'>
+export interface Pen {
+  kind: ItemKind
+  title: string
+  /** What an item drawn with it starts with; the item's schema fills in the rest. */
+  properties: Readonly<Record<string, unknown>>
+}
 
 /** All that a gesture sees of the workplace. */
 export interface EditorHost extends EditorView {
@@ -24,5 +28,3 @@ export interface EditorHost extends EditorView {
   convergenceAt(xy: XY): Degrees
   newId(): string
 }
-
-export type { Item }

@@ -1,7 +1,6 @@
-import type { Edit } from '@shared/changes/change-set'
-import { editedId } from '@shared/changes/change-set'
-import { snapToGrid } from '@shared/geometry/grid'
+import { editedId, type Edit } from '@shared/changes/change-set'
 import { itemSchema, type Item } from '@shared/items/item'
+import { snapItem } from '@shared/items/snap-item'
 
 export interface EditError {
   /** Id of the item. */
@@ -9,21 +8,6 @@ export interface EditError {
   /** JSON pointer into the item, for example /properties/dip. */
   pointer: string
   detail: string
-}
-
-/** An item with its coordinates on the 1 mm grid. */
-export function snapItem(item: Item): Item {
-  if (!item.geometry) return item
-  if (item.geometry.type === 'Point') {
-    return {
-      ...item,
-      geometry: { ...item.geometry, coordinates: snapToGrid(item.geometry.coordinates) },
-    } as Item
-  }
-  return {
-    ...item,
-    geometry: { ...item.geometry, coordinates: item.geometry.coordinates.map(snapToGrid) },
-  } as Item
 }
 
 /** Edits as they may be stored: snapped, checked with the items' schemas, and on top of what is shown now. */
@@ -36,7 +20,7 @@ export function checkEdits(
     const id = editedId(edit)
     const before = current(id) ?? null
     if (!edit.after) return before ? [{ before, after: null }] : []
-    const parsed = itemSchema.safeParse(snapItem(edit.after))
+    const parsed = itemSchema.safeParse(snapItem(edit.after) ?? edit.after)
     if (parsed.success) return [{ before, after: parsed.data }]
     errors.push(
       ...parsed.error.issues.map((issue) => ({

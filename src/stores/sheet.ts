@@ -245,13 +245,8 @@ export const useSheetStore = defineStore('sheet', () => {
     return { outcome: 'done' }
   }
 
-  function put(label: string, edits: readonly Edit[]) {
-    if (!open || readOnly.value) {
-      return {
-        outcome: 'refused',
-        errors: [{ item: '', pointer: '', detail: readOnly.value ?? '' }],
-      } as const
-    }
+  function put(label: string, edits: readonly Edit[]): ReturnType<typeof checkEdits> {
+    if (!open || readOnly.value) return refusal(readOnly.value ?? 'No sheet is open.')
     const checked = checkEdits(edits, get)
     if (checked.outcome === 'refused' || checked.edits.length === 0) return checked
     const next = addEdits(batches, { base: revision, label, edits: checked.edits })

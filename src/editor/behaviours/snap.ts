@@ -2,7 +2,7 @@ import { gridDistance } from '@shared/geometry/bearings'
 import { snapToGrid } from '@shared/geometry/grid'
 import type { Metres, XY } from '@shared/units'
 import type { MapPort, SnapTarget } from '../map-port'
-import { nearestOnLine } from './nearest'
+import { nearestOnLine } from '@shared/geometry/nearest'
 
 /** Reach of snapping on screen, pixels. Vertices reach further than sides, so that a corner is never missed for its line. */
 const VERTEX_REACH_PX = 11

@@ -1,7 +1,7 @@
 import type { Edit } from '@shared/changes/change-set'
 import { isLineItem, type LineItem } from '@shared/items/item'
 import type { XY } from '@shared/units'
-import { nearestOnLine } from '../behaviours/nearest'
+import { nearestOnLine } from '@shared/geometry/nearest'
 import type { EditorView } from './change-draft'
 
 /** A place where a new line was snapped onto the side of another: the other gets a vertex there, so that both have the

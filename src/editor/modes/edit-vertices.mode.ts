@@ -1,7 +1,7 @@
 import { gridDistance } from '@shared/geometry/bearings'
 import { isLineItem, isPointItem, type LineItem, type PointItem } from '@shared/items/item'
 import type { XY } from '@shared/units'
-import { nearestOnLine, nearestVertex } from '../behaviours/nearest'
+import { nearestOnLine, nearestVertex } from '@shared/geometry/nearest'
 import { verticesAt, type VertexPlace } from '../behaviours/shared-vertices'
 import { snap, type Snapped } from '../behaviours/snap'
 import type { Drafted } from '../commands/change-draft'

@@ -1,5 +1,5 @@
-import { gridDistance } from '@shared/geometry/bearings'
-import type { Metres, XY } from '@shared/units'
+import { gridDistance } from './bearings'
+import type { Metres, XY } from '../units'
 
 /** The place of a line that is nearest to a point. */
 export interface NearestPlace {

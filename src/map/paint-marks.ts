@@ -1,0 +1,147 @@
+import { isLineItem, type LineItem, type PointItem } from '@shared/items/item'
+import { inkColour } from '@shared/symbols/ink'
+import type { XY } from '@shared/units'
+import type { Sketch } from './sketch'
+import { toPx, type ViewFrame } from './view-frame'
+
+/** What stands out on the map just now. */
+export interface Marks {
+  selected: readonly (LineItem | PointItem)[]
+  hovered: readonly (LineItem | PointItem)[]
+  sketch: Sketch | null
+  /** A place that waits for its attitude. */
+  place: XY | null
+}
+
+const SLATE = inkColour('selection')
+const PAPER = inkColour('paper')
+const FULL_TURN = 2 * Math.PI
+
+/** Draws selection, hover and sketch over the sheet. Sizes are screen pixels: these are signs to a person, not symbols.
+ *  @param symbolPx size of a symbol millimetre, px: a ring goes round the whole symbol */
+export function paintMarks(
+  context: CanvasRenderingContext2D,
+  marks: Marks,
+  { view, ratio, symbolPx }: { view: ViewFrame; ratio: number; symbolPx: number },
+): void {
+  context.setTransform(1, 0, 0, 1, 0, 0)
+  context.clearRect(0, 0, view.width * ratio, view.height * ratio)
+  context.setTransform(ratio, 0, 0, ratio, 0, 0)
+  context.strokeStyle = SLATE
+  context.lineJoin = context.lineCap = 'round'
+  for (const item of marks.hovered)
+    emphasize(context, view, item, { alpha: 0.2, halo: 7, line: 0, ring: symbolPx })
+  for (const item of marks.selected)
+    emphasize(context, view, item, { alpha: 0.3, halo: 8, line: 1.5, ring: symbolPx })
+  if (marks.place) ring(context, toPx(view, marks.place), 9, 2)
+  if (marks.sketch) paintSketch(context, view, marks.sketch)
+}
+
+interface Emphasis {
+  alpha: number
+  halo: number
+  line: number
+  ring: number
+}
+
+function emphasize(
+  context: CanvasRenderingContext2D,
+  view: ViewFrame,
+  item: LineItem | PointItem,
+  { alpha, halo, line, ring: symbolPx }: Emphasis,
+): void {
+  if (!isLineItem(item)) {
+    context.globalAlpha = line > 0 ? 1 : 0.55
+    ring(context, toPx(view, item.geometry.coordinates), 4.6 * symbolPx, line > 0 ? 2 : 1.5)
+    context.globalAlpha = 1
+    return
+  }
+  trace(context, view, item.geometry.coordinates)
+  context.globalAlpha = alpha
+  context.lineWidth = halo
+  context.stroke()
+  context.globalAlpha = 1
+  if (line === 0) return
+  context.lineWidth = line
+  context.stroke()
+}
+
+function trace(context: CanvasRenderingContext2D, view: ViewFrame, line: readonly XY[]): void {
+  context.beginPath()
+  line.forEach((vertex, index) => {
+    const [x, y] = toPx(view, vertex)
+    if (index === 0) context.moveTo(x, y)
+    else context.lineTo(x, y)
+  })
+}
+
+function ring(
+  context: CanvasRenderingContext2D,
+  [x, y]: [number, number],
+  radius: number,
+  width: number,
+): void {
+  context.beginPath()
+  context.arc(x, y, radius, 0, FULL_TURN)
+  context.lineWidth = width
+  context.stroke()
+}
+
+function paintSketch(context: CanvasRenderingContext2D, view: ViewFrame, sketch: Sketch): void {
+  context.lineWidth = 1.6
+  if (sketch.line) {
+    trace(context, view, sketch.line)
+    context.stroke()
+  }
+  if (sketch.preview) {
+    context.setLineDash([5, 4])
+    trace(context, view, sketch.preview)
+    context.stroke()
+    context.setLineDash([])
+  }
+  for (const vertex of sketch.vertices ?? []) handle(context, toPx(view, vertex.at), vertex.active)
+  if (sketch.snap) paintSnap(context, toPx(view, sketch.snap.at), sketch.snap.to)
+  if (sketch.label) paintLabel(context, toPx(view, sketch.label.at), sketch.label.text)
+}
+
+function handle(context: CanvasRenderingContext2D, [x, y]: [number, number], active: boolean): void {
+  const half = active ? 4.5 : 3
+  context.fillStyle = active ? SLATE : PAPER
+  context.lineWidth = 1.4
+  context.beginPath()
+  context.rect(x - half, y - half, 2 * half, 2 * half)
+  context.fill()
+  context.stroke()
+}
+
+/** The shape says what was caught: a square for a vertex or end, a ring for a point, a diamond for a line's side. */
+function paintSnap(
+  context: CanvasRenderingContext2D,
+  [x, y]: [number, number],
+  to: NonNullable<Sketch['snap']>['to'],
+): void {
+  context.lineWidth = 2
+  if (to === 'point') return ring(context, [x, y], 7, 2)
+  const reach = to === 'end' ? 7 : 6
+  context.beginPath()
+  if (to === 'line') {
+    context.moveTo(x, y - reach)
+    context.lineTo(x + reach, y)
+    context.lineTo(x, y + reach)
+    context.lineTo(x - reach, y)
+    context.closePath()
+  } else context.rect(x - reach, y - reach, 2 * reach, 2 * reach)
+  context.stroke()
+}
+
+function paintLabel(context: CanvasRenderingContext2D, [x, y]: [number, number], text: string): void {
+  context.font = '700 12.5px Lato, sans-serif'
+  context.textAlign = 'left'
+  context.textBaseline = 'alphabetic'
+  context.lineWidth = 4
+  context.strokeStyle = PAPER
+  context.strokeText(text, x + 12, y - 10)
+  context.fillStyle = SLATE
+  context.fillText(text, x + 12, y - 10)
+  context.strokeStyle = SLATE
+}

@@ -1,0 +1,265 @@
+import OlMap from 'ol/Map'
+import View from 'ol/View'
+import { defaults as defaultInteractions } from 'ol/interaction/defaults'
+import { easeOut } from 'ol/easing'
+import type { Face } from '@shared/api/faces'
+import type { Sheet } from '@shared/api/sheets'
+import type { SheetProjection } from '@shared/geometry/projection'
+import type { Item, LineItem, PointItem } from '@shared/items/item'
+import type { Metres, XY } from '@shared/units'
+import { itemBounds, type GroundBox } from './item-index'
+import { DOCKED_WIDTH, fitPage, pageBoxes, type PageBoxes } from './page-boxes'
+import { paintMarks, type Marks } from './paint-marks'
+import { paintSheet } from './paint-sheet'
+import { pointerOf, PointerGestures, type GestureHandlers } from './pointer-gestures'
+import { viewProjection } from './projection'
+import { Scene } from './scene'
+import { SheetLayer, viewOf } from './sheet-layer'
+import { printShare, pxPerMetreAt, symbolPxPerMm, type ViewFrame } from './view-frame'
+
+export type { GroundBox, Marks, PageBoxes, ViewFrame }
+export type { MapPointer } from './pointer-gestures'
+export type { Sketch } from './sketch'
+
+/** Farthest zooms, as shares of print size. */
+const MOST_SHARE = 40
+/** How far beyond the whole page one may zoom out. */
+const BEYOND_PAGE = 2.2
+/** How near to a line, and to a point's symbol, a click counts. */
+const LINE_REACH_PX = 7
+const POINT_REACH_MM = 3.2
+const ANIMATION_MS = 160
+
+export interface SheetMapHandlers extends GestureHandlers {
+  leave(): void
+  /** Every frame that is drawn: where the page lies now. */
+  frame(view: ViewFrame, boxes: PageBoxes): void
+  /** The view has come to rest. */
+  rest(view: ViewFrame): void
+}
+
+export interface SheetMapOptions {
+  target: HTMLElement
+  sheet: Sheet
+  projection: SheetProjection
+  handlers: SheetMapHandlers
+}
+
+/** The sheet's page on its desk, to be looked at and drawn on. */
+export class SheetMap {
+  private readonly map: OlMap
+  private readonly scene: Scene
+  private readonly sheetLayer: SheetLayer
+  private readonly marksLayer: SheetLayer
+  private marks: Marks = { selected: [], hovered: [], sketch: null, place: null }
+  private hidden = { item: (_item: Item): boolean => false, face: (_unit: string | null): boolean => false }
+  private symbols: 'print' | 'screen' = 'print'
+  private last: { view: ViewFrame; boxes: PageBoxes } | null = null
+  private fitted = false
+
+  constructor(private readonly options: SheetMapOptions) {
+    const { sheet, projection, target } = options
+    this.scene = new Scene(sheet, projection)
+    this.sheetLayer = new SheetLayer(({ context, ...request }) =>
+      paintSheet(context, this.scene, {
+        ...request,
+        symbols: this.symbols,
+        isHidden: this.hidden.item,
+        isFaceHidden: this.hidden.face,
+      }),
+    )
+    this.marksLayer = new SheetLayer(({ context, view, ratio }) =>
+      paintMarks(context, this.marks, { view, ratio, symbolPx: this.symbolPx(view) }),
+    )
+    this.map = new OlMap({
+      target,
+      controls: [],
+      interactions: defaultInteractions({
+        altShiftDragRotate: false,
+        pinchRotate: false,
+        doubleClickZoom: false,
+        shiftDragZoom: false,
+        keyboard: false,
+        zoomDuration: reducesMotion() ? 0 : ANIMATION_MS,
+      }),
+      layers: [this.sheetLayer, this.marksLayer],
+      view: new View({
+        projection: viewProjection(sheet.crs),
+        center: middle(this.scene.bounds),
+        resolution: 10,
+        minResolution: 1 / pxPerMetreAt(MOST_SHARE, sheet.scale),
+        maxResolution: this.farthestResolution(target),
+        enableRotation: false,
+        constrainResolution: false,
+        showFullExtent: true,
+      }),
+    })
+    this.listen(options.handlers)
+    void this.waitForLato()
+  }
+
+  /** The page cannot be zoomed out to a stamp. */
+  private farthestResolution(target: HTMLElement): Metres {
+    const size = { width: target.clientWidth || 1200, height: target.clientHeight || 800 }
+    return BEYOND_PAGE / fitPage(size, this.ground(), this.symbols).pxPerMetre
+  }
+
+  private listen(handlers: SheetMapHandlers): void {
+    this.map.addInteraction(new PointerGestures(handlers))
+    this.map.on('click', (event) => handlers.click(pointerOf(event)))
+    this.map.on('dblclick', (event) => handlers.doubleClick(pointerOf(event)))
+    this.map.getViewport().addEventListener('pointerleave', () => handlers.leave())
+    this.map.on('precompose', ({ frameState }) => {
+      if (!frameState) return
+      const view = viewOf(frameState)
+      this.last = { view, boxes: pageBoxes(view, this.ground(), this.symbols) }
+      handlers.frame(view, this.last.boxes)
+    })
+    this.map.on('moveend', () => {
+      if (this.last) handlers.rest(this.last.view)
+    })
+    this.map.on('change:size', () => {
+      if (!this.fitted) this.showPage(false)
+    })
+  }
+
+  /** Widths of canvas text are wrong until the faces are loaded; a canvas does not load them by itself. */
+  private async waitForLato(): Promise<void> {
+    const weights = [400, 700, 900]
+    await Promise.all(weights.map((weight) => document.fonts.load(`${weight} 12px Lato`)))
+    this.scene.forgetDrawings()
+    this.sheetLayer.touch()
+  }
+
+  private ground() {
+    return { ...this.scene.bounds, scale: this.scene.sheet.scale }
+  }
+
+  private symbolPx(view: ViewFrame): number {
+    return symbolPxPerMm(printShare(view.pxPerMetre, this.scene.sheet.scale), this.symbols)
+  }
+
+  setItems(items: readonly Item[]): void {
+    this.scene.setItems(items)
+    this.sheetLayer.touch()
+  }
+
+  setFaces(faces: readonly Face[]): void {
+    this.scene.setFaces(faces)
+    this.sheetLayer.touch()
+  }
+
+  setHidden(item: (item: Item) => boolean, face: (unit: string | null) => boolean): void {
+    this.hidden = { item, face }
+    this.sheetLayer.touch()
+  }
+
+  setSymbolSize(symbols: 'print' | 'screen'): void {
+    this.symbols = symbols
+    this.sheetLayer.touch()
+    this.marksLayer.touch()
+  }
+
+  setMarks(change: Partial<Marks>): void {
+    this.marks = { ...this.marks, ...change }
+    this.marksLayer.touch()
+  }
+
+  setCursor(cursor: string): void {
+    this.map.getViewport().style.cursor = cursor
+  }
+
+  metresPerPx(): Metres {
+    return this.map.getView().getResolution() ?? 1
+  }
+
+  /** Share of print size that the ground is shown at, per cent. */
+  percent(): number {
+    return 100 * printShare(1 / this.metresPerPx(), this.scene.sheet.scale)
+  }
+
+  /** Items at a place, the likeliest first; hidden ones are not there. */
+  pick(at: XY): (LineItem | PointItem)[] {
+    const metresPerPx = this.metresPerPx()
+    const symbolPx = symbolPxPerMm(this.percent() / 100, this.symbols)
+    return this.scene.index
+      .pick(at, { line: LINE_REACH_PX * metresPerPx, point: POINT_REACH_MM * symbolPx * metresPerPx })
+      .filter((item) => !this.hidden.item(item))
+  }
+
+  linesNear(at: XY, radius: Metres): LineItem[] {
+    return this.scene.index.linesNear(at, radius)
+  }
+
+  pointsNear(at: XY, radius: Metres): PointItem[] {
+    return this.scene.index.pointsNear(at, radius)
+  }
+
+  /** Shows the whole page. */
+  showPage(animated = true): void {
+    const [width, height] = this.map.getSize() ?? []
+    if (!width || !height) return
+    this.fitted = true
+    const { center, pxPerMetre } = fitPage({ width, height }, this.ground(), this.symbols)
+    this.go(center, pxPerMetre, animated)
+  }
+
+  /** Moves so that some ground fills the free part of the view, but no nearer than 200 %. */
+  showGround({ min, max }: GroundBox): void {
+    const [width = 1, height = 1] = this.map.getSize() ?? []
+    const free = { width: Math.max(120, width - DOCKED_WIDTH - 80), height: Math.max(120, height - 80) }
+    const fit = Math.min(
+      free.width / Math.max(1, max[0] - min[0]),
+      free.height / Math.max(1, max[1] - min[1]),
+    )
+    const pxPerMetre = Math.min(fit, pxPerMetreAt(2, this.scene.sheet.scale))
+    const [east, north] = middle({ min, max })
+    this.go([east + DOCKED_WIDTH / 2 / pxPerMetre, north], pxPerMetre, true)
+  }
+
+  showItems(items: readonly (LineItem | PointItem)[]): void {
+    const boxes = items.map(itemBounds)
+    if (boxes.length === 0) return
+    this.showGround({
+      min: [Math.min(...boxes.map(({ min }) => min[0])), Math.min(...boxes.map(({ min }) => min[1]))],
+      max: [Math.max(...boxes.map(({ max }) => max[0])), Math.max(...boxes.map(({ max }) => max[1]))],
+    })
+  }
+
+  showPlace(at: XY, percent: number): void {
+    this.fitted = true
+    this.go(at, pxPerMetreAt(percent / 100, this.scene.sheet.scale), false)
+  }
+
+  panBy(rightPx: number, downPx: number): void {
+    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
+    const step = this.metresPerPx()
+    this.go([east + rightPx * step, north - downPx * step], 1 / step, true)
+  }
+
+  zoomBy(factor: number): void {
+    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
+    this.go([east, north], factor / this.metresPerPx(), true)
+  }
+
+  private go(center: XY, pxPerMetre: number, animated: boolean): void {
+    const view = this.map.getView()
+    const resolution = 1 / pxPerMetre
+    view.cancelAnimations()
+    if (!animated || reducesMotion()) {
+      view.setCenter(center)
+      view.setResolution(resolution)
+      return
+    }
+    view.animate({ center, resolution, duration: ANIMATION_MS, easing: easeOut })
+  }
+
+  close(): void {
+    this.map.setTarget(undefined)
+    this.map.dispose()
+  }
+}
+
+const middle = ({ min, max }: GroundBox): XY => [(min[0] + max[0]) / 2, (min[1] + max[1]) / 2]
+
+const reducesMotion = (): boolean => window.matchMedia('(prefers-reduced-motion: reduce)').matches
