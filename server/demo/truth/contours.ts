@@ -1,0 +1,162 @@
+import type { Metres, XY } from '@shared/units'
+import { bisect, ontoZero, type Surface } from './vectors'
+
+/** A level line: open ones begin and end on the edge of the area, closed ones repeat their first place. */
+export type Line = XY[]
+
+/** The area that is contoured: from the origin to width and height, in square cells. */
+export interface Extent {
+  width: Metres
+  height: Metres
+  cell: Metres
+}
+
+/** A surface with its values at the corners of cells, row by row from the south-west. */
+export interface Sampled {
+  surface: Surface
+  extent: Extent
+  columns: number
+  rows: number
+  values: Float64Array
+}
+
+/** Samples a surface once, for all levels that are asked of it. */
+export function sample(surface: Surface, extent: Extent): Sampled {
+  const { width, height, cell } = extent
+  const [columns, rows] = [Math.round(width / cell), Math.round(height / cell)]
+  const values = new Float64Array((columns + 1) * (rows + 1))
+  values.forEach((_, index) => {
+    values[index] = surface([(index % (columns + 1)) * cell, Math.floor(index / (columns + 1)) * cell])
+  })
+  return { surface, extent, columns, rows, values }
+}
+
+/** Lines on which a sampled surface has a value, by marching squares, each vertex then moved onto the level exactly. Ends
+ *  lie exactly on the edges of the area. Source: common practice; the middle of a cell decides its saddle. */
+export function levelLines(sampled: Sampled, level: number): Line[] {
+  const { surface, extent, columns, rows, values } = sampled
+  const above: Surface = (xy) => surface(xy) - level
+  const grid: Grid = {
+    surface: above,
+    cell: extent.cell,
+    columns,
+    rows,
+    // A value of exactly zero would leave the level between two cells.
+    valueAt: (column, row) => (values[row * (columns + 1) + column] ?? level) - level || 1e-12,
+  }
+  const graph = new CrossingGraph()
+  for (let row = 0; row < rows; row++) {
+    for (let column = 0; column < columns; column++) {
+      for (const [from, to] of cellPairs(grid, column, row)) graph.join(from, to)
+    }
+  }
+  return graph.lines().map((line) => line.map((crossing) => placeOf(grid, crossing)))
+}
+
+interface Grid {
+  surface: Surface
+  cell: Metres
+  columns: number
+  rows: number
+  valueAt(column: number, row: number): number
+}
+
+/** A grid edge that the level passes: from a node toward east or north. */
+interface Crossing {
+  column: number
+  row: number
+  toward: 'east' | 'north'
+}
+
+const keyOf = ({ column, row, toward }: Crossing): string => `${column} ${row} ${toward}`
+
+/** Which crossings of a cell's edges the level joins. */
+function cellPairs({ valueAt, surface, cell }: Grid, column: number, row: number): [Crossing, Crossing][] {
+  const [sw, se, nw, ne] = [
+    valueAt(column, row) > 0,
+    valueAt(column + 1, row) > 0,
+    valueAt(column, row + 1) > 0,
+    valueAt(column + 1, row + 1) > 0,
+  ]
+  if (sw === se && se === ne && ne === nw) return []
+  const bottom: Crossing = { column, row, toward: 'east' }
+  const top: Crossing = { column, row: row + 1, toward: 'east' }
+  const left: Crossing = { column, row, toward: 'north' }
+  const right: Crossing = { column: column + 1, row, toward: 'north' }
+  const crossed = [
+    ...(sw !== se ? [bottom] : []),
+    ...(se !== ne ? [right] : []),
+    ...(ne !== nw ? [top] : []),
+    ...(nw !== sw ? [left] : []),
+  ]
+  const [first, second] = crossed
+  if (crossed.length === 2 && first && second) return [[first, second]]
+  if (crossed.length < 4) return []
+  const middle = surface([(column + 0.5) * cell, (row + 0.5) * cell]) > 0
+  return middle === sw
+    ? [
+        [bottom, right],
+        [top, left],
+      ]
+    : [
+        [bottom, left],
+        [top, right],
+      ]
+}
+
+/** Crossings and what they are joined to; walks them into lines. */
+class CrossingGraph {
+  private readonly nodes = new Map<string, { crossing: Crossing; joined: string[] }>()
+
+  join(from: Crossing, to: Crossing): void {
+    this.node(from).joined.push(keyOf(to))
+    this.node(to).joined.push(keyOf(from))
+  }
+
+  /** Open lines first, then closed ones, which repeat their first crossing. */
+  lines(): Crossing[][] {
+    const seen = new Set<string>()
+    const ends = [...this.nodes].filter(([, node]) => node.joined.length === 1)
+    const open = ends.flatMap(([key]) => (seen.has(key) ? [] : [this.walk(key, seen)]))
+    const closed = [...this.nodes.keys()].flatMap((key) => {
+      if (seen.has(key)) return []
+      const line = this.walk(key, seen)
+      return [[...line, ...line.slice(0, 1)]]
+    })
+    return [...open, ...closed]
+  }
+
+  private walk(start: string, seen: Set<string>): Crossing[] {
+    const line: Crossing[] = []
+    for (let key: string | undefined = start; key !== undefined;) {
+      const node = this.nodes.get(key)
+      if (!node) break
+      seen.add(key)
+      line.push(node.crossing)
+      key = node.joined.find((next) => !seen.has(next))
+    }
+    return line
+  }
+
+  private node(crossing: Crossing): { crossing: Crossing; joined: string[] } {
+    const key = keyOf(crossing)
+    const known = this.nodes.get(key) ?? { crossing, joined: [] }
+    this.nodes.set(key, known)
+    return known
+  }
+}
+
+/** The exact place of a crossing: on the edge of the area it stays on the edge, inside it moves down the slope. */
+function placeOf({ surface, cell, columns, rows, valueAt }: Grid, { column, row, toward }: Crossing): XY {
+  const [x, y] = [column * cell, row * cell]
+  const onEdge = toward === 'east' ? row === 0 || row === rows : column === 0 || column === columns
+  if (onEdge) {
+    return toward === 'east'
+      ? [bisect((at) => surface([at, y]), x, x + cell), y]
+      : [x, bisect((at) => surface([x, at]), y, y + cell)]
+  }
+  const from = valueAt(column, row)
+  const to = toward === 'east' ? valueAt(column + 1, row) : valueAt(column, row + 1)
+  const fraction = from / (from - to)
+  return ontoZero(surface, toward === 'east' ? [x + fraction * cell, y] : [x, y + fraction * cell])
+}

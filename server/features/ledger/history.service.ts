@@ -1,0 +1,108 @@
+import { isDeepStrictEqual } from 'node:util'
+import type { DataSource, EntityManager } from 'typeorm'
+import type { z } from 'zod'
+import type { Person } from '@shared/api/common'
+import type { itemVersionSchema } from '@shared/api/ledger'
+import type { LedgerEntry } from '@shared/api/sheets'
+import type { Edit } from '@shared/changes/change-set'
+import type { Item } from '@shared/items/item'
+import { problem } from '../../platform/problem'
+import { selectVersions } from './history.queries'
+import {
+  latestRevision,
+  selectAuthors,
+  selectEntries,
+  selectItemsAt,
+  selectTouchedIds,
+} from './ledger.queries'
+
+/** What has changed on a sheet since a revision. */
+export interface ChangesSince {
+  revision: number
+  put: Item[]
+  removed: string[]
+  entries: LedgerEntry[]
+}
+
+/** Reads the ledger of sheets: items at any revision, what changed between two, who wrote what. Versions never change
+ *  once written but for their end, so whatever is asked for by revision number is consistent in itself. */
+export class HistoryService {
+  constructor(private readonly dataSource: DataSource) {}
+
+  /** All items of a sheet at a revision, the latest unless given, ordered by id. */
+  async listItems(sheetId: string, revision?: number): Promise<{ revision: number; items: Item[] }> {
+    const em = this.dataSource.manager
+    const latest = await latestRevision(em, sheetId)
+    requireReached(revision ?? latest, latest, 'revision')
+    const at = revision ?? latest
+    return { revision: at, items: await this.itemsAt(em, sheetId, at) }
+  }
+
+  /** Items at a revision, ordered by id: the same revision always gives the same list. */
+  async itemsAt(em: EntityManager, sheetId: string, revision: number): Promise<Item[]> {
+    return selectItemsAt(em, sheetId, revision)
+  }
+
+  /** Items as they now are that were put since a revision, ids that are gone, and the entries that did it. */
+  async listChanges(sheetId: string, since: number): Promise<ChangesSince> {
+    const em = this.dataSource.manager
+    const revision = await latestRevision(em, sheetId)
+    requireReached(since, revision, 'since')
+    const touched = await selectTouchedIds(em, sheetId, since, revision)
+    const put = await selectItemsAt(em, sheetId, revision, touched)
+    const held = new Set(put.map((item) => item.id))
+    const entries = await selectEntries(em, sheetId, { above: since, below: revision + 1 })
+    return { revision, put, removed: touched.filter((id) => !held.has(id)), entries }
+  }
+
+  /** What differs between two revisions: items before and after, ordered by id. An item changed and changed back does not. */
+  async differences(em: EntityManager, sheetId: string, from: number, to: number): Promise<Edit[]> {
+    const touched = await selectTouchedIds(em, sheetId, from, to)
+    const before = new Map((await selectItemsAt(em, sheetId, from, touched)).map((item) => [item.id, item]))
+    const after = new Map((await selectItemsAt(em, sheetId, to, touched)).map((item) => [item.id, item]))
+    return touched
+      .map((id): Edit => ({ before: before.get(id) ?? null, after: after.get(id) ?? null }))
+      .filter((edit) => !isDeepStrictEqual(edit.before, edit.after))
+  }
+
+  /** Everyone who wrote an entry after one revision and up to another, by name. */
+  async authorsBetween(em: EntityManager, sheetId: string, from: number, to: number): Promise<Person[]> {
+    return selectAuthors(em, sheetId, from, to)
+  }
+
+  /** Entries after one revision and up to another, newest first. */
+  async entriesBetween(em: EntityManager, sheetId: string, from: number, to: number): Promise<LedgerEntry[]> {
+    return selectEntries(em, sheetId, { above: from, below: to + 1 })
+  }
+
+  /** A page of entries, newest first; `next` is what to ask for as `before`, null on the last page. */
+  async listEntries(
+    sheetId: string,
+    { before, limit }: { before?: number | undefined; limit: number },
+  ): Promise<{ entries: LedgerEntry[]; next: number | null }> {
+    const entries = await selectEntries(this.dataSource.manager, sheetId, { below: before, limit })
+    const last = entries.at(-1)
+    return { entries, next: last && last.revision > 1 ? last.revision : null }
+  }
+
+  /** Every version of one item, newest first. */
+  async listVersions(sheetId: string, itemId: string): Promise<z.infer<typeof itemVersionSchema>[]> {
+    const em = this.dataSource.manager
+    const versions = await selectVersions(em, sheetId, itemId)
+    if (versions.length === 0) throw problem('not-found', `There is no item ${itemId} on this sheet.`)
+    const oldest = versions.at(-1)?.since ?? 1
+    const entries = new Map(
+      (await selectEntries(em, sheetId, { above: oldest - 1 })).map((entry) => [entry.revision, entry]),
+    )
+    return versions.flatMap((version) => {
+      const entry = entries.get(version.since)
+      return entry ? [{ ...version, entry }] : []
+    })
+  }
+}
+
+function requireReached(revision: number, latest: number, field: string): void {
+  if (revision <= latest) return
+  const detail = `The sheet is at revision ${latest}; revision ${revision} does not exist yet.`
+  throw problem('invalid-input', detail, { errors: [{ pointer: `/${field}`, detail }] })
+}
