@@ -5,8 +5,8 @@ import { heightOf, isSpace, type Block } from './block'
 /** Tolerance of heights added up, millimetres: rounding only. */
 const ROUNDING: Millimetres = 1e-6
 
-/** Sections of blocks set in columns of one height. Sections that fit a column each get one; otherwise they run on from
- *  column to column, broken between blocks and never after a heading.
+/** Sections of blocks set in columns of one height. Whole sections are shared out so that the highest column is as low as
+ *  can be; where that does not do, they run on from column to column, broken between blocks and never after a heading.
  *  Undefined where they do not fit: nothing is ever cut. */
 export function fillColumns(
   sections: readonly (readonly Block[])[],
@@ -14,9 +14,24 @@ export function fillColumns(
   height: Millimetres,
 ): Block[][] | undefined {
   const filled = sections.filter((section) => section.length > 0)
-  const each = filled.map((section) => [...section])
-  if (each.length <= count && each.every((section) => heightOf(section) <= height + ROUNDING)) return each
+  const shared = shareOut(filled, count)
+  if (highest(shared) <= height + ROUNDING) return shared
   return runOn(filled.flat(), count, height)
+}
+
+const highest = (columns: readonly (readonly Block[])[]): Millimetres => Math.max(0, ...columns.map(heightOf))
+
+/** Neighbouring sections put together into at most `count` columns, the highest as low as can be. */
+function shareOut(sections: readonly (readonly Block[])[], count: number): Block[][] {
+  const whole = [sections.flat()]
+  if (count <= 1 || sections.length <= 1) return whole
+  return sections
+    .slice(1)
+    .map((_, index) => [
+      sections.slice(0, index + 1).flat(),
+      ...shareOut(sections.slice(index + 1), count - 1),
+    ])
+    .reduce((best, columns) => (highest(columns) < highest(best) ? columns : best), whole)
 }
 
 function runOn(blocks: readonly Block[], count: number, height: Millimetres): Block[][] | undefined {

@@ -15,7 +15,7 @@ import { scaleBar } from './scale-bar'
 import { cautionBox, creditsBlock, projectionBlock } from './statements'
 import { entriesInUse, symbolsList } from './symbols-list'
 import { titleBlock } from './title-block'
-import { typeLadder, type TypeScale } from './type-scale'
+import { typeLadder, typeScale, type TypeScale } from './type-scale'
 import { unitsList } from './units-list'
 
 /** Room below the neatline for corner figures, and the white edge at the page's foot. */
@@ -25,8 +25,9 @@ const COLUMN_GUTTER: Millimetres = 12
 /** Text columns: a narrower one cannot be read, a wider one loses the eye. */
 const NARROWEST: Millimetres = 52
 const WIDEST: Millimetres = 185
-/** Narrowest column of the row of statements under the map face. */
+/** Narrowest column of the row of statements under the map face, and their largest type. */
 const STATEMENT_WIDTH: Millimetres = 62
+const STATEMENT_FACTOR = 1.35
 
 export interface SheetFaceInput {
   sheet: Pick<Sheet, 'number' | 'title' | 'scale' | 'crs' | 'neatline' | 'page'>
@@ -156,8 +157,8 @@ function setBelowFace(
   const bar = scaleBar(input.sheet.scale, face.width)
   if (bar.height > top - FOOT) return undefined
   const scale = bar.draw(face.x, top)
-  const row = statementRow(input, face.width, type)
-  const rowTop = top - bar.height - 7 * type.factor
+  const row = statementRow(input, face.width, typeScale(Math.min(type.factor, STATEMENT_FACTOR), 1.28))
+  const rowTop = top - bar.height - 8
   if (!row || heightOf([row]) > rowTop - FOOT) return { marks: scale, hasStatements: false }
   return { marks: [...scale, ...row.draw(face.x, rowTop)], hasStatements: true }
 }

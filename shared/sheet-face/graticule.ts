@@ -18,7 +18,7 @@ const FIGURE_SIZE: Millimetres = 2.5
 const CORNER_SIZE: Millimetres = 2.1
 /** From the neatline to the middle of the figures. */
 const FIGURE_OFFSET: Millimetres = FRAME_GAP + 2.1
-const CORNER_OFFSET: Millimetres = FRAME_GAP + 4.9
+const CORNER_OFFSET: Millimetres = FRAME_GAP + 5.6
 const GRATICULE_TICK: Millimetres = 2
 const CROSS_ARM: Millimetres = 2
 /** Figures of the graticule keep this far from a corner, whose own figures say more. */

@@ -3,10 +3,13 @@ import { polyline } from '../symbols/paths'
 import { toRadians, type Degrees, type Millimetres, type MM } from '../units'
 import { stack, paragraph, space, type Block } from './block'
 import { angleInWords } from './figures'
-import { textLines } from './text-block'
+import { textLines, type TextStyle } from './text-block'
 import type { TypeScale } from './type-scale'
 
-const ARM: Millimetres = 20
+const ARM: Millimetres = 22
+/** Room above the arrows for their names, and beside the text for the whole diagram. */
+const LABEL: Millimetres = 4.5
+const ROOM: Millimetres = 30
 /** Least drawn angle between the two norths: a smaller one could not be told apart. */
 const LEAST_DRAWN: Degrees = 7
 
@@ -20,22 +23,23 @@ export function convergenceWords(convergence: Degrees): string {
 /** True and grid north from one point with the convergence in figures. Magnetic north is not computed, and it says so.
  *  @param convergence azimuth of grid north from true north at the sheet's centre, degrees, clockwise positive */
 export function northDiagram(convergence: Degrees, width: Millimetres, type: TypeScale): Block {
-  const drawing: Block = {
-    height: ARM + 8,
-    draw: (x, top) => arrows(convergence, [x + 14, top - ARM - 6], type),
+  const words = paragraph(
+    `${convergenceWords(convergence)} Magnetic declination is not stated. The angle is not drawn to scale.`,
+    width - ROOM,
+    type.small,
+  )
+  const heading = stack([paragraph('NORTH', width, type.age), space(0.8 * type.factor)])
+  return {
+    height: heading.height + Math.max(words.height, ARM + LABEL),
+    draw: (x, top) => [
+      ...heading.draw(x, top),
+      ...arrows(convergence, [x + 12, top - heading.height - ARM - LABEL]),
+      ...words.draw(x + ROOM, top - heading.height),
+    ],
   }
-  return stack([
-    drawing,
-    space(1.5),
-    paragraph(
-      `${convergenceWords(convergence)} Magnetic declination is not stated. The angle is not drawn to scale.`,
-      width,
-      type.small,
-    ),
-  ])
 }
 
-function arrows(convergence: Degrees, foot: MM, type: TypeScale): Mark[] {
+function arrows(convergence: Degrees, foot: MM): Mark[] {
   const agree = Math.round(Math.abs(convergence) * 60) === 0
   // The frame's up is grid north; true north lies the other way round from it.
   const drawn = agree ? 0 : -Math.sign(convergence) * Math.max(LEAST_DRAWN, Math.abs(convergence))
@@ -46,16 +50,18 @@ function arrows(convergence: Degrees, foot: MM, type: TypeScale): Mark[] {
     textLines(
       [text],
       { x: at[0] + side, top: at[1] + 3.6, align: side < 0 ? 'end' : side > 0 ? 'start' : 'middle' },
-      { ...type.small, size: 2.4, weight: 700 },
+      NAME,
     )
   return [
     line(foot, grid),
     ...(agree ? [] : [line(foot, north)]),
     head(north, drawn),
-    ...label(agree ? 'true and grid north' : 'true north', north, agree ? 0 : outside),
-    ...(agree ? [] : label('grid north', grid, -outside)),
+    ...label(agree ? 'true and grid' : 'true', north, agree ? 0 : outside),
+    ...(agree ? [] : label('grid', grid, -outside)),
   ]
 }
+
+const NAME: TextStyle = { size: 2.4, weight: 700, ink: 'frame', leading: 1.2 }
 
 const tip = ([x, y]: MM, azimuth: Degrees, length: Millimetres): MM => [
   x + Math.sin(toRadians(azimuth)) * length,
@@ -71,9 +77,9 @@ const line = (from: MM, to: MM): Mark => ({
 
 /** A slim solid head at the tip of the true north line. */
 function head(at: MM, azimuth: Degrees): Mark {
-  const back = tip(at, azimuth + 180, 4)
-  const left = tip(back, azimuth - 90, 0.9)
-  const right = tip(back, azimuth + 90, 0.9)
+  const back = tip(at, azimuth + 180, 5)
+  const left = tip(back, azimuth - 90, 1.1)
+  const right = tip(back, azimuth + 90, 1.1)
   return {
     mark: 'fill',
     path: polyline([at, left, right], true),

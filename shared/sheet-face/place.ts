@@ -2,24 +2,35 @@ import type { DisplayList, Mark, Path } from '../symbols/display-list'
 import { mapPath } from '../symbols/paths'
 import type { Millimetres } from '../units'
 
-/** A display list moved on the page. */
-export const place = (list: DisplayList, x: Millimetres, y: Millimetres): Mark[] =>
-  list.map((mark) => moveMark(mark, x, y))
+/** A display list moved on the page and, if asked, drawn larger or smaller about its origin: lines and letters too. */
+export const place = (list: DisplayList, x: Millimetres, y: Millimetres, scale = 1): Mark[] =>
+  list.map((mark) => placeMark(mark, x, y, scale))
 
-function moveMark(mark: Mark, x: Millimetres, y: Millimetres): Mark {
+function placeMark(mark: Mark, x: Millimetres, y: Millimetres, scale: number): Mark {
+  const path = (given: Path): Path => mapPath(given, (point) => [x + point[0] * scale, y + point[1] * scale])
   switch (mark.mark) {
+    case 'stroke':
+      return {
+        ...mark,
+        path: path(mark.path),
+        width: mark.width * scale,
+        ...(mark.dash ? { dash: mark.dash.map((length) => length * scale) } : {}),
+      }
+    case 'fill':
+      return { ...mark, path: path(mark.path) }
     case 'text':
-      return { ...mark, at: [mark.at[0] + x, mark.at[1] + y] }
+      return {
+        ...mark,
+        at: [x + mark.at[0] * scale, y + mark.at[1] * scale],
+        size: mark.size * scale,
+        ...(mark.tracking === undefined ? {} : { tracking: mark.tracking * scale }),
+        ...(mark.halo === undefined ? {} : { halo: mark.halo * scale }),
+      }
     case 'group':
       return {
         ...mark,
-        marks: place(mark.marks, x, y),
-        ...(mark.clip ? { clip: movePath(mark.clip, x, y) } : {}),
+        marks: place(mark.marks, x, y, scale),
+        ...(mark.clip ? { clip: path(mark.clip) } : {}),
       }
-    default:
-      return { ...mark, path: movePath(mark.path, x, y) }
   }
 }
-
-const movePath = (path: Path, x: Millimetres, y: Millimetres): Path =>
-  mapPath(path, (point) => [point[0] + x, point[1] + y])

@@ -5,7 +5,7 @@ import type { Millimetres } from '../units'
 import { heightOf, paragraph, space, stack, type Block } from './block'
 import { sectionHeading } from './section-heading'
 import { place } from './place'
-import type { TypeScale } from './type-scale'
+import { SWATCH, type TypeScale } from './type-scale'
 
 /** The list of units: swatch with label, name, description. */
 export function unitsList(units: readonly UnitProperties[], width: Millimetres, type: TypeScale): Block[] {
@@ -41,7 +41,7 @@ function unitRow(unit: UnitProperties, width: Millimetres, type: TypeScale): Blo
     draw(x, top) {
       const lift = Math.max(0, (type.swatch.height - text.height) / 2)
       return [
-        ...place(drawUnitSwatch(unit, type.swatch), x, top - type.swatch.height),
+        ...place(drawUnitSwatch(unit, SWATCH), x, top - type.swatch.height, type.factor),
         ...text.draw(x + indent, top - lift),
       ]
     },

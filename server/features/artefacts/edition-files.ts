@@ -6,7 +6,7 @@ import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { composeSheet } from '@shared/sheet-face/compose-sheet'
 import { citation, type EditionStatement } from '@shared/sheet-face/edition-statement'
 import { problem } from '../../platform/problem'
-import type { Report } from './breathe'
+import type { ReportProgress } from '../../platform/jobs'
 import { manifest, sha256 } from './manifest'
 import { sheetGeoJson } from './sheet-geojson'
 import { sheetPdf } from './sheet-pdf'
@@ -33,7 +33,10 @@ const DATA_AT = 0.8
 const MANIFEST_AT = 0.95
 
 /** Makes the files of an edition: printed page, its picture, data, and the manifest with their checksums. */
-export async function makeEditionFiles(source: EditionSource, report: Report): Promise<EditionFile[]> {
+export async function makeEditionFiles(
+  source: EditionSource,
+  report: ReportProgress,
+): Promise<EditionFile[]> {
   const { sheet, items, faces, statement } = source
   const composition = composeSheet({ sheet, items, faces, edition: statement })
   if (composition.outcome === 'cannot-print') throw problem('cannot-print', composition.reason)

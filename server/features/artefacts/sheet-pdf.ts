@@ -2,7 +2,8 @@ import PDFDocument from 'pdfkit'
 import type { Page } from '@shared/api/sheets'
 import type { SheetPart } from '@shared/sheet-face/compose-sheet'
 import { replay } from '@shared/symbols/interpreter'
-import { breathe, type Report } from './breathe'
+import type { ReportProgress } from '../../platform/jobs'
+import { breathe } from './breathe'
 import { latoFiles } from './lato-files'
 import { fontName, pdfSurface, pdfTransform, POINTS_PER_MM } from './pdf-surface'
 
@@ -20,7 +21,7 @@ export async function sheetPdf(
   page: Page,
   parts: readonly SheetPart[],
   facts: PdfFacts,
-  report: Report,
+  report: ReportProgress,
 ): Promise<Buffer> {
   const document = openDocument(page, facts)
   const bytes = collect(document)

@@ -9,7 +9,7 @@ import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { citation, type EditionStatement } from '@shared/sheet-face/edition-statement'
 import { announce } from '../../platform/announce'
 import type { Storage } from '../../platform/storage'
-import type { Report } from '../artefacts/breathe'
+import type { ReportProgress } from '../../platform/jobs'
 import { revisionDigest } from '../artefacts/digest'
 import { makeEditionFiles, type EditionFile } from '../artefacts/edition-files'
 import type { FacesService } from '../faces/faces.service'
@@ -47,7 +47,7 @@ export class ReleaseService {
 
   /** Makes the files of the next edition, stores them and seals them; answers with its number. Where anything fails, no
    *  edition exists and no file stays. The sheet goes back to drafting with the edition, in one transaction. */
-  async makeEdition(approved: Approved, report: Report): Promise<number> {
+  async makeEdition(approved: Approved, report: ReportProgress): Promise<number> {
     await report(0, 'Reading the approved revision')
     const { sheet, items, faces, number } = await this.read(approved)
     if (revisionDigest(sheet, approved.revision, items) !== approved.digest) {

@@ -1,8 +1,7 @@
 import type { DataSource } from 'typeorm'
 import { z } from 'zod'
 import { announce } from '../../platform/announce'
-import type { Jobs } from '../../platform/jobs'
-import type { Report } from '../artefacts/breathe'
+import type { Jobs, ReportProgress } from '../../platform/jobs'
 import type { ReleaseService } from '../editions/release.service'
 import { findSubmission, lockSheetState, setSheetState } from './review.queries'
 
@@ -19,25 +18,32 @@ async function releaseSubmission(
   dataSource: DataSource,
   release: ReleaseService,
   submissionId: string,
-  report: Report,
+  report: ReportProgress,
 ): Promise<void> {
   const submission = await findSubmission(dataSource.manager, submissionId)
   if (!submission) throw new RangeError(`There is no submission ${submissionId}.`)
-  if (submission.edition !== null || submission.decidedBy === null) return
-  try {
-    const number = await release.makeEdition(
+  const approver = submission.decidedBy
+  if (submission.edition !== null || approver === null) return
+  const number = await make(dataSource, submission.sheetId, () =>
+    release.makeEdition(
       {
         submissionId,
         sheetId: submission.sheetId,
         revision: submission.revision,
         digest: submission.digest,
-        approver: submission.decidedBy,
+        approver,
       },
       report,
-    )
-    await report(1, `Edition ${number} is released`)
+    ),
+  )
+  await report(1, `Edition ${number} is released`)
+}
+
+async function make(dataSource: DataSource, sheetId: string, work: () => Promise<number>): Promise<number> {
+  try {
+    return await work()
   } catch (cause) {
-    await returnToApproved(dataSource, submission.sheetId)
+    await returnToApproved(dataSource, sheetId)
     throw cause
   }
 }

@@ -124,8 +124,7 @@ export class ReviewService {
         )
       }
       await this.requireOthersWork(em, submission, viewer)
-      const running =
-        sheet.state === 'releasing' && submission.jobId ? await this.jobs.get(submission.jobId) : null
+      const running = sheet.state === 'releasing' ? await this.findOpenJob(submission) : undefined
       if (running) return running
       const job = await this.jobs.enqueue(em, {
         kind: 'release',
@@ -195,6 +194,11 @@ export class ReviewService {
     if (obstacle !== null) throw problem('own-work', obstacle)
   }
 
+  private async findOpenJob({ jobId }: StoredSubmission): Promise<Job | undefined> {
+    const job = jobId === null ? undefined : await this.jobs.find(jobId)
+    return job?.state === 'waiting' || job?.state === 'running' ? job : undefined
+  }
+
   private async enter(
     em: EntityManager,
     sheet: LockedSheet,
@@ -229,7 +233,7 @@ export class ReviewService {
       obstacle: viewer.roles.includes('approver')
         ? ownWork(viewer.person, stored, entries)
         : 'Only an approver of this sheet decides and releases.',
-      job: stored.jobId === null ? null : await this.jobs.get(stored.jobId),
+      job: (stored.jobId && (await this.jobs.find(stored.jobId))) || null,
       edition: stored.edition,
     }
   }
