@@ -1,41 +1,69 @@
-import { locationConfidences, type LocationConfidence } from '@shared/items/confidence'
+import {
+  identities,
+  locationConfidences,
+  type Identity,
+  type LocationConfidence,
+} from '@shared/items/confidence'
 import type { ItemKind } from '@shared/items/item'
-import type { DisplayList } from '@shared/symbols/display-list'
-import { drawItem } from '@shared/symbols/draw-item'
 import type { Box } from '@shared/sheet-face/page-layout'
+import type { DisplayList } from '@shared/symbols/display-list'
+import { lineSymbols } from '@shared/symbols/draw-item'
+import { drawLine } from '@shared/symbols/draw-line'
+
+/** A drawn sample that stands for a value. */
+export interface SampleOption<V extends string> {
+  value: V
+  title: string
+  list: DisplayList
+  box: Box
+}
 
 const SAMPLE = { width: 13, height: 3 }
+const MARGIN = 1.5
 
 /** The four location confidences as drawn samples: plain lines of the weight of the kind.
  *  @param kind a line kind; faults are heavy, all others light */
-export function locationOptions(
-  kind: ItemKind,
-): { value: LocationConfidence; title: string; list: DisplayList; box: Box }[] {
-  return locationConfidences.map((value) => ({
-    value,
-    title: value.charAt(0).toUpperCase() + value.slice(1),
-    list: sampleLine(kind, value),
-    box: { x: 0, y: 0, ...SAMPLE },
-  }))
+export const locationOptions = (kind: ItemKind): SampleOption<LocationConfidence>[] =>
+  locationConfidences.map((value) => option(value, capital(value), { kind, locationConfidence: value }))
+
+const identityTitles: Record<Identity, string> = {
+  certain: 'Certain to be what it is called',
+  questionable: 'Questioned: a query stands in the line',
 }
 
-function sampleLine(kind: ItemKind, locationConfidence: LocationConfidence): DisplayList {
-  const shared = {
-    id: '',
-    geometry: {
-      type: 'LineString' as const,
-      coordinates: [
-        [1.5, SAMPLE.height / 2],
-        [SAMPLE.width - 1.5, SAMPLE.height / 2],
-      ] as [number, number][],
-    },
-  }
-  const basis = { locationConfidence, identity: 'certain', name: '', note: '' } as const
-  const frame = { origin: [0, 0] as [number, number], mmPerMetre: 1, convergenceAt: () => 0 }
-  return drawItem(
-    kind === 'fault'
-      ? { ...shared, kind, properties: { ...basis, type: 'unspecified', side: 'right' } }
-      : { ...shared, kind: 'contact', properties: basis },
-    frame,
+/** Certain and questioned identity as drawn samples. */
+export const identityOptions = (kind: ItemKind): SampleOption<Identity>[] =>
+  identities.map((value) => option(value, identityTitles[value], { kind, identity: value }))
+
+function option<V extends string>(
+  value: V,
+  title: string,
+  line: { kind: ItemKind; locationConfidence?: LocationConfidence; identity?: Identity },
+): SampleOption<V> {
+  return { value, title, list: sampleLine(line), box: { x: 0, y: 0, ...SAMPLE } }
+}
+
+function sampleLine({
+  kind,
+  locationConfidence = 'certain',
+  identity = 'certain',
+}: {
+  kind: ItemKind
+  locationConfidence?: LocationConfidence
+  identity?: Identity
+}): DisplayList {
+  const plainKind = kind === 'fault' ? 'fault' : 'contact'
+  const symbol = lineSymbols.find((candidate) => candidate.kind === plainKind)
+  const middle = SAMPLE.height / 2
+  if (!symbol) return []
+  return drawLine(
+    symbol,
+    [
+      [MARGIN, middle],
+      [SAMPLE.width - MARGIN, middle],
+    ],
+    { locationConfidence, identity, attributes: { side: 1 } },
   )
 }
+
+const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)

@@ -1,0 +1,102 @@
+import { gridAzimuth, gridLength } from '@shared/geometry/bearings'
+import type { Item, ItemOf, LineItem } from '@shared/items/item'
+import type { FaultProperties } from '@shared/items/lines'
+import type { UnitProperties } from '@shared/items/legend'
+import { describeAttitude, describeAxis } from '@shared/structure/attitude-words'
+import { compassWords } from '@shared/structure/compass'
+import { legendEntryOf } from '@shared/symbols/legend-entries'
+import { normalizeAzimuth, type Azimuth, type Degrees, type Metres, type XY } from '@shared/units'
+
+/** What the words of an item need beside it. */
+export interface WordsContext {
+  unitOf(id: string): UnitProperties | undefined
+  /** Grid convergence at a place, degrees, clockwise positive. */
+  convergenceAt(xy: XY): Degrees
+}
+
+/** An item as a sentence, for the title of its slip. */
+export function itemTitle(item: Item, context: WordsContext): string {
+  switch (item.kind) {
+    case 'contact':
+    case 'other-line':
+      return questioned(item, legendEntryOf(item).title)
+    case 'fault':
+      return questioned(item, faultTitle(item, context))
+    case 'axial-trace': {
+      const { form, plunge, trend } = item.properties
+      return questioned(item, describeAxis(form, plunge, trend))
+    }
+    case 'attitude':
+      return attitudeTitle(item)
+    case 'station':
+      return item.properties.name ? `Station ${item.properties.name}` : 'Station'
+    case 'unit-label':
+      return unitLabelTitle(context.unitOf(item.properties.unit), item.properties.identity)
+    case 'unit':
+      return item.properties.name
+    case 'sheet-face':
+      return 'Sheet face'
+  }
+}
+
+const questioned = (item: LineItem, title: string): string =>
+  item.properties.identity === 'questionable' ? `${title}, questioned` : title
+
+function unitLabelTitle(unit: UnitProperties | undefined, identity: string): string {
+  const name = unit ? `${unit.label}, ${unit.name}` : 'Label of a unit that is not in the legend'
+  return identity === 'questionable' ? `${name}, questioned` : name
+}
+
+function attitudeTitle({ properties }: ItemOf<'attitude'>): string {
+  const type = capital(properties.type)
+  const words = describeAttitude(properties)
+  return words === 'Horizontal' ? `${type}, horizontal` : `${type} ${words.charAt(0).toLowerCase()}${words.slice(1)}`
+}
+
+const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)
+
+const faultNames: Record<FaultProperties['type'], string> = {
+  unspecified: 'Fault',
+  normal: 'Normal fault',
+  reverse: 'Reverse fault',
+  thrust: 'Thrust',
+  'left-lateral': 'Left-lateral fault',
+  'right-lateral': 'Right-lateral fault',
+}
+
+/** What the decorated side of a fault is, where its type has one. */
+export const sideMeanings: Partial<Record<FaultProperties['type'], string>> = {
+  normal: 'down to the',
+  reverse: 'upper plate to the',
+  thrust: 'upper plate to the',
+}
+
+function faultTitle(item: ItemOf<'fault'>, context: WordsContext): string {
+  const { type, locationConfidence } = item.properties
+  const meaning = sideMeanings[type]
+  const side = meaning ? `, ${meaning} ${compassWords(sideAzimuth(item, context))}` : ''
+  const location = locationConfidence === 'certain' ? '' : `, ${locationConfidence}`
+  return `${faultNames[type]}${side}${location}`
+}
+
+/** Azimuth from true north toward the decorated side of a fault, square to the line from its one end to the other. */
+export function sideAzimuth(item: ItemOf<'fault'>, { convergenceAt }: Pick<WordsContext, 'convergenceAt'>): Azimuth {
+  const line = item.geometry.coordinates
+  const [first, last] = [line[0], line.at(-1)]
+  if (!first || !last) return 0
+  const along = gridAzimuth(first, last) + convergenceAt(first)
+  return normalizeAzimuth(along + (item.properties.side === 'right' ? 90 : -90))
+}
+
+/** The first facts beneath the title: proper name, length, station. */
+export function itemFacts(item: Item): string[] {
+  if (item.geometry?.type === 'LineString' && 'name' in item.properties) {
+    return [item.properties.name, lengthWords(gridLength(item.geometry.coordinates))].filter(Boolean)
+  }
+  if (item.kind === 'attitude' && item.properties.station) return [`station ${item.properties.station}`]
+  return []
+}
+
+/** A length as a person says it: `310 m`, `4.2 km`. */
+export const lengthWords = (length: Metres): string =>
+  length < 1000 ? `${Math.round(length)} m` : `${(length / 1000).toFixed(length < 10_000 ? 1 : 0)} km`
