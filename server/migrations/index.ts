@@ -1,0 +1,5 @@
+import { CreateAccounts20261201000001 } from './20261201000001-create-accounts'
+import { CreateSheetsAndLedger20261201000002 } from './20261201000002-create-sheets-and-ledger'
+
+/** Every migration in order; each room appends its own. Never edit one that has been released. */
+export const migrations = [CreateAccounts20261201000001, CreateSheetsAndLedger20261201000002]
