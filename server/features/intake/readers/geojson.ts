@@ -41,13 +41,20 @@ function parseJson(text: string): { outcome: 'json'; value: unknown } | Unreadab
     return { outcome: 'json', value: JSON.parse(text) }
   } catch {
     const at = findJsonFault(text) ?? 0
-    const { line, column } = lineAndColumn(text, at)
+    const cutOff = isCutOff(text.slice(at))
+    const { line, column } = lineAndColumn(text, cutOff ? text.length : at)
     const place = `line ${line}, column ${column}`
-    if (at >= text.trimEnd().length) return unreadable(`The file is not whole: it breaks off at ${place}.`)
+    if (cutOff) return unreadable(`The file is not whole: it breaks off at ${place}.`)
     const found = text.slice(at, at + 12).split(/[\s,\]}]/)[0] || text[at]
     return unreadable(`The file is not JSON: “${found}” at ${place} does not belong there.`)
   }
 }
+
+/** Whether what remains from a fault on is nothing, or the beginning of a text, number or word. */
+const isCutOff = (rest: string): boolean =>
+  rest.trim() === '' ||
+  (rest.startsWith('"') && !rest.includes('"', 1)) ||
+  /^([-+.eE\d]+|tr?u?|fa?l?s?|nu?l?)$/.test(rest)
 
 function featuresOf(value: unknown): { outcome: 'features'; features: unknown[] } | Unreadable {
   if (!isJsonObject(value)) return unreadable('The file is JSON, but not GeoJSON: it holds no object.')

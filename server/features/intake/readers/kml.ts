@@ -36,13 +36,12 @@ function parseXml(text: string): { outcome: 'xml'; document: Document } | Unread
     return unreadable(`The file is XML, but not KML: its first element is <${root.slice(0, 40)}>.`)
   } catch (cause) {
     if (!(cause instanceof ParseError)) throw cause
+    const cutOff = !/<\/kml\s*>\s*$/.test(text.slice(-200))
+    if (cutOff)
+      return unreadable('The file is not whole: it does not end with </kml>, so it seems to be cut off.')
     const { lineNumber } = lineOf(cause.locator)
-    const unclosed = /unclosed xml tag/.test(cause.message)
-    const place = lineNumber > 0 && !unclosed ? ` near line ${lineNumber}` : ''
-    const what = unclosed
-      ? 'it breaks off before its last elements are closed'
-      : 'its elements do not fit together'
-    return unreadable(`The file is not whole XML: ${what}${place}.`)
+    const place = lineNumber > 0 ? ` near line ${lineNumber}` : ''
+    return unreadable(`The file is not whole XML: its elements do not fit together${place}.`)
   }
 }
 

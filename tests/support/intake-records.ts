@@ -1,0 +1,69 @@
+import type { Mapping } from '@shared/intake/mapping'
+import { sheetGround, type SheetGround } from '@shared/intake/place'
+import type { IntakeRecord, RecordPart } from '@shared/intake/records'
+
+/** A record with a point at a place, unless given another geometry. */
+export const aRecord = (
+  attributes: Record<string, unknown> = {},
+  parts: RecordPart[] = [aPoint(3, 45)],
+  number = 1,
+): IntakeRecord => ({ number, parts, attributes })
+
+export const aPoint = (lon: number, lat: number): RecordPart => ({ form: 'point', position: [lon, lat] })
+export const aLine = (...positions: number[][]): RecordPart => ({ form: 'line', positions })
+
+/** A sheet around 3° E 45° N in UTM zone 31, twenty kilometres square. */
+export const aGround = (): SheetGround =>
+  sheetGround({ name: 'EPSG:32631', proj4: '+proj=utm +zone=31 +datum=WGS84 +units=m +no_defs' }, [
+    [490_000, 4_972_000],
+    [510_000, 4_972_000],
+    [510_000, 4_992_000],
+    [490_000, 4_992_000],
+    [490_000, 4_972_000],
+  ])
+
+/** A mapping in which nothing is mapped yet: lines become contacts, points stations. */
+export function aMapping(given: {
+  lines?: Partial<Mapping['lines']>
+  points?: Partial<Mapping['points']>
+  northReference?: Mapping['northReference']
+  declination?: number | null
+}): Mapping {
+  return {
+    northReference: given.northReference ?? 'true',
+    declination: given.declination ?? null,
+    lines: {
+      typeColumn: null,
+      types: {},
+      otherwise: { kind: 'contact' },
+      confidenceColumn: null,
+      confidences: {},
+      confidenceOtherwise: 'certain',
+      faultSide: 'right',
+      nameColumn: null,
+      plungeColumn: null,
+      trendColumn: null,
+      noteColumn: null,
+      ...given.lines,
+    },
+    points: {
+      typeColumn: null,
+      types: {},
+      otherwise: { kind: 'station' },
+      readingColumn: null,
+      azimuthColumn: null,
+      dipColumn: null,
+      convention: 'strike-dip',
+      stationColumn: null,
+      noteColumn: null,
+      ...given.points,
+    },
+  }
+}
+
+/** Two columns of numbers, each point a bedding attitude. */
+export const strikeAndDip: Partial<Mapping['points']> = {
+  azimuthColumn: 'strike',
+  dipColumn: 'dip',
+  otherwise: { kind: 'attitude', type: 'bedding', overturned: false },
+}
