@@ -32,7 +32,7 @@ const opposite: Record<string, string> = { N: 'N-S', S: 'S-N', E: 'E-W', W: 'W-E
 function compassLettersFor(text: string): string {
   return text
     .replace(
-      /(NORTH|SOUTH)[- ]?(EAST|WEST)(?!-)/g,
+      /(NORTH|SOUTH)[- ]?(EAST|WEST)/g,
       (_, first: string, second: string) => first.charAt(0) + second.charAt(0),
     )
     .replace(/NORTH|SOUTH|EAST|WEST/g, (word) => word.charAt(0))
