@@ -45,6 +45,7 @@ export function citation(
 ): string {
   if (!statement.released) return 'A draft: not to be cited.'
   const year = new Date(statement.released.at).getUTCFullYear()
-  const by = authors === '' ? 'Anonymous' : authors.replace(/\.$/, '')
-  return `${by}, ${year}. Geologic map of ${sheet.title}. Sheet ${sheet.number}, scale 1:${sheet.scale}, edition ${statement.edition}.`
+  const title = `Geologic map of ${sheet.title}`
+  const head = authors === '' ? `${title}, ${year}.` : `${authors}, ${year}. ${title}.`
+  return `${head} Sheet ${sheet.number}, scale 1:${sheet.scale}, edition ${statement.edition}.`
 }
