@@ -79,7 +79,7 @@ export function foldBelt({ centre, gridTrend, throw: drop }: FieldOptions): Fiel
       return [east, north, up]
     },
     fault: ([x, y], z) =>
-      x - (7250 - 0.3 * (y - 5500) + 260 * wave(y, 9000, 0.3) + 60 * wave(y, 3100, 1)) + 0.15 * (z - 200),
+      x - (7500 - 0.3 * (y - 5500) + 260 * wave(y, 9000, 0.6) + 60 * wave(y, 3100, 1)) + 0.15 * (z - 200),
     hinges: findHinges(),
     along: [sin, cos],
   }

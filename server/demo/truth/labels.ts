@@ -9,10 +9,10 @@ export interface Label {
   unit: number | 'alluvium' | 'peat'
 }
 
-const CELL: Metres = 20
+const CELL: Metres = 25
 /** Areas of more than this reach get more than one label. */
 const BETWEEN_LABELS: Metres = 3200
-/** Another label stands at least so far from the area's edge. */
+/** A place for a label that is free of the area's edge. */
 const CLEAR: Metres = 140
 
 /** What the map shows at a place. */
@@ -126,20 +126,19 @@ function areasOf({ codes, columns, rows }: Raster): number[][] {
 
 /** The deepest cell, then the deepest of those far from all before; none on an axial trace if that can be helped. */
 function spread(truth: Truth, { depths, placeOf }: Raster, cells: readonly number[]): number[] {
-  const depthOf = (cell: number): number => {
-    const depth = depths[cell] ?? 0
-    return depth * CELL > 60 && isOnHinge(truth, placeOf(cell)) ? 60 / CELL : depth
-  }
-  const deepest = cells.map((cell) => ({ cell, depth: depthOf(cell) })).sort((a, b) => b.depth - a.depth)
-  const chosen: number[] = []
-  for (const { cell, depth } of deepest) {
-    if (chosen.length > 0 && depth * CELL < CLEAR) break
-    const [x, y] = placeOf(cell)
+  const deepest = cells.map((cell) => ({ cell, depth: depths[cell] ?? 0 })).sort((a, b) => b.depth - a.depth)
+  const isFree = ({ cell, depth }: { cell: number; depth: number }) =>
+    depth * CELL >= CLEAR && !isOnHinge(truth, placeOf(cell))
+  const first = deepest.find(isFree) ?? deepest[0]
+  const chosen = first ? [first.cell] : []
+  for (const candidate of deepest) {
+    if (candidate.depth * CELL < CLEAR) break
+    const [x, y] = placeOf(candidate.cell)
     const isFar = chosen.every((other) => {
       const [otherX, otherY] = placeOf(other)
       return Math.hypot(x - otherX, y - otherY) > BETWEEN_LABELS
     })
-    if (isFar) chosen.push(cell)
+    if (isFar && isFree(candidate)) chosen.push(candidate.cell)
   }
   return chosen
 }

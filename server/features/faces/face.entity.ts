@@ -17,6 +17,6 @@ export class FaceRow {
   @Column({ name: 'unit_id', type: 'uuid', nullable: true })
   unitId: string | null
 
-  @Column({ name: 'outline', type: 'geometry' })
+  @Column({ name: 'outline', type: 'geometry', spatialFeatureType: 'Geometry', srid: 0 })
   outline: unknown
 }

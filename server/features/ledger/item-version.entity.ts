@@ -34,7 +34,7 @@ export class ItemVersionRow {
   kind: ItemKind
 
   /** In the sheet's system, on the 1 mm grid; null for kinds without a place. */
-  @Column({ name: 'geometry', type: 'geometry', nullable: true })
+  @Column({ name: 'geometry', type: 'geometry', spatialFeatureType: 'Geometry', srid: 0, nullable: true })
   geometry: unknown
 
   /** Checked by the kind's schema before it is stored. */

@@ -25,7 +25,7 @@ export class SheetRow {
   srid: number
 
   /** Closed ring, counter-clockwise, on the 1 mm grid, in the sheet's own system. */
-  @Column({ name: 'neatline', type: 'geometry' })
+  @Column({ name: 'neatline', type: 'geometry', spatialFeatureType: 'Geometry', srid: 0 })
   neatline: unknown
 
   /** Millimetres. */
