@@ -1,0 +1,60 @@
+import { describe, expect, it } from 'vitest'
+import { contrast, labelReadsOn, mutedColour } from '@shared/legend/colours'
+import { groupByAge } from '@shared/legend/group-by-age'
+import { unitWarnings } from '@shared/legend/unit-warnings'
+import { timeDivisions } from '@shared/time-scale/periods'
+
+const unit = (id: string, label: string, colour: string, age = '', rank = 0) => ({
+  id,
+  properties: { label, name: `Unit ${label}`, age, colour, description: '', rank },
+})
+
+describe('warnings about a unit', () => {
+  it('names the unit that carries the same label, and the one of the same colour', () => {
+    const units = [unit('1', 'Dr', '#cf9d88'), unit('2', 'Dr', '#ffffff'), unit('3', 'Dl', '#cf9d88')]
+    expect(unitWarnings(unit('1', 'Dr', '#cf9d88'), units)).toEqual([
+      'Unit Dr carries the label Dr too.',
+      'Unit Dl has this colour too.',
+    ])
+  })
+
+  it('says when the label is hard to read', () => {
+    expect(unitWarnings(unit('1', 'Dr', '#5a3030'), [])).toHaveLength(1)
+  })
+
+  it('says nothing of a unit that stands out', () => {
+    expect(unitWarnings(unit('1', 'Dr', '#cf9d88'), [unit('2', 'Sv', '#b5cbc4')])).toEqual([])
+  })
+})
+
+describe('contrast', () => {
+  // WCAG 2.2: black on white is 21; #767676 is the well-known darkest grey that just passes 4.5 on white.
+  it.each([
+    ['#000000', '#ffffff', 21],
+    ['#767676', '#ffffff', 4.54],
+    ['#ffffff', '#ffffff', 1],
+  ])('of %s on %s is %f', (a, b, expected) => {
+    expect(contrast(a, b)).toBeCloseTo(expected, 2)
+    expect(contrast(b, a)).toBeCloseTo(expected, 2)
+  })
+
+  it('of a label is enough on every colour that an age proposes', () => {
+    for (const division of timeDivisions) expect(labelReadsOn(mutedColour(division.colour)), division.name).toBe(true)
+  })
+})
+
+describe('grouping by age', () => {
+  it('lists the youngest first and repeats a heading that comes again', () => {
+    const units = [
+      unit('old', 'D1', '#ffffff', 'Devonian', 30),
+      unit('cover', 'Q', '#ffffff', 'Quaternary', 20),
+      unit('young', 'D2', '#ffffff', 'Devonian', 10),
+      unit('young2', 'D3', '#ffffff', 'devonian', 11),
+    ]
+    expect(groupByAge(units).map((group) => [group.age, group.units.map((each) => each.id)])).toEqual([
+      ['Devonian', ['young', 'young2']],
+      ['Quaternary', ['cover']],
+      ['Devonian', ['old']],
+    ])
+  })
+})
