@@ -8,6 +8,8 @@ import { toPx, type ViewFrame } from './view-frame'
 export interface Marks {
   selected: readonly (LineItem | PointItem)[]
   hovered: readonly (LineItem | PointItem)[]
+  /** Unit areas that are lit, each a drawing whose ground lies exactly. */
+  areas: readonly (readonly XY[])[][]
   sketch: Sketch | null
   /** A place that waits for its attitude. */
   place: XY | null
@@ -29,6 +31,7 @@ export function paintMarks(
   context.setTransform(ratio, 0, 0, ratio, 0, 0)
   context.strokeStyle = SLATE
   context.lineJoin = context.lineCap = 'round'
+  for (const rings of marks.areas) light(context, view, rings)
   for (const item of marks.hovered)
     emphasize(context, view, item, { alpha: 0.2, halo: 7, line: 0, ring: symbolPx })
   for (const item of marks.selected)
@@ -68,11 +71,27 @@ function emphasize(
 
 function trace(context: CanvasRenderingContext2D, view: ViewFrame, line: readonly XY[]): void {
   context.beginPath()
+  addLine(context, view, line)
+}
+
+function addLine(context: CanvasRenderingContext2D, view: ViewFrame, line: readonly XY[]): void {
   line.forEach((vertex, index) => {
     const [x, y] = toPx(view, vertex)
     if (index === 0) context.moveTo(x, y)
     else context.lineTo(x, y)
   })
+}
+
+/** Lights a unit area: outer ring and holes. */
+function light(context: CanvasRenderingContext2D, view: ViewFrame, rings: readonly (readonly XY[])[]): void {
+  context.beginPath()
+  for (const line of rings) addLine(context, view, line)
+  context.globalAlpha = 0.24
+  context.fillStyle = SLATE
+  context.fill('evenodd')
+  context.globalAlpha = 1
+  context.lineWidth = 1
+  context.stroke()
 }
 
 function ring(

@@ -7,6 +7,7 @@ import type { Sheet } from '@shared/api/sheets'
 import type { SheetProjection } from '@shared/geometry/projection'
 import type { Item, LineItem, PointItem } from '@shared/items/item'
 import type { Metres, XY } from '@shared/units'
+import { isInFace, isInRings } from './in-face'
 import { itemBounds, type GroundBox } from './item-index'
 import { DOCKED_WIDTH, fitPage, pageBoxes, type PageBoxes } from './page-boxes'
 import { paintMarks, type Marks } from './paint-marks'
@@ -15,7 +16,7 @@ import { pointerOf, PointerGestures, type GestureHandlers } from './pointer-gest
 import { viewProjection } from './projection'
 import { Scene } from './scene'
 import { SheetLayer, viewOf } from './sheet-layer'
-import { printShare, pxPerMetreAt, symbolPxPerMm, type ViewFrame } from './view-frame'
+import { printShare, pxPerMetreAt, symbolPxPerMm, toPx, type ViewFrame } from './view-frame'
 
 export type { GroundBox, Marks, PageBoxes, ViewFrame }
 export type { MapPointer } from './pointer-gestures'
@@ -51,11 +52,11 @@ export class SheetMap {
   private readonly scene: Scene
   private readonly sheetLayer: SheetLayer
   private readonly marksLayer: SheetLayer
-  private marks: Marks = { selected: [], hovered: [], sketch: null, place: null }
+  private marks: Marks = { selected: [], hovered: [], areas: [], sketch: null, place: null }
   private hidden = { item: (_item: Item): boolean => false, face: (_unit: string | null): boolean => false }
   private symbols: 'print' | 'screen' = 'print'
   private last: { view: ViewFrame; boxes: PageBoxes } | null = null
-  private fitted = false
+  private moved = false
 
   constructor(private readonly options: SheetMapOptions) {
     const { sheet, projection, target } = options
@@ -119,7 +120,11 @@ export class SheetMap {
       if (this.last) handlers.rest(this.last.view)
     })
     this.map.on('change:size', () => {
-      if (!this.fitted) this.showPage(false)
+      // A page that was shown whole stays whole when the window changes; any other view stays where it is.
+      if (!this.moved) this.showPage(false)
+    })
+    this.map.on('movestart', () => {
+      this.moved ||= this.map.getView().getInteracting() || this.map.getView().getAnimating()
     })
   }
 
@@ -195,13 +200,34 @@ export class SheetMap {
     return this.scene.index.pointsNear(at, radius)
   }
 
+  /** Legend unit whose area a place lies in; null outside all areas, or in one that nobody claims. */
+  unitAt(at: XY): string | null {
+    return this.scene.faces.find((face) => isInFace(face, at))?.unit ?? null
+  }
+
+  /** Whether a place lies on the map face: inside the neatline. */
+  isOnFace(at: XY): boolean {
+    return isInRings([this.options.sheet.neatline], at)
+  }
+
+  /** Whether the view is the one of `showPage`, to within a pixel. */
+  isPageShown(): boolean {
+    const [width, height] = this.map.getSize() ?? []
+    if (!width || !height) return false
+    const fit = fitPage({ width, height }, this.ground(), this.symbols)
+    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
+    const step = this.metresPerPx()
+    const moved = Math.hypot(east - fit.center[0], north - fit.center[1]) / step
+    return moved < 1 && Math.abs(fit.pxPerMetre * step - 1) < 0.001
+  }
+
   /** Shows the whole page. */
   showPage(animated = true): void {
     const [width, height] = this.map.getSize() ?? []
     if (!width || !height) return
-    this.fitted = true
     const { center, pxPerMetre } = fitPage({ width, height }, this.ground(), this.symbols)
     this.go(center, pxPerMetre, animated)
+    this.moved = false
   }
 
   /** Moves so that some ground fills the free part of the view, but no nearer than 200 %. */
@@ -227,8 +253,22 @@ export class SheetMap {
   }
 
   showPlace(at: XY, percent: number): void {
-    this.fitted = true
+    this.moved = true
     this.go(at, pxPerMetreAt(percent / 100, this.scene.sheet.scale), false)
+  }
+
+  /** Middle of the view and its scale, for an address. */
+  place(): { at: XY; percent: number } {
+    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
+    return { at: [east, north], percent: this.percent() }
+  }
+
+  /** Moves a place into the middle of the view if it is not in view. */
+  bringIntoView(at: XY): void {
+    if (!this.last) return
+    const { view } = this.last
+    const [x, y] = toPx(view, at)
+    if (x < 0 || y < 0 || x > view.width || y > view.height) this.go(at, view.pxPerMetre, true)
   }
 
   panBy(rightPx: number, downPx: number): void {

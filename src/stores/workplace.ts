@@ -1,5 +1,5 @@
 import { defineStore } from 'pinia'
-import { ref, shallowRef } from 'vue'
+import { computed, ref, shallowRef } from 'vue'
 import type { LegendEntry } from '@shared/symbols/legend-entries'
 import type { XY } from '@shared/units'
 
@@ -20,12 +20,18 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   const tool = ref<Tool>('select')
   const drawWith = shallowRef<DrawWith | null>(null)
   const selected = shallowRef<readonly string[]>([])
-  /** Items under the pointer, or of the legend row under it. */
+  /** Items under the pointer on the map. */
   const hovered = shallowRef<readonly string[]>([])
   /** Legend entry, or unit, of what is under the pointer on the map or in the margin. */
   const hoveredEntry = ref<string | null>(null)
+  /** The row that the map lit last; another one than this in `hoveredEntry` was lit by the margin. */
+  const mapRow = ref<string | null>(null)
+  /** Row that is pointed at in the margin, whose items the map lights. */
+  const rowInMargin = computed(() => (hoveredEntry.value === mapRow.value ? null : hoveredEntry.value))
   /** Entries and units that are not drawn on the map now. */
   const hiddenEntries = ref<ReadonlySet<string>>(new Set())
+  /** What was drawn with last, for drawing again by one key. */
+  const lastPen = shallowRef<DrawWith | null>(null)
   const snapping = ref(true)
   /** Symbols above 100 %: grow with the sheet (print size), or stay as at 100 % (screen size). */
   const symbolSize = ref<'print' | 'screen'>('print')
@@ -37,6 +43,8 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   const unitHere = ref<string | null>(null)
   /** Scale of the view, per cent of print size. */
   const percent = ref(100)
+  /** Counts how often the view has come to rest, for whoever follows it. */
+  const viewRests = ref(0)
   const viewRequest = shallowRef<ViewRequest | null>(null)
   /** One plain sentence for the foot: what the instrument expects, or why it refused. */
   const hint = ref('')
@@ -50,10 +58,22 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   /** Picks what to draw with, or puts the pen down where the same is picked again. */
   function draw(pen: DrawWith | null): void {
     if (!pen || isSamePen(pen, drawWith.value)) return choose('select')
-    drawWith.value = pen
+    drawWith.value = lastPen.value = pen
     tool.value = 'draw'
     pendingAttitudePlace.value = null
     selected.value = []
+  }
+
+  /** The pointer on the map is over these items, or over an area of a unit.
+   *  @param row legend entry or unit that explains it */
+  function hoverOnMap(ids: readonly string[], row: string | null): void {
+    hovered.value = ids
+    hoveredEntry.value = mapRow.value = row
+  }
+
+  /** Takes up the last pen again. */
+  function drawAgain(): void {
+    if (lastPen.value && tool.value !== 'draw') draw(lastPen.value)
   }
 
   function select(ids: readonly string[]): void {
@@ -81,9 +101,10 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   /** Back to how the workplace opens, for another sheet. */
   function reset(): void {
     choose('select')
+    lastPen.value = null
     selected.value = []
     hovered.value = []
-    hoveredEntry.value = null
+    hoveredEntry.value = mapRow.value = null
     hiddenEntries.value = new Set()
     viewRequest.value = null
     cursor.value = null
@@ -94,9 +115,12 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   return {
     tool,
     drawWith,
+    lastPen,
     selected,
     hovered,
     hoveredEntry,
+    mapRow,
+    rowInMargin,
     hiddenEntries,
     snapping,
     symbolSize,
@@ -104,10 +128,13 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     cursor,
     unitHere,
     percent,
+    viewRests,
     viewRequest,
     hint,
     choose,
     draw,
+    drawAgain,
+    hoverOnMap,
     select,
     zoomTo,
     showPage,

@@ -1,0 +1,83 @@
+import { watch } from 'vue'
+import { legendEntryOf } from '@shared/symbols/legend-entries'
+import { isLineItem, isPointItem, type Item, type LineItem, type PointItem } from '@shared/items/item'
+import type { SheetMap } from '@/map/sheet-map'
+import { useSheetStore } from '@/stores/sheet'
+import { useWorkplaceStore } from '@/stores/workplace'
+
+/** Row of the legend that an item belongs to: its entry's id, or its unit's. */
+export const legendRowOf = (item: Item): string | undefined =>
+  item.kind === 'unit-label' ? item.properties.unit : legendEntryOf(item)?.id
+
+/** Keeps the map showing what the stores hold: items, unit areas, what is hidden, selected, hovered or asked for. */
+export function useMapScene(map: SheetMap): void {
+  const sheet = useSheetStore()
+  const workplace = useWorkplaceStore()
+
+  const placed = (ids: readonly string[]): (LineItem | PointItem)[] =>
+    ids.flatMap((id) => {
+      const item = sheet.get(id)
+      return item && (isLineItem(item) || isPointItem(item)) ? [item] : []
+    })
+
+  /** Everything that a legend row explains on the map. */
+  function ofRow(row: string | null): (LineItem | PointItem)[] {
+    if (row === null) return []
+    return sheet
+      .all()
+      .filter(
+        (item): item is LineItem | PointItem =>
+          (isLineItem(item) || isPointItem(item)) && legendRowOf(item) === row,
+      )
+  }
+
+  watch(
+    () => sheet.itemsVersion,
+    () => map.setItems(sheet.all()),
+    { immediate: true },
+  )
+  watch(
+    () => sheet.faces,
+    (faces) => map.setFaces(faces),
+    { immediate: true },
+  )
+  watch(
+    () => workplace.hiddenEntries,
+    (hidden) =>
+      map.setHidden(
+        (item) => hidden.size > 0 && hidden.has(legendRowOf(item) ?? ''),
+        (unit) => unit !== null && hidden.has(unit),
+      ),
+    { immediate: true },
+  )
+  watch(
+    () => workplace.symbolSize,
+    (size) => map.setSymbolSize(size),
+    { immediate: true },
+  )
+  watch(
+    [() => workplace.selected, () => sheet.itemsVersion],
+    () => map.setMarks({ selected: placed(workplace.selected) }),
+    { immediate: true },
+  )
+  watch([() => workplace.hovered, () => workplace.rowInMargin, () => sheet.itemsVersion], () => {
+    const row = workplace.rowInMargin
+    map.setMarks({
+      hovered: row === null ? placed(workplace.hovered) : ofRow(row),
+      areas: row === null ? [] : sheet.faces.filter((face) => face.unit === row).map((face) => face.rings),
+    })
+  })
+  watch(
+    () => workplace.pendingAttitudePlace,
+    (place) => map.setMarks({ place }),
+    { immediate: true },
+  )
+  watch(
+    () => workplace.viewRequest,
+    (request) => {
+      if (request?.to === 'items') map.showItems(placed(request.ids))
+      else if (request?.to === 'place') map.showPlace(request.at, request.percent)
+      else if (request?.to === 'page') map.showPage()
+    },
+  )
+}
