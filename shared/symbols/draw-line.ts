@@ -160,7 +160,8 @@ function plungeFigure(
 /** From the tip back to where the figure stands beside the arrowhead. */
 const FIGURE_BEHIND_TIP: Millimetres = plungeHead.length * 0.6
 const FURTHEST_FIGURE: Millimetres = 9
-const WORTH_THE_OTHER_SIDE: Millimetres = 0.5
+/** Not a multiple of the search's step, so that rounding never decides between the sides. */
+const WORTH_THE_OTHER_SIDE: Millimetres = 0.52
 
 /** The stretch of the trace that a figure at its end could meet. */
 function traceNear(symbol: LineSymbol, line: MeasuredLine, end: 'start' | 'end'): Mark {
