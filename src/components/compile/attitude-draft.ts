@@ -16,7 +16,12 @@ export interface AttitudeDraft {
 
 /** What a draft says: a plane against true north with the reading kept beside it, or why it says none. */
 export type DraftOutcome =
-  | { outcome: 'plane'; plane: Plane; reading: Reading; /** Degrees added to come to true north. */ turned: Degrees }
+  | {
+      outcome: 'plane'
+      plane: Plane
+      reading: Reading
+      /** Degrees added to come to true north. */ turned: Degrees
+    }
   | { outcome: 'refused'; field: 'text' | 'declination'; reason: string }
 
 /** Reads a draft.

@@ -52,10 +52,14 @@ export interface TrendProposal {
 const PICTURE = { width: 15, height: 9 }
 
 /** Both ways an axis may plunge, each with its azimuth in whole degrees and the trace drawn small with its arrow there. */
-export function trendProposals(item: AxialTrace, plunge: Degrees, convergenceAt: ConvergenceAt): TrendProposal[] {
+export function trendProposals(
+  item: AxialTrace,
+  plunge: Degrees,
+  convergenceAt: ConvergenceAt,
+): TrendProposal[] {
   const line = item.geometry.coordinates
   const { atStart, atEnd } = traceTrends(line, convergenceAt)
-  return ([['start', atStart] as const, ['end', atEnd] as const]).map(([value, azimuth]) => {
+  return [['start', atStart] as const, ['end', atEnd] as const].map(([value, azimuth]) => {
     const trend = normalizeAzimuth(Math.round(azimuth))
     const text = `${azimuthFigure(trend)}°`
     const list = picture(item, plunge, trend, convergenceAt)
@@ -64,7 +68,12 @@ export function trendProposals(item: AxialTrace, plunge: Degrees, convergenceAt:
 }
 
 /** Shown larger than life, a plunge of a horizontal axis has no arrow; any plunge shows where it would point. */
-function picture(item: AxialTrace, plunge: Degrees, trend: Azimuth, convergenceAt: ConvergenceAt): DisplayList {
+function picture(
+  item: AxialTrace,
+  plunge: Degrees,
+  trend: Azimuth,
+  convergenceAt: ConvergenceAt,
+): DisplayList {
   const line = item.geometry.coordinates
   const east = line.map((point) => point[0])
   const north = line.map((point) => point[1])
@@ -78,7 +87,9 @@ function picture(item: AxialTrace, plunge: Degrees, trend: Azimuth, convergenceA
     plunge: Math.max(1, plunge),
     trend,
   } as const
-  return drawItem({ ...item, properties }, { origin, mmPerMetre, convergenceAt }).filter((mark) => mark.mark !== 'text')
+  return drawItem({ ...item, properties }, { origin, mmPerMetre, convergenceAt }).filter(
+    (mark) => mark.mark !== 'text',
+  )
 }
 
 function pictureBox(list: DisplayList): Box {

@@ -50,7 +50,9 @@ function unitLabelTitle(unit: UnitProperties | undefined, identity: string): str
 function attitudeTitle({ properties }: ItemOf<'attitude'>): string {
   const type = capital(properties.type)
   const words = describeAttitude(properties)
-  return words === 'Horizontal' ? `${type}, horizontal` : `${type} ${words.charAt(0).toLowerCase()}${words.slice(1)}`
+  return words === 'Horizontal'
+    ? `${type}, horizontal`
+    : `${type} ${words.charAt(0).toLowerCase()}${words.slice(1)}`
 }
 
 const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)
@@ -80,7 +82,10 @@ function faultTitle(item: ItemOf<'fault'>, context: WordsContext): string {
 }
 
 /** Azimuth from true north toward the decorated side of a fault, square to the line from its one end to the other. */
-export function sideAzimuth(item: ItemOf<'fault'>, { convergenceAt }: Pick<WordsContext, 'convergenceAt'>): Azimuth {
+export function sideAzimuth(
+  item: ItemOf<'fault'>,
+  { convergenceAt }: Pick<WordsContext, 'convergenceAt'>,
+): Azimuth {
   const line = item.geometry.coordinates
   const [first, last] = [line[0], line.at(-1)]
   if (!first || !last) return 0

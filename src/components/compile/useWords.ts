@@ -16,8 +16,7 @@ export function useWords() {
   }
   const sheetFace = (): ItemOf<'sheet-face'> | undefined => sheet.ofKind('sheet-face')[0]
   /** How this sheet's team writes attitudes. */
-  const convention = (): AttitudeConvention =>
-    sheetFace()?.properties.attitudeConvention ?? 'strike-dip'
+  const convention = (): AttitudeConvention => sheetFace()?.properties.attitudeConvention ?? 'strike-dip'
 
   return { context, convention }
 }
