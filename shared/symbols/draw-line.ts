@@ -33,7 +33,7 @@ export function drawLine(symbol: LineSymbol, points: readonly MM[], drawing: Lin
   const { decorations, queries } = placesOn(line, drawn, symbol, drawing)
   const head = plungeArrow(line, drawing)
   return [
-    ...strokes(symbol, line, drawing, gaps(drawn, queries)),
+    ...strokes(symbol, line, drawing, { between: betweenQueries(drawn, queries), decorations }),
     ...decorations.flatMap((at) => decorate(symbol, line, at, drawing)),
     ...queries.map((at) => queryMark(symbol, line.pointAt(at))),
     ...head,
@@ -73,7 +73,7 @@ function roomBesideHead(line: MeasuredLine, end: 'start' | 'end'): Stretch {
 }
 
 /** The stretches between the question marks. */
-function gaps([from, to]: Stretch, queries: readonly Millimetres[]): Stretch[] {
+function betweenQueries([from, to]: Stretch, queries: readonly Millimetres[]): Stretch[] {
   const edges = [from, ...queries.flatMap((at) => [at - queryWidth / 2, at + queryWidth / 2]), to]
   return edges.flatMap((start, index): Stretch[] => {
     const end = edges[index + 1]
@@ -85,14 +85,31 @@ function strokes(
   symbol: LineSymbol,
   line: MeasuredLine,
   { locationConfidence }: LineDrawing,
-  stretches: readonly Stretch[],
+  { between, decorations }: { between: readonly Stretch[]; decorations: readonly Millimetres[] },
 ): Mark[] {
   const stroke = symbol.strokes[locationConfidence]
-  const path = stretches.flatMap(([from, to]) => polyline(line.slice(from, to)))
+  const reach = Math.max(stroke.dash?.[0] ?? 0, symbol.decoration?.size ?? 0) / 2
+  const runs = stroke.dash ? between.flatMap((stretch) => runsBetween(stretch, decorations, reach)) : between
+  const path = runs.flatMap(([from, to]) => polyline(line.slice(from, to)))
   if (path.length === 0) return []
   const mark: StrokeMark = { mark: 'stroke', path, ink: symbol.ink, ...stroke }
   if (symbol.core === undefined) return [mark]
   return [mark, { ...mark, ...symbol.core }]
+}
+
+/** A dashed stretch in runs from one decoration to the next, each reaching past it by half a dash: as runs start and end
+ *  in a dash, every decoration stands on one and none over a gap. */
+function runsBetween(
+  [from, to]: Stretch,
+  decorations: readonly Millimetres[],
+  reach: Millimetres,
+): Stretch[] {
+  const inside = decorations.filter((at) => at > from && at < to)
+  const ends = [...inside.map((at) => Math.min(to, at + reach)), to]
+  return [from, ...inside.map((at) => Math.max(from, at - reach))].map((start, index) => [
+    start,
+    ends[index] ?? to,
+  ])
 }
 
 function decorate(

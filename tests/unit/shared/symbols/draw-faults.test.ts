@@ -2,6 +2,8 @@ import { describe, expect, it } from 'vitest'
 import type { FaultProperties } from '@shared/items/lines'
 import { drawItem } from '@shared/symbols/draw-item'
 import type { DisplayList, Mark } from '@shared/symbols/display-list'
+import { cutDashes } from '@shared/symbols/dashes'
+import { flatten } from '@shared/symbols/paths'
 import { inkPoints } from '@shared/symbols/place-marks'
 import type { MM, XY } from '@shared/units'
 import { aDrawnContact, aDrawnFault, plainFrame, straight, waving } from '../../../support/drawn-items'
@@ -94,6 +96,24 @@ describe('a lateral fault', () => {
     const west = straight(90, 30).toReversed()
     expect(heads('right-lateral', west)).toEqual({ north: 1, south: -1 })
     expect(heads('left-lateral', west)).toEqual({ north: -1, south: 1 })
+  })
+})
+
+describe.each(['approximate', 'inferred'] as const)('a dashed line located %s', (locationConfidence) => {
+  it('carries each decoration on a dash, never over a gap', () => {
+    for (let length = 20; length < 90; length += 3) {
+      const list = draw(straight(90, length), { type: 'normal', locationConfidence })
+      const [stroke, ...bars] = list.filter((mark) => mark.mark === 'stroke')
+      const dashes = stroke?.dash ? flatten(cutDashes(stroke.path, stroke.dash)) : []
+      expect(bars.length).toBeGreaterThan(0)
+      for (const bar of bars) {
+        const [foot = 0] = inkPoints([bar])[0]?.points[0] ?? []
+        const carries = dashes.some(
+          (dash) => (dash[0]?.[0] ?? 0) < foot - 0.5 && (dash.at(-1)?.[0] ?? 0) > foot + 0.5,
+        )
+        expect(carries, `a line of ${length} mm`).toBe(true)
+      }
+    }
   })
 })
 
