@@ -88,7 +88,7 @@ function strokes(
   { between, decorations }: { between: readonly Stretch[]; decorations: readonly Millimetres[] },
 ): Mark[] {
   const stroke = symbol.strokes[locationConfidence]
-  const reach = Math.max(stroke.dash?.[0] ?? 0, symbol.decoration?.size ?? 0) / 2
+  const reach = (stroke.dash?.[0] ?? 0) / 2
   const runs = stroke.dash ? between.flatMap((stretch) => runsBetween(stretch, decorations, reach)) : between
   const path = runs.flatMap(([from, to]) => polyline(line.slice(from, to)))
   if (path.length === 0) return []
