@@ -4,7 +4,6 @@ import {
   type Identity,
   type LocationConfidence,
 } from '@shared/items/confidence'
-import type { ItemKind } from '@shared/items/item'
 import type { Box } from '@shared/sheet-face/page-layout'
 import type { DisplayList } from '@shared/symbols/display-list'
 import { lineSymbols } from '@shared/symbols/draw-item'
@@ -18,13 +17,14 @@ export interface SampleOption<V extends string> {
   box: Box
 }
 
-const SAMPLE = { width: 13, height: 3 }
-const MARGIN = 1.5
+/** Wide enough for three long dashes. */
+const SAMPLE = { width: 12, height: 3.4 }
+const MARGIN = 1
 
-/** The four location confidences as drawn samples: plain lines of the weight of the kind.
- *  @param kind a line kind; faults are heavy, all others light */
-export const locationOptions = (kind: ItemKind): SampleOption<LocationConfidence>[] =>
-  locationConfidences.map((value) => option(value, capital(value), { kind, locationConfidence: value }))
+/** The four location confidences as drawn samples: plain lines, heavy enough to be told apart on a slip. */
+export const locationOptions: readonly SampleOption<LocationConfidence>[] = locationConfidences.map((value) =>
+  option(value, capital(value), { locationConfidence: value }),
+)
 
 const identityTitles: Record<Identity, string> = {
   certain: 'Certain to be what it is called',
@@ -32,28 +32,26 @@ const identityTitles: Record<Identity, string> = {
 }
 
 /** Certain and questioned identity as drawn samples. */
-export const identityOptions = (kind: ItemKind): SampleOption<Identity>[] =>
-  identities.map((value) => option(value, identityTitles[value], { kind, identity: value }))
+export const identityOptions: readonly SampleOption<Identity>[] = identities.map((value) =>
+  option(value, identityTitles[value], { identity: value }),
+)
 
 function option<V extends string>(
   value: V,
   title: string,
-  line: { kind: ItemKind; locationConfidence?: LocationConfidence; identity?: Identity },
+  line: { locationConfidence?: LocationConfidence; identity?: Identity },
 ): SampleOption<V> {
   return { value, title, list: sampleLine(line), box: { x: 0, y: 0, ...SAMPLE } }
 }
 
 function sampleLine({
-  kind,
   locationConfidence = 'certain',
   identity = 'certain',
 }: {
-  kind: ItemKind
   locationConfidence?: LocationConfidence
   identity?: Identity
 }): DisplayList {
-  const plainKind = kind === 'fault' ? 'fault' : 'contact'
-  const symbol = lineSymbols.find((candidate) => candidate.kind === plainKind)
+  const symbol = lineSymbols.find((candidate) => candidate.kind === 'fault')
   const middle = SAMPLE.height / 2
   if (!symbol) return []
   return drawLine(
@@ -66,4 +64,6 @@ function sampleLine({
   )
 }
 
-const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)
+function capital(word: string): string {
+  return word.charAt(0).toUpperCase() + word.slice(1)
+}
