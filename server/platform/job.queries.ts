@@ -39,6 +39,15 @@ export async function updateJob(em: EntityManager, id: string, change: JobChange
 export const listOpenJobs = (em: EntityManager): Promise<Job[]> =>
   em.query(`SELECT ${columns} FROM job WHERE state IN ('waiting', 'running') ORDER BY created_at`)
 
+/** Open jobs of a sheet, and those that ended within the last minutes: who was away meanwhile should hear of them. */
+export const listRecentJobs = (em: EntityManager, sheet: string): Promise<Job[]> =>
+  em.query(
+    `SELECT ${columns} FROM job
+     WHERE sheet = $1 AND (state IN ('waiting', 'running') OR changed_at > now() - interval '5 minutes')
+     ORDER BY created_at`,
+    [sheet],
+  )
+
 /** Holds a job for this process by an advisory lock on a connection of its own; undefined if another process holds it.
  *  PostgreSQL lets go when the process dies, so a job of a dead worker can be told from one being done. */
 export async function holdJob(

@@ -4,7 +4,7 @@ import type { DataSource, EntityManager } from 'typeorm'
 import type { Job } from '@shared/api/jobs'
 import { announce } from './announce'
 import { JobRow } from './job.entity'
-import { holdJob, insertJob, listOpenJobs, updateJob, type JobChange } from './job.queries'
+import { holdJob, insertJob, listOpenJobs, listRecentJobs, updateJob, type JobChange } from './job.queries'
 import { ProblemError } from './problem'
 
 /** Work for later. */
@@ -98,6 +98,11 @@ export class Jobs {
   async find(id: string): Promise<Job | undefined> {
     const row = await this.dataSource.manager.findOneBy(JobRow, { id })
     return row ? toJobAnswer(row) : undefined
+  }
+
+  /** The jobs of a sheet that are open or ended a moment ago, oldest first. */
+  listRecent(sheetNumber: string): Promise<Job[]> {
+    return listRecentJobs(this.dataSource.manager, sheetNumber)
   }
 
   private async send(em: EntityManager, job: Job): Promise<void> {

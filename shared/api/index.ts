@@ -7,10 +7,11 @@ import * as health from './health'
 import * as intake from './intake'
 import * as jobs from './jobs'
 import * as ledger from './ledger'
+import * as openapi from './openapi'
 import * as review from './review'
 import * as sheets from './sheets'
 
-const rooms = [health, accounts, sheets, ledger, faces, intake, review, jobs, events, catalogue]
+const rooms = [health, accounts, sheets, ledger, faces, intake, review, jobs, events, catalogue, openapi]
 
 const isEndpoint = (value: unknown): value is Endpoint =>
   typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'access' in value

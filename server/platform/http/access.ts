@@ -31,8 +31,6 @@ export interface CallContext {
   uploadFolder: string
   /** Whether answers are checked against their schema before they are sent: on in tests. */
   checkAnswers: boolean
-  /** Throws 'stale-form' unless the request carries the session's own token. */
-  checkToken(request: Express.Request): void
 }
 
 declare global {

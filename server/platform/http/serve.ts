@@ -6,6 +6,7 @@ import { problem } from '../problem'
 import type { SheetIdentity, SignedIn } from './access'
 import { parseInput } from './parse-input'
 import { readJson, readUpload, removeUpload, type UploadedFile } from './read-body'
+import { checkToken } from './session'
 
 /** Who calls, and for members' endpoints on which sheet. */
 type Caller<X extends Access> = X extends { to: 'members' }
@@ -50,7 +51,7 @@ export function serve<
 ): void {
   const handle: RequestHandler = async (request, response) => {
     requireAccount(endpoint.access, request.user)
-    if (endpoint.method !== 'get') response.locals.context.checkToken(request)
+    if (endpoint.method !== 'get') checkToken(request)
     const params = parseParams(endpoint, request.params)
     const caller = await admit(endpoint, params, request.user, response)
     const query = parseInput(endpoint.query, { ...request.query })

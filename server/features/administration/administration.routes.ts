@@ -1,0 +1,14 @@
+import type { Router } from 'express'
+import { inviteAccount, listAccounts, listMembers, setMember } from '@shared/api/accounts'
+import { serve } from '../../platform/http/serve'
+import type { AdministrationService } from './administration.service'
+
+export function mountAdministration(router: Router, administration: AdministrationService): void {
+  serve(router, listAccounts, () => administration.listAccounts())
+  serve(router, inviteAccount, ({ body }) => administration.invite(body))
+  serve(router, listMembers, ({ sheet }) => administration.listMembers(sheet.id))
+  serve(router, setMember, async ({ params, body, account }) => {
+    await administration.setMember(params.sheet, params.account, body.roles, account)
+    return null
+  })
+}
