@@ -5,6 +5,7 @@ import type { SheetFaceProperties } from '../items/legend'
 import type { Mark } from '../symbols/display-list'
 import type { Millimetres, XY } from '../units'
 import { heightOf, space, stack, type Block } from './block'
+import { colophon } from './colophon'
 import { drawColumns, fillColumns } from './columns'
 import { unitsById } from './compose-face'
 import type { EditionStatement } from './edition-statement'
@@ -85,17 +86,23 @@ function tooFull(items: readonly Item[], margin: Box): string {
 }
 
 function setMargin(input: SheetFaceInput, face: Box, margin: Box, type: TypeScale): Mark[] | undefined {
+  const { sheet, edition } = input
+  const { authors } = sheetFaceOf(input.items)
   const below = setBelowFace(input, face, type)
   if (!below) return undefined
-  const title = titleBlock(input.sheet, sheetFaceOf(input.items).authors, input.edition, margin.width, type)
-  const top = margin.y + margin.height
-  const columns = setColumns(
-    input,
-    { ...margin, height: margin.height - title.height },
-    type,
-    below.hasStatements ? [] : ['statements'],
+  const title = titleBlock(sheet, authors, edition, margin.width, type)
+  const foot = colophon(sheet, authors, edition, margin.width, type)
+  const [bottom, top] = [margin.y, margin.y + margin.height]
+  const rest = { ...margin, y: bottom + foot.height, height: margin.height - title.height - foot.height }
+  const columns = setColumns(input, rest, type, below.hasStatements ? [] : ['statements'])
+  return (
+    columns && [
+      ...title.draw(margin.x, top),
+      ...columns,
+      ...foot.draw(margin.x, bottom + foot.height),
+      ...below.marks,
+    ]
   )
-  return columns && [...title.draw(margin.x, top), ...columns, ...below.marks]
 }
 
 function setColumns(
