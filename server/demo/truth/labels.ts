@@ -1,7 +1,8 @@
 import type { Metres, XY } from '@shared/units'
 import type { Line } from './contours'
 import type { Truth } from './truth'
-import { layerAt } from './units'
+import { layerAt, markerBed } from './units'
+import { slope } from './vectors'
 
 /** A place inside an area, with what the area is: a layer's number, or a kind of cover. */
 export interface Label {
@@ -124,11 +125,11 @@ function areasOf({ codes, columns, rows }: Raster): number[][] {
   })
 }
 
-/** The deepest cell, then the deepest of those far from all before; none on an axial trace if that can be helped. */
+/** The deepest cell, then the deepest of those far from all before; none on another line if that can be helped. */
 function spread(truth: Truth, { depths, placeOf }: Raster, cells: readonly number[]): number[] {
   const deepest = cells.map((cell) => ({ cell, depth: depths[cell] ?? 0 })).sort((a, b) => b.depth - a.depth)
   const isFree = ({ cell, depth }: { cell: number; depth: number }) =>
-    depth * CELL >= CLEAR && !isOnHinge(truth, placeOf(cell))
+    depth * CELL >= CLEAR && !isOnLine(truth, placeOf(cell))
   const first = deepest.find(isFree) ?? deepest[0]
   const chosen = first ? [first.cell] : []
   for (const candidate of deepest) {
@@ -143,9 +144,13 @@ function spread(truth: Truth, { depths, placeOf }: Raster, cells: readonly numbe
   return chosen
 }
 
-function isOnHinge({ onGround, field }: Truth, xy: XY): boolean {
-  const across = onGround.across(onGround.blockAt(xy))(xy)
-  return field.hinges.some((hinge) => Math.abs(across - hinge.across) < 150)
+/** Whether an axial trace or the marker bed runs beneath. */
+function isOnLine({ onGround, field }: Truth, xy: XY): boolean {
+  const block = onGround.blockAt(xy)
+  const across = onGround.across(block)(xy)
+  const height = onGround.height(block)
+  const fromMarker = Math.abs(height(xy) - markerBed.height) / Math.hypot(...slope(height, xy))
+  return fromMarker < 110 || field.hinges.some((hinge) => Math.abs(across - hinge.across) < 150)
 }
 
 /** Whether a place lies inside a closed line. Source: the even-odd rule. */

@@ -1,5 +1,5 @@
 import type { Degrees, Metres, XY } from '@shared/units'
-import { contactHeights } from './units'
+import { contactHeights, markerBed } from './units'
 import { planeOfGradient, type Block } from './field'
 import type { Random } from './random'
 import type { Truth } from './truth'
@@ -49,7 +49,9 @@ function isClear(truth: Truth, at: XY): boolean {
   const block = truth.onGround.blockAt(at)
   const height = truth.onGround.height(block)
   const steepness = Math.hypot(...slope(height, at))
-  const near = contactHeights.some((level) => Math.abs(height(at) - level) < 90 * steepness)
+  const near = [...contactHeights, markerBed.height].some(
+    (level) => Math.abs(height(at) - level) < 90 * steepness,
+  )
   const [across, hinges] = [truth.onGround.across(block)(at), truth.field.hinges]
   const onHinge = hinges.some((hinge) => Math.abs(across - hinge.across) < 110)
   const covered = truth.cover.some(({ surface, unit }) => surface(at) > (unit === 'peat' ? -0.25 : -90))
