@@ -21,6 +21,9 @@ export interface Drawing {
   steps: readonly Step[]
 }
 
+/** Thinnest stroke on screen: a finer one turns grey and patchy. */
+const LEAST_WIDTH_PX = 0.8
+
 /** Makes a display list ready for the canvas. */
 export function makeDrawing(list: DisplayList, at: { origin: XY; mmPerMetre: number }): Drawing {
   const surface = recordingSurface()
@@ -63,8 +66,10 @@ export function drawDrawing(
     switch (step.step) {
       case 'paint':
         applyPaint(context, step.paint)
-        if (step.paint.paint === 'stroke') context.stroke(step.path)
-        else {
+        if (step.paint.paint === 'stroke') {
+          context.lineWidth = Math.max(step.paint.width, LEAST_WIDTH_PX / pxPerMm)
+          context.stroke(step.path)
+        } else {
           context.fill(step.path, 'evenodd')
           context.globalAlpha = 1
         }

@@ -11,9 +11,9 @@ export interface PxBox {
 }
 
 /** White edges of the page on screen at the smallest symbol size: room for grid figures and the scale bar. */
-const EDGE = { left: 58, top: 66, bottom: 64, gutter: 62, right: 28 } as const
+const EDGE = { left: 60, top: 62, bottom: 78, gutter: 76, right: 26 } as const
 /** Symbol size that these edges are made for, px per mm; above it they grow with the figures that stand in them. */
-const EDGE_PX_PER_MM = 2.45
+const EDGE_PX_PER_MM = 3.6
 /** Air between the page and the desk's edge when the whole page is shown. */
 const DESK_EDGE: Px = 20
 /** Width of the margin column on the page, by how wide the desk is. */

@@ -1,6 +1,7 @@
 import OlMap from 'ol/Map'
 import View from 'ol/View'
 import { defaults as defaultInteractions } from 'ol/interaction/defaults'
+import MouseWheelZoom from 'ol/interaction/MouseWheelZoom'
 import { easeOut } from 'ol/easing'
 import type { Face } from '@shared/api/faces'
 import type { Sheet } from '@shared/api/sheets'
@@ -23,13 +24,15 @@ export type { MapPointer } from './pointer-gestures'
 export type { Sketch } from './sketch'
 
 /** Farthest zooms, as shares of print size. */
-const MOST_SHARE = 40
+const MOST_SHARE = 16
 /** How far beyond the whole page one may zoom out. */
 const BEYOND_PAGE = 2.2
 /** How near to a line, and to a point's symbol, a click counts. */
 const LINE_REACH_PX = 7
 const POINT_REACH_MM = 3.2
 const ANIMATION_MS = 160
+/** Zoom of one notch of the wheel, powers of two. */
+const WHEEL_LEVELS = 0.5
 
 export interface SheetMapHandlers extends GestureHandlers {
   leave(): void
@@ -81,8 +84,10 @@ export class SheetMap {
         doubleClickZoom: false,
         shiftDragZoom: false,
         keyboard: false,
-        zoomDuration: reducesMotion() ? 0 : ANIMATION_MS,
-      }),
+        mouseWheelZoom: false,
+      }).extend([
+        new MouseWheelZoom({ maxDelta: WHEEL_LEVELS, duration: reducesMotion() ? 0 : ANIMATION_MS }),
+      ]),
       layers: [this.sheetLayer, this.marksLayer],
       view: new View({
         projection: viewProjection(sheet.crs),
@@ -108,8 +113,13 @@ export class SheetMap {
   private listen(handlers: SheetMapHandlers): void {
     this.map.addInteraction(new PointerGestures(handlers))
     this.map.on('click', (event) => handlers.click(pointerOf(event)))
-    this.map.on('dblclick', (event) => handlers.doubleClick(pointerOf(event)))
-    this.map.getViewport().addEventListener('pointerleave', () => handlers.leave())
+    const viewport = this.map.getViewport()
+    // OpenLayers takes any two quick clicks for a double one, however far apart; the browser's own event does not.
+    viewport.addEventListener('dblclick', (event) => {
+      const [east = 0, north = 0] = this.map.getEventCoordinate(event)
+      handlers.doubleClick({ at: [east, north], alt: event.altKey, shift: event.shiftKey })
+    })
+    viewport.addEventListener('pointerleave', () => handlers.leave())
     this.map.on('precompose', ({ frameState }) => {
       if (!frameState) return
       const view = viewOf(frameState)

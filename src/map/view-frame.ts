@@ -7,8 +7,9 @@ export type PxPoint = [x: Px, y: Px]
 
 /** Pixels of one printed millimetre at 100 %: CSS defines 96 px as an inch of 25.4 mm. Source: CSS Values 4, section 6.2. */
 export const PRINT_PX_PER_MM = 96 / 25.4
-/** Below this share of print size symbols stop shrinking with the sheet: smaller numerals cannot be read. */
-const LEAST_SYMBOL_SHARE = 0.62
+/** Symbols shrink with the sheet only down to a share of print size at which they can still be read: with the whole sheet
+ *  on a large screen the numerals of a 2.5 mm type are some 9 px high. Farther out they give way a little more. */
+const LEAST_SYMBOL_SHARE = { least: 0.78, most: 0.95, base: 0.55, perShare: 0.9 } as const
 
 /** What of the sheet is on screen. North is up; the view never turns. */
 export interface ViewFrame {
@@ -41,6 +42,8 @@ export const pxPerMetreAt = (share: number, scaleDenominator: number): number =>
 /** Pixels of one symbol millimetre: as the sheet's own down to where symbols could no longer be read. Above print size
  *  they grow with the sheet, or keep the size they have at 100 %. */
 export function symbolPxPerMm(share: number, above: 'print' | 'screen'): number {
-  const shown = Math.max(LEAST_SYMBOL_SHARE, above === 'screen' ? Math.min(1, share) : share)
+  const { least, most, base, perShare } = LEAST_SYMBOL_SHARE
+  const readable = Math.min(most, Math.max(least, base + perShare * share))
+  const shown = Math.max(readable, above === 'screen' ? Math.min(1, share) : share)
   return PRINT_PX_PER_MM * shown
 }

@@ -58,8 +58,8 @@ export class Sender<A> {
   }
 
   private async run(): Promise<void> {
-    this.enter('sending')
     while (!this.closed && this.ports.batches().length > 0) {
+      if (this.state !== 'sending') this.enter('sending')
       const request = await this.freeze()
       const delivery = await this.ports.post(request.body, request.key)
       if (this.closed) return
@@ -71,7 +71,7 @@ export class Sender<A> {
       }
       await this.ports.acknowledge(delivery.answer)
     }
-    this.enter('idle')
+    if (this.state !== 'idle') this.enter('idle')
   }
 
   private async freeze(): Promise<NonNullable<Batch['request']>> {

@@ -92,6 +92,10 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     viewRequest.value = { to: 'place', at, percent: toPercent }
   }
 
+  function toggleSymbolSize(): void {
+    symbolSize.value = symbolSize.value === 'print' ? 'screen' : 'print'
+  }
+
   function toggleHidden(entry: string): void {
     const next = new Set(hiddenEntries.value)
     if (!next.delete(entry)) next.add(entry)
@@ -139,6 +143,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     zoomTo,
     showPage,
     showPlace,
+    toggleSymbolSize,
     toggleHidden,
     reset,
   }

@@ -19,11 +19,20 @@ export const instrumentGroups = [
 ] as const
 
 export type Instrument = (typeof instrumentGroups)[number][number]
-export type InstrumentId = Instrument['id'] | 'snap'
-/** Everything that a key does, the rail's instruments and snapping. */
-export const instruments: readonly (
-  Instrument | { id: 'snap'; title: string; key: string; changes: false }
-)[] = [...instrumentGroups.flat(), { id: 'snap', title: 'Snapping on or off', key: 'S', changes: false }]
+export type InstrumentId = Instrument['id'] | KeyOnly['id']
+interface KeyOnly {
+  id: 'snap' | 'symbol-size'
+  title: string
+  key: string
+  changes: false
+}
+
+/** Everything that a key does: the rail's instruments, and what is switched at the foot. */
+export const instruments: readonly (Instrument | KeyOnly)[] = [
+  ...instrumentGroups.flat(),
+  { id: 'snap', title: 'Snapping on or off', key: 'S', changes: false },
+  { id: 'symbol-size', title: 'Symbols grow or keep their size', key: 'P', changes: false },
+]
 
 /** How a key is written in a tooltip. */
 export const keyWords = (key: string): string =>

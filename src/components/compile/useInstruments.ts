@@ -40,6 +40,9 @@ export function useInstruments(desk: () => DeskParts | undefined) {
         return workplace.showPage()
       case 'snap':
         workplace.snapping = !workplace.snapping
+        return
+      case 'symbol-size':
+        workplace.toggleSymbolSize()
     }
   }
 
