@@ -1,7 +1,7 @@
 import { createPinia } from 'pinia'
 import { createApp } from 'vue'
-import '../styles/index.css'
 import App from './App.vue'
 import { router } from './router'
+import '../styles/index.css'
 
 createApp(App).use(createPinia()).use(router).mount('#app')

@@ -1,151 +1,139 @@
+import type { Access, Endpoint, Form } from '@shared/api/endpoint'
 import type { z } from 'zod'
-import type { Endpoint } from '@shared/api/endpoint'
-import { problemSchema, problems, type Problem, type ProblemSlug } from '@shared/api/problems'
-import { getSession } from '@shared/api/accounts'
+import { ApiProblem } from './problem'
+import { send, type Outgoing } from './send'
 
-/** The server answered that something stands in the way. Without any answer, `call` throws fetch's own TypeError. */
-export class ApiProblem extends Error {
-  constructor(readonly problem: Problem) {
-    super(problem.detail)
+export { ApiProblem } from './problem'
+
+/** A part of the input may be left out where nothing in it is required. */
+type Part<Name extends string, Value> =
+  Record<string, never> extends Value ? { [N in Name]?: Value } : { [N in Name]: Value }
+
+type FilePart<F extends Form> = F extends 'upload'
+  ? Form extends F
+    ? { file?: File }
+    : { file: File }
+  : unknown
+
+/** What a call takes: the endpoint's parameters, query and body, the file of an upload. */
+export type Input<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType, F extends Form> = Part<
+  'params',
+  z.output<P>
+> &
+  Part<'query', z.input<Q>> &
+  Part<'body', z.input<B>> &
+  FilePart<F> & {
+    headers?: Record<string, string>
+    signal?: AbortSignal
+    /** Told how much of an upload has left, 0–1. */
+    progress?: (part: number) => void
   }
+
+/** What the client needs of the session, and tells it. */
+export interface SessionTie {
+  csrfToken(): string
+  /** Gets a fresh token where the server holds the page for out of date. */
+  renewToken(): Promise<void>
+  /** A call needed someone signed in, and nobody is any more. */
+  ended(): void
 }
 
-/** What a call of an endpoint needs; parts that the endpoint does not have may be left out. */
-export interface CallInput<P extends z.ZodType, Q extends z.ZodType, B extends z.ZodType> {
-  params?: z.input<P>
-  query?: z.input<Q>
-  body?: z.input<B>
-  /** Of an upload. */
-  file?: File
-  headers?: Record<string, string>
-  signal?: AbortSignal
+let session: SessionTie = { csrfToken: () => '', renewToken: () => Promise.resolve(), ended: () => undefined }
+
+/** The session store ties itself in, so that the client need not know it. */
+export function tieSession(tie: SessionTie): void {
+  session = tie
 }
 
-let csrfToken = ''
-let onSignedOut: () => void = () => {}
-
-/** Keeps the token that comes with each session answer. */
-export const keepCsrfToken = (token: string): void => {
-  csrfToken = token
-}
-/** Told when a call finds that the session has ended. */
-export const whenSignedOut = (listener: () => void): void => {
-  onSignedOut = listener
-}
-
-/** Calls an endpoint of the API and gives its answer.
- *  @throws ApiProblem with what the server says stands in the way; TypeError if there is no answer */
+/** Calls an endpoint. A page that is out of date (signed in again elsewhere) is brought up to date once, unasked.
+ *  @throws ApiProblem for whatever is not the answer, also for a network that is down */
 export async function call<
   P extends z.ZodType,
   Q extends z.ZodType,
   B extends z.ZodType,
   A extends z.ZodType,
+  X extends Access,
+  F extends Form,
 >(
-  endpoint: Pick<Endpoint<P, Q, B, A>, 'id' | 'method' | 'path' | 'params' | 'query' | 'body' | 'answer'>,
-  input: CallInput<P, Q, B> = {},
+  endpoint: Endpoint<P, Q, B, A, X, F>,
+  ...[input]: Record<string, never> extends Input<P, Q, B, F> ? [Input<P, Q, B, F>?] : [Input<P, Q, B, F>]
 ): Promise<z.output<A>> {
-  const first = await send(endpoint, input)
-  if (first.status !== 403 || (await peekSlug(first)) !== 'stale-form') return read(first)
-  // The token ages with the session: take a fresh one, and try once more.
-  await refreshCsrfToken()
-  return read(await send(endpoint, input))
+  const loose: LooseInput = input ?? {}
+  try {
+    return await attempt(endpoint, loose)
+  } catch (error) {
+    if (!(error instanceof ApiProblem)) throw error
+    if (error.slug === 'stale-form') {
+      await session.renewToken()
+      return await attempt(endpoint, loose)
+    }
+    if (error.slug === 'not-signed-in') session.ended()
+    throw error
+  }
 }
 
-type Address = Pick<Endpoint, 'method' | 'path'>
-type AnyInput = {
+interface LooseInput {
   params?: unknown
   query?: unknown
   body?: unknown
   file?: File
   headers?: Record<string, string>
   signal?: AbortSignal
+  progress?: (part: number) => void
 }
 
-function send({ method, path }: Address, input: AnyInput): Promise<Response> {
-  const changes = method !== 'get'
-  const hasJson = changes && !input.file && input.body !== undefined
-  return fetch(addressOf(path, input), {
-    method: method.toUpperCase(),
-    credentials: 'same-origin',
-    signal: input.signal ?? null,
-    headers: {
-      Accept: 'application/json',
-      ...(hasJson && { 'Content-Type': 'application/json' }),
-      ...(changes && { 'X-CSRF-Token': csrfToken }),
-      ...input.headers,
-    },
-    body: input.file ? toForm(input.file) : hasJson ? JSON.stringify(input.body) : null,
-  })
+async function attempt<A extends z.ZodType>(
+  endpoint: Endpoint<z.ZodType, z.ZodType, z.ZodType, A>,
+  input: LooseInput,
+) {
+  // The server makes its answers by the same schemas; reading a sheet of 100 000 items twice would cost seconds.
+  return (await send(toOutgoing(endpoint, input))) as z.output<A>
 }
 
-/** Address of an endpoint under /api, its parameters and query filled in. */
+function toOutgoing(endpoint: Endpoint, input: LooseInput): Outgoing {
+  const headers: Record<string, string> = { Accept: 'application/json', ...input.headers }
+  if (endpoint.method !== 'get') headers['X-CSRF-Token'] = session.csrfToken()
+  const { signal, progress } = input
+  const outgoing: Outgoing = {
+    method: endpoint.method.toUpperCase(),
+    url: addressOf(endpoint, input),
+    headers,
+    signal,
+    progress,
+  }
+  if (input.file) outgoing.body = formOf(input.file, input.body)
+  else if (input.body !== undefined) {
+    headers['Content-Type'] = 'application/json'
+    outgoing.body = JSON.stringify(input.body)
+  }
+  return outgoing
+}
+
+const record = (value: unknown): Record<string, unknown> => ({ ...(value as object | undefined) })
+
+/** The address of an endpoint with its parameters filled in, under /api: for links to files. */
 export function addressOf(
-  path: string,
+  endpoint: Pick<Endpoint, 'path'>,
   { params, query }: { params?: unknown; query?: unknown } = {},
 ): string {
-  const values = (params ?? {}) as Record<string, unknown>
-  const filled = path.replace(/\{(\w+)\}/g, (_, name: string) => encodeURIComponent(String(values[name])))
+  const values = record(params)
+  const filled = endpoint.path.replace(/\{(\w+)\}/g, (_, name: string) =>
+    encodeURIComponent(String(values[name])),
+  )
   const search = new URLSearchParams()
-  for (const [name, value] of Object.entries(query ?? {})) {
-    if (value !== undefined && value !== '') search.set(name, String(value))
+  for (const [name, value] of Object.entries(record(query))) {
+    if (value !== undefined && value !== null) search.set(name, String(value))
   }
-  return `/api${filled}${search.size > 0 ? `?${search}` : ''}`
+  const suffix = search.toString()
+  return `/api${filled}${suffix ? `?${suffix}` : ''}`
 }
 
-function toForm(file: File): FormData {
+function formOf(file: File, fields: unknown): FormData {
   const form = new FormData()
-  form.append('file', file)
+  for (const [name, value] of Object.entries(record(fields))) {
+    if (value !== undefined) form.append(name, typeof value === 'string' ? value : JSON.stringify(value))
+  }
+  // After the fields, so that a server reading in order knows them when the file comes.
+  form.append('file', file, file.name)
   return form
-}
-
-// The answer's schema is the server's to keep (its tests check it); parsing 100 000 items again here would cost seconds.
-async function read<T>(response: Response): Promise<T> {
-  if (response.ok) return (response.status === 204 ? null : await response.json()) as T
-  const problem = await toProblem(response)
-  if (problem.type === '/problems/not-signed-in') onSignedOut()
-  throw new ApiProblem(problem)
-}
-
-async function peekSlug(response: Response): Promise<string | undefined> {
-  const problem = await toProblem(response.clone())
-  return problem.type.split('/').at(-1)
-}
-
-async function toProblem(response: Response): Promise<Problem> {
-  const parsed = problemSchema.safeParse(await response.json().catch(() => null))
-  return parsed.data ?? unknownProblem(response)
-}
-
-/** A proxy, or something else that is not ours, answered. */
-function unknownProblem(response: Response): Problem {
-  const slug: ProblemSlug =
-    response.status === 413 ? 'file-too-large' : response.status >= 500 ? 'unavailable' : 'unexpected'
-  const { title, todo } = problems[slug]
-  return {
-    type: `/problems/${slug}`,
-    title,
-    todo,
-    status: response.status,
-    detail: `The server answered ${response.status}.`,
-    instance: '',
-  }
-}
-
-async function refreshCsrfToken(): Promise<void> {
-  const session = await read<z.output<typeof getSession.answer>>(await send(getSession, {}))
-  keepCsrfToken(session.csrfToken)
-}
-
-/** What stands in the way, also where there was no answer at all. @throws whatever is neither */
-export function toShownProblem(error: unknown): Problem {
-  if (error instanceof ApiProblem) return error.problem
-  if (!(error instanceof TypeError)) throw error
-  return {
-    type: '/problems/unavailable',
-    title: 'The server does not answer',
-    status: 0,
-    detail: 'There is no connection to the server.',
-    instance: '',
-    todo: 'Check the network, then try again. What you typed is still here.',
-  }
 }

@@ -1,110 +1,121 @@
 import { createRouter, createWebHistory, type RouteRecordRaw } from 'vue-router'
-import { useSessionStore } from '@/stores/session'
+import { installGuards } from './guards'
 
 declare module 'vue-router' {
   interface RouteMeta {
+    /** What the browser's tab and the announcement of the page say. */
     title: string
-    /** Readable without signing in. */
-    public?: boolean
-    /** For administrators only. */
-    administrator?: boolean
-    /** The view brings its own bar: the places of a sheet's workplace. */
-    ownBar?: boolean
+    access?: 'signed-in' | 'administrator'
+    /** The places of a sheet have a bar of their own. */
+    workplace?: boolean
   }
 }
 
-/** A place of a sheet's workplace. */
-const place = (name: string, view: RouteRecordRaw['component'], title: string): RouteRecordRaw =>
-  ({ path: `/sheets/:sheet/${name}`, name, component: view, meta: { title, ownBar: true } }) as RouteRecordRaw
+const sheetPlaces: RouteRecordRaw[] = [
+  { path: '', redirect: (to) => `${to.path.replace(/\/$/, '')}/compile` },
+  {
+    path: 'compile',
+    name: 'compile',
+    component: () => import('@/views/CompileView.vue'),
+    meta: place('Compile'),
+  },
+  {
+    path: 'intake',
+    name: 'intake',
+    component: () => import('@/views/IntakeView.vue'),
+    meta: place('Intake'),
+  },
+  {
+    path: 'review',
+    name: 'review',
+    component: () => import('@/views/ReviewView.vue'),
+    meta: place('Review'),
+  },
+  {
+    path: 'ledger',
+    name: 'ledger',
+    component: () => import('@/views/LedgerView.vue'),
+    meta: place('Ledger'),
+  },
+]
 
-const routes: RouteRecordRaw[] = [
-  { path: '/', redirect: () => (useSessionStore().account ? '/sheets' : '/catalogue') },
+function place(title: string) {
+  return { title, access: 'signed-in', workplace: true } as const
+}
+
+export const routes: RouteRecordRaw[] = [
+  {
+    path: '/',
+    name: 'start',
+    component: () => import('@/views/CatalogueView.vue'),
+    meta: { title: 'Catalogue' },
+  },
   {
     path: '/sign-in',
     name: 'sign-in',
     component: () => import('@/views/SignInView.vue'),
-    meta: { title: 'Sign in', public: true },
+    meta: { title: 'Sign in' },
   },
   {
     path: '/link/:token',
     name: 'link',
     component: () => import('@/views/LinkView.vue'),
-    meta: { title: 'Your account', public: true },
+    meta: { title: 'One-time link' },
   },
   {
     path: '/sheets',
     name: 'sheets',
     component: () => import('@/views/SheetsView.vue'),
-    meta: { title: 'Sheets' },
+    meta: { title: 'Sheets', access: 'signed-in' },
   },
   {
     path: '/sheets/new',
     name: 'new-sheet',
     component: () => import('@/views/NewSheetView.vue'),
-    meta: { title: 'New sheet' },
+    meta: { title: 'New sheet', access: 'signed-in' },
   },
-  { path: '/sheets/:sheet', redirect: (to) => ({ name: 'compile', params: to.params }) },
-  place('compile', () => import('@/views/CompileView.vue'), 'Compile'),
-  place('intake', () => import('@/views/IntakeView.vue'), 'Intake'),
-  place('review', () => import('@/views/ReviewView.vue'), 'Review'),
-  place('ledger', () => import('@/views/LedgerView.vue'), 'Ledger'),
+  { path: '/sheets/:sheet', children: sheetPlaces },
   {
     path: '/administration',
     name: 'administration',
     component: () => import('@/views/AdministrationView.vue'),
-    meta: { title: 'Administration', administrator: true },
+    meta: { title: 'Administration', access: 'administrator' },
   },
   {
     path: '/catalogue',
     name: 'catalogue',
     component: () => import('@/views/CatalogueView.vue'),
-    meta: { title: 'Catalogue', public: true },
+    meta: { title: 'Catalogue' },
   },
   {
-    path: '/catalogue/:sheet/:edition',
+    path: '/catalogue/:sheet/:edition(\\d+)',
     name: 'edition',
     component: () => import('@/views/EditionView.vue'),
-    meta: { title: 'Edition', public: true },
+    meta: { title: 'Edition' },
   },
   {
     path: '/api-reference',
     name: 'api-reference',
     component: () => import('@/views/ApiReferenceView.vue'),
-    meta: { title: 'API', public: true },
+    meta: { title: 'API' },
   },
   {
     path: '/problems/:slug',
     name: 'problem',
     component: () => import('@/views/ProblemView.vue'),
-    meta: { title: 'Problem', public: true },
+    meta: { title: 'Problem' },
   },
   {
-    path: '/:path(.*)*',
+    path: '/:rest(.*)*',
     name: 'not-found',
     component: () => import('@/views/NotFoundView.vue'),
-    meta: { title: 'Nothing here', public: true },
+    meta: { title: 'Nothing here' },
   },
 ]
 
 export const router = createRouter({
   history: createWebHistory(),
   routes,
-  scrollBehavior: (_to, _from, saved) => saved ?? { top: 0 },
+  scrollBehavior: (to, from, saved) => saved ?? (to.path === from.path ? undefined : { top: 0 }),
 })
-
-router.beforeEach(async (to) => {
-  const session = useSessionStore()
-  // Public pages show themselves even if the server cannot say who is signed in.
-  await session.load().catch((error: unknown) => {
-    if (!to.meta.public) throw error
-  })
-  if (!to.meta.public && !session.account) return { name: 'sign-in', query: { to: to.fullPath } }
-  if (to.meta.administrator && !session.account?.administrator)
-    return { name: 'not-found', params: { path: ['administration'] } }
-  return true
-})
-
-router.afterEach((to) => {
-  const sheet = typeof to.params['sheet'] === 'string' ? `${to.params['sheet']} · ` : ''
-  document.title = `${sheet}${to.meta.title} · Sheetwright`
-})
+installGuards(router)

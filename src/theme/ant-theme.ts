@@ -1,49 +1,67 @@
-import { theme as ant } from 'ant-design-vue'
 import type { ThemeConfig } from 'ant-design-vue/es/config-provider/context'
-import { CORNER, FONT_FAMILY, palettes, type, type ThemeName } from './tokens'
+import { CORNER, FONT_FAMILY, onPaper, palettes, type, type ThemeName } from './tokens'
 
-/** Ant Design Vue in our ink and paper. */
+/** Ant Design Vue in our ink and paper: square, flat, dense, ruled; slate where one may act, oxide for the filled button. */
 export function antTheme(name: ThemeName): ThemeConfig {
-  const { ink, quiet, rule, oxide, slate, ochre, moss, slip, field, hover } = palettes[name]
+  const { ink, quiet, rule, oxide, slate, ochre, moss, desk, slip, field, hover } = palettes[name]
+  const { 'field-edge': edge, 'on-oxide': onOxide, shadow } = palettes[name]
   return {
-    algorithm: name === 'dark' ? ant.darkAlgorithm : ant.defaultAlgorithm,
     token: {
       fontFamily: FONT_FAMILY,
       fontSize: type.body,
+      lineHeight: 1.4,
       borderRadius: CORNER,
       borderRadiusLG: CORNER,
       borderRadiusSM: CORNER,
-      colorPrimary: oxide,
+      borderRadiusXS: CORNER,
+      colorPrimary: slate,
+      colorInfo: slate,
       colorLink: slate,
-      colorLinkHover: ink,
-      colorLinkActive: ink,
+      colorLinkHover: slate,
+      colorLinkActive: slate,
       colorError: oxide,
+      colorErrorText: oxide,
       colorWarning: ochre,
       colorSuccess: moss,
-      colorInfo: slate,
       colorText: ink,
+      colorTextBase: ink,
+      colorTextHeading: ink,
       colorTextSecondary: quiet,
+      colorTextTertiary: quiet,
       colorTextDescription: quiet,
       colorTextPlaceholder: quiet,
-      colorBorder: rule,
+      colorTextDisabled: quiet,
+      colorIcon: quiet,
+      colorBorder: edge,
       colorBorderSecondary: rule,
+      colorSplit: rule,
+      colorBgBase: slip,
       colorBgContainer: field,
       colorBgElevated: slip,
-      colorBgLayout: slip,
+      colorBgLayout: desk,
+      colorBgContainerDisabled: hover,
       controlItemBgHover: hover,
-      controlItemBgActive: hover,
+      controlItemBgActive: onPaper['wash-oxide'],
       controlOutline: 'transparent',
+      controlOutlineWidth: 0,
       controlHeight: 30,
+      controlHeightSM: 24,
+      controlHeightLG: 34,
       lineWidth: 1,
+      motionDurationFast: '0.12s',
       motionDurationMid: '0.14s',
       motionDurationSlow: '0.18s',
-      wireframe: false,
       boxShadow: 'none',
-      boxShadowSecondary: '0 8px 24px rgb(40 30 15 / 22%)',
+      boxShadowSecondary: shadow,
+      wireframe: false,
     },
     components: {
-      Button: { controlTmpOutline: 'transparent' } as object,
-      Table: { colorBgContainer: 'transparent', colorFillAlter: 'transparent' },
+      Button: {
+        colorPrimary: oxide,
+        colorPrimaryHover: oxide,
+        colorPrimaryActive: oxide,
+        colorTextLightSolid: onOxide,
+      },
     },
   }
 }

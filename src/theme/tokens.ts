@@ -1,4 +1,4 @@
-/** The one source of colours, type and corners. CSS variables (`css-variables.ts`) and Ant Design Vue's tokens
+/** The one source of colours, type and corners. CSS variables (`apply-theme.ts`) and Ant Design Vue's tokens
  *  (`ant-theme.ts`) are made from it. */
 export interface Palette {
   /** Behind the page. */
@@ -22,12 +22,14 @@ export interface Palette {
   ochre: string
   /** Advice. */
   stone: string
-  /** Done. */
+  /** Behind light letters: the third ink of people's initials. */
   moss: string
   /** Selected row. */
   wash: string
   /** Ground of an input on a slip. */
   field: string
+  /** Edge of an input: at least 3 : 1 on a slip and on paper. */
+  'field-edge': string
   /** Row under the pointer on a slip. */
   hover: string
   /** Under the page. */
@@ -52,6 +54,7 @@ export const palettes: Record<ThemeName, Palette> = {
     moss: '#5d7a3a',
     wash: '#efe6d3',
     field: '#fdfaf3',
+    'field-edge': '#8b8474',
     hover: '#ece4d3',
     shadow: '0 1px 2px rgb(60 45 25 / 25%), 0 12px 30px rgb(60 45 25 / 16%)',
   },
@@ -67,9 +70,10 @@ export const palettes: Record<ThemeName, Palette> = {
     slate: '#8fb4d1',
     ochre: '#c98a1b',
     stone: '#8b8474',
-    moss: '#9ab874',
+    moss: '#5d7a3a',
     wash: '#efe6d3',
     field: '#1b1a18',
+    'field-edge': '#857d70',
     hover: '#322f2b',
     shadow: '0 1px 2px rgb(0 0 0 / 45%), 0 12px 30px rgb(0 0 0 / 40%)',
   },
@@ -85,7 +89,7 @@ export const onPaper = {
   'wash-oxide': '#f3dcd3',
 } as const
 
-export const FONT_FAMILY = 'Lato, sans-serif'
+export const FONT_FAMILY = "Lato, 'Helvetica Neue', Arial, sans-serif"
 
 /** Pixels. */
 export const type = {
