@@ -1,4 +1,5 @@
 import { createServer, type Server } from 'node:http'
+import type { DemoAccount } from '@shared/api/accounts'
 import { createApp } from './app'
 import { readConfig } from './config'
 import { loadDemoAccounts } from './features/accounts/demo-accounts'
@@ -10,7 +11,7 @@ const GRACE_MS = 15_000
 
 /** What the start script hears once people can come. */
 export interface ReadyMessage {
-  ready: { url: string; demo: boolean; firstAdministratorLink: string | undefined }
+  ready: { url: string; demoAccounts: DemoAccount[]; firstAdministratorLink: string | undefined }
 }
 
 async function main(): Promise<void> {
@@ -25,7 +26,9 @@ async function main(): Promise<void> {
   stopOnSignal(services, server)
   const firstAdministratorLink =
     config.parts.web && !config.demo ? await services.links.makeFirstAdministratorLink() : undefined
-  tellReady({ ready: { url: config.url, demo: config.demo, firstAdministratorLink } })
+  tellReady({
+    ready: { url: config.url, demoAccounts: services.accounts.listDemoAccounts(), firstAdministratorLink },
+  })
 }
 
 async function listen(services: Services): Promise<Server> {
@@ -52,7 +55,7 @@ function tellReady(message: ReadyMessage): void {
     return
   }
   const { url, firstAdministratorLink } = message.ready
-  process.stderr.write(`Sheetwright is ready at ${url}\n`)
+  process.stderr.write(`The server answers at ${url}\n`)
   if (firstAdministratorLink) {
     process.stderr.write(
       `Make the first administrator here (once, within a day): ${firstAdministratorLink}\n`,

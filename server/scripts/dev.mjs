@@ -1,35 +1,76 @@
-// npm run dev: the same database as npm start, with hot reload of client and server.
+import { spawn } from 'node:child_process'
 import { join } from 'node:path'
-import { runTogether } from './lib/children.mjs'
-import { freePort } from './lib/cluster.mjs'
-import { chosenPort, prepareInstallation } from './lib/installation.mjs'
-import { main } from './lib/say.mjs'
-import { projectFolder } from './lib/stamps.mjs'
+import { setTimeout } from 'node:timers/promises'
+import { ensurePackages } from './lib/npm-packages.mjs'
+import { findFreePort } from './lib/ports.mjs'
+import { dataFolder, projectFolder } from './lib/project.mjs'
+import { ended } from './lib/run.mjs'
+import { fail, say } from './lib/say.mjs'
+import { startServer } from './lib/server-process.mjs'
+import { askedToStop, checkMachine, host, openDatabase, port, sayReady } from './lib/up.mjs'
 
-await main(async () => {
-  const port = chosenPort()
-  const { environment, stop } = await prepareInstallation({ port })
-  const serverPort = await freePort()
-  const api = `http://127.0.0.1:${serverPort}`
-  const env = { ...environment, TSX_TSCONFIG_PATH: join(projectFolder, 'server/tsconfig.json') }
-  const at = (path) => join(projectFolder, 'node_modules', path)
+/** `npm run dev`: as `npm start`, but Vite serves the client from its sources and the server begins again when its own
+ *  change. Vite answers at PORT and passes calls on to the server behind it. */
+async function main() {
+  const stopping = askedToStop()
+  await checkMachine()
+  await ensurePackages()
+  const database = await openDatabase()
+  const serverPort = String(await findFreePort())
+  const address = `http://${host}:${port}`
+  const server = startServer({
+    dataFolder,
+    settings: {
+      ...database.settings,
+      SHEETWRIGHT_DATA: dataFolder,
+      SHEETWRIGHT_URL: address,
+      PORT: serverPort,
+    },
+    watch: true,
+  })
+  const vite = startVite(`http://${host}:${serverPort}`)
   try {
-    return await runTogether([
-      {
-        command: process.execPath,
-        args: [at('tsx/dist/cli.mjs'), 'watch', '--clear-screen=false', 'server/main.ts'],
-        options: {
-          cwd: projectFolder,
-          env: { ...env, PORT: String(serverPort), SHEETWRIGHT_URL: `http://127.0.0.1:${port}` },
-        },
-      },
-      {
-        command: process.execPath,
-        args: [at('vite/bin/vite.js'), '--port', String(port), '--strictPort'],
-        options: { cwd: projectFolder, env: { ...env, SHEETWRIGHT_API: api } },
-      },
-    ])
+    const demoAccounts = await Promise.race([whenServing(serverPort), stopping, server.ended, ended(vite)])
+    if (Array.isArray(demoAccounts)) {
+      sayReady({ url: address, demoAccounts })
+      await Promise.race([stopping, server.ended, ended(vite)])
+    }
   } finally {
-    stop()
+    say('\nStopping …')
+    vite.kill('SIGTERM')
+    await Promise.all([server.stop(), ended(vite)])
+    await database.stop()
   }
-})
+}
+
+/** The demo accounts, once the server answers. */
+async function whenServing(serverPort) {
+  for (;;) {
+    const answer = await fetch(`http://${host}:${serverPort}/api/session`).catch(() => undefined)
+    if (answer?.ok) return (await answer.json()).demoAccounts
+    await setTimeout(300)
+  }
+}
+
+const startVite = (api) =>
+  spawn(
+    process.execPath,
+    [
+      join(projectFolder, 'node_modules/vite/bin/vite.js'),
+      '--host',
+      host,
+      '--port',
+      String(port),
+      '--strictPort',
+    ],
+    {
+      cwd: projectFolder,
+      env: { ...process.env, SHEETWRIGHT_API: api },
+      stdio: ['ignore', 'inherit', 'inherit'],
+      detached: true,
+    },
+  )
+
+main()
+  .catch(fail)
+  .finally(() => process.exit())
