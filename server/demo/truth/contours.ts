@@ -50,7 +50,34 @@ export function levelLines(sampled: Sampled, level: number): Line[] {
       for (const [from, to] of cellPairs(grid, column, row)) graph.join(from, to)
     }
   }
-  return graph.lines().map((line) => line.map((crossing) => placeOf(grid, crossing)))
+  return graph.lines().map((line) =>
+    withBends(
+      line.map((crossing) => placeOf(grid, crossing)),
+      above,
+    ),
+  )
+}
+
+/** How far a piece of a line may depart from the level between its vertices. */
+const LARGEST_BEND: Metres = 0.25
+
+/** A line with further vertices on the level wherever it bends. */
+const withBends = (line: Line, surface: Surface): Line =>
+  line.flatMap((place, index) => {
+    const next = line[index + 1]
+    return next ? [place, ...bendsBetween(place, next, surface, 5)] : [place]
+  })
+
+function bendsBetween(from: XY, to: XY, surface: Surface, depth: number): Line {
+  const middle: XY = [(from[0] + to[0]) / 2, (from[1] + to[1]) / 2]
+  const bend = ontoZero(surface, middle)
+  const departure = Math.hypot(bend[0] - middle[0], bend[1] - middle[1])
+  if (departure < LARGEST_BEND || depth === 0) return []
+  return [
+    ...bendsBetween(from, bend, surface, depth - 1),
+    bend,
+    ...bendsBetween(bend, to, surface, depth - 1),
+  ]
 }
 
 interface Grid {
