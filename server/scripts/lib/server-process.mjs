@@ -10,7 +10,10 @@ const PATIENCE_MS = 20_000
 
 /** Starts the server; `ready` resolves with what it says once people can come (never while watching), undefined if it
  *  ends before that.
- *  @param {{ dataFolder: string, settings: NodeJS.ProcessEnv, watch?: boolean }} options */
+ *  @param {{ dataFolder: string, settings: NodeJS.ProcessEnv, watch?: boolean }} options
+ *  @returns {{ child: import('node:child_process').ChildProcess, ready: Promise<Ready | undefined>, ended: Promise<void>,
+ *    stop(): Promise<void> }}
+ *  @typedef {import('../../main').ReadyMessage['ready']} Ready */
 export function startServer({ dataFolder, settings, watch = false }) {
   const log = openLog(dataFolder)
   const program = watch
