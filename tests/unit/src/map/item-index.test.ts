@@ -1,0 +1,118 @@
+import { describe, expect, it } from 'vitest'
+import { isInFace } from '@/map/in-face'
+import { ItemIndex } from '@/map/item-index'
+import { thinLine } from '@/map/thin-line'
+import { aLine, aPoint, aUnit } from '../../../support/sheet-items'
+
+const contact = aLine(
+  'contact',
+  [
+    [0, 0],
+    [100, 0],
+  ],
+  {},
+)
+const fault = aLine(
+  'fault',
+  [
+    [0, 3],
+    [100, 3],
+  ],
+  {},
+)
+const station = aPoint('station', [50, 8], {})
+const index = new ItemIndex([station, fault, contact, aUnit({})])
+
+describe('picking', () => {
+  it('gives points before lines, and the nearer line first', () => {
+    const hits = index.pick([50, 2], { line: 5, point: 8 })
+    expect(hits.map(({ id }) => id)).toEqual([station.id, fault.id, contact.id])
+  })
+
+  it('gives what is drawn on top first where distances are equal', () => {
+    const twin = aLine(
+      'axial-trace',
+      [
+        [0, 0],
+        [100, 0],
+      ],
+      { form: 'anticline' },
+    )
+    const hits = new ItemIndex([twin, contact]).pick([50, 0], { line: 5, point: 5 })
+    expect(hits.map(({ id }) => id)).toEqual([twin.id, contact.id])
+  })
+
+  it('tests the line itself, not the box around it', () => {
+    const slanting = new ItemIndex([
+      aLine(
+        'contact',
+        [
+          [0, 0],
+          [100, 100],
+        ],
+        {},
+      ),
+    ])
+    expect(slanting.pick([90, 10], { line: 5, point: 5 })).toEqual([])
+  })
+
+  it('finds nothing on an empty sheet', () => {
+    expect(new ItemIndex([aUnit({})]).pick([0, 0], { line: 5, point: 5 })).toEqual([])
+  })
+})
+
+describe('what is in view', () => {
+  it('comes in the order of drawing: contacts, faults, points', () => {
+    const all = index.within({ min: [-10, -10], max: [200, 200] })
+    expect(all.map(({ kind }) => kind)).toEqual(['contact', 'fault', 'station'])
+  })
+})
+
+describe('a line for drawing', () => {
+  it('loses vertices nearer than the step but never its ends', () => {
+    expect(
+      thinLine(
+        [
+          [0, 0],
+          [0.4, 0],
+          [0.8, 0],
+          [1.2, 0],
+          [1.3, 0],
+        ],
+        1,
+      ),
+    ).toEqual([
+      [0, 0],
+      [1.2, 0],
+      [1.3, 0],
+    ])
+  })
+})
+
+describe('the unit under the pointer', () => {
+  const face = {
+    unit: contact.id,
+    rings: [
+      [
+        [0, 0],
+        [10, 0],
+        [10, 10],
+        [0, 10],
+        [0, 0],
+      ],
+      [
+        [4, 4],
+        [6, 4],
+        [6, 6],
+        [4, 6],
+        [4, 4],
+      ],
+    ] as [number, number][][],
+  }
+
+  it('is that of the area, not of the hole in it', () => {
+    expect(isInFace(face, [2, 2])).toBe(true)
+    expect(isInFace(face, [5, 5])).toBe(false)
+    expect(isInFace(face, [20, 5])).toBe(false)
+  })
+})
