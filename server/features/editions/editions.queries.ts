@@ -53,19 +53,21 @@ export async function findLatestEdition(
   return row
 }
 
-export async function findStorageKey(
+/** Where storage keeps a file that an edition lists. */
+export async function getStorageKey(
   em: EntityManager,
   sheetNumber: string,
   edition: number,
   name: string,
-): Promise<string | undefined> {
+): Promise<string> {
   const [row] = await em.query<{ key: string }[]>(
     `SELECT artefact.storage_key AS key FROM artefact
      JOIN edition ON edition.id = artefact.edition_id JOIN sheet ON sheet.id = edition.sheet_id
      WHERE sheet.number = $1 AND edition.number = $2 AND artefact.name = $3`,
     [sheetNumber, edition, name],
   )
-  return row?.key
+  if (!row) throw new RangeError(`Edition ${edition} of sheet ${sheetNumber} has no file ${name}.`)
+  return row.key
 }
 
 export interface NewEdition {

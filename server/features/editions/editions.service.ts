@@ -6,7 +6,7 @@ import type { Storage } from '../../platform/storage'
 import {
   findEdition,
   findLatestEdition,
-  findStorageKey,
+  getStorageKey,
   selectEditions,
   type StoredEdition,
 } from './editions.queries'
@@ -38,10 +38,10 @@ export class EditionsService {
   ): Promise<{ artefact: Artefact; open: () => Promise<Readable> }> {
     const { artefacts } = await this.get(sheetNumber, edition)
     const artefact = artefacts.find((file) => file.name === name)
-    const key = await findStorageKey(this.dataSource.manager, sheetNumber, edition, name)
-    if (!artefact || key === undefined) {
-      throw problem('not-found', `Edition ${edition} of sheet ${sheetNumber} has no file ${name}.`)
+    if (!artefact) {
+      throw problem('not-found', `Edition ${edition} of sheet ${sheetNumber} has no file of this name.`)
     }
+    const key = await getStorageKey(this.dataSource.manager, sheetNumber, edition, artefact.name)
     return { artefact, open: () => this.storage.open(key) }
   }
 
