@@ -77,6 +77,10 @@ export function parseDeclination(text: string): Degrees | undefined {
   return west !== minus ? -size : size
 }
 
+/** A declination as people write it: `14.5 W`, `3 E`. */
+const declinationWords = (degrees: Degrees): string =>
+  degrees === 0 ? '0' : `${Math.abs(degrees)} ${degrees < 0 ? 'W' : 'E'}`
+
 /** An attitude as a draft to go on with: its reading as it was written, where the sheet's convention reads it the same
  *  way; else the values written in the sheet's convention against true north. */
 export function draftOf(properties: AttitudeProperties, convention: AttitudeConvention): AttitudeDraft {
@@ -86,7 +90,7 @@ export function draftOf(properties: AttitudeProperties, convention: AttitudeConv
       text: reading.text,
       overturned: properties.overturned,
       northReference: reading.northReference,
-      declination: reading.declination === null ? '' : String(reading.declination),
+      declination: reading.declination === null ? '' : declinationWords(reading.declination),
     }
   }
   return {

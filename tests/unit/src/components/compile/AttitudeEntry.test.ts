@@ -109,7 +109,7 @@ describe('a new reading', () => {
     await entry.trigger('submit')
     expect(entry.get('[role=alert]').text()).toContain('needs the declination')
     await entry.get('input.declination').setValue('14.5 W')
-    expect(entry.text()).toContain('14.5° subtracted for magnetic north')
+    expect(entry.text()).toContain('Magnetic to true north: −14.5°')
     await entry.trigger('submit')
     expect(added(sheet)).toMatchObject({ properties: { strike: 30.5, reading: { declination: -14.5 } } })
     const next = mount(AttitudeEntry, { props: { place: PLACE, start } })

@@ -107,7 +107,7 @@ describe('going on with an attitude', () => {
     expect(draftOf(reading('strike-dip', '059/40'), 'strike-dip')).toMatchObject({
       text: '059/40',
       northReference: 'magnetic',
-      declination: '-14',
+      declination: '14 W',
     })
     expect(draftOf(reading('quadrant', 'N59E 40SE'), 'dip-direction-dip').text).toBe('N59E 40SE')
   })

@@ -46,7 +46,9 @@ describe('the margin', () => {
   it('begins with the title of the sheet and where the draft stands', () => {
     const { margin } = open()
     expect(margin.get('h1').text()).toContain('Geologic map of')
-    expect(margin.get('header p').text()).toBe('Sheet MI-14draft toward edition 2revision 418')
+    expect(margin.get('header p').text().replaceAll('\u00a0', ' ')).toBe(
+      'Sheet MI-14 · draft toward edition 2 · revision 418',
+    )
   })
 
   it('lists units from the youngest down under their ages, with the number of their labels', () => {
