@@ -3,7 +3,8 @@ import { z } from 'zod'
 /** Most vertices that one line may carry: above this a line is an import error, not a trace. */
 export const MAX_VERTICES = 100_000
 
-const metres = z.number().min(-1e8).max(1e8)
+const metresRule = 'A coordinate is a number of metres within 100 000 km of the origin.'
+const metres = z.number(metresRule).min(-1e8, metresRule).max(1e8, metresRule)
 
 /** Point geometry in sheet metres. */
 export const pointGeometrySchema = z.strictObject({

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { azimuthSchema, inclinationSchema } from './angles'
 import { lineBasis } from './confidence'
 
 export const contactPropertiesSchema = z.strictObject({ ...lineBasis })
@@ -28,9 +29,9 @@ export const axialTracePropertiesSchema = z
     ...lineBasis,
     form: z.enum(foldForms),
     /** Plunge of the axis, degrees below horizontal, 0–90; null where it is not stated. */
-    plunge: z.number().min(0).max(90).nullable().default(null),
+    plunge: inclinationSchema.nullable().default(null),
     /** Trend of the axis: azimuth of its down-going end, degrees from true north; null where no plunge is stated. */
-    trend: z.number().min(0).lt(360).nullable().default(null),
+    trend: azimuthSchema.nullable().default(null),
   })
   .refine((axis) => (axis.plunge === null) === (axis.trend === null), {
     message: 'Plunge and trend go together: state both or neither.',

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { azimuthSchema, inclinationSchema } from './angles'
 import { identitySchema, pointBasis } from './confidence'
 
 export const northReferences = ['true', 'grid', 'magnetic'] as const
@@ -26,9 +27,9 @@ export const attitudePropertiesSchema = z
     ...pointBasis,
     type: z.enum(planeTypes).default('bedding'),
     /** Strike by the right-hand rule, degrees from true north; null only for a horizontal plane. */
-    strike: z.number().min(0).lt(360).nullable(),
+    strike: azimuthSchema.nullable(),
     /** Dip, degrees below horizontal, 0–90. */
-    dip: z.number().min(0).max(90),
+    dip: inclinationSchema,
     overturned: z.boolean().default(false),
     station: z.string().max(100).default(''),
     reading: readingSchema.nullable().default(null),
