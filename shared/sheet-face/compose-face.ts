@@ -19,7 +19,7 @@ export interface SheetPart {
 }
 
 /** Items of one part: few enough to draw in a moment, enough that parts stay few. */
-const ITEMS_PER_PART = 500
+const ITEMS_PER_PART = 100
 
 /** Kinds in the order of drawing: what must stay readable comes later. */
 const drawingOrder: readonly { kind: ItemKind; words: string }[] = [

@@ -9,14 +9,21 @@ import { latoWebFiles } from './lato-files'
 
 /** The printed page as an SVG picture on paper. It carries its fonts, because a picture in a page cannot load any. */
 export async function sheetSvg(page: Page, parts: readonly SheetPart[]): Promise<string> {
-  const marks: Mark[] = [{ mark: 'fill', path: rectangle(0, 0, page.width, page.height), ink: 'paper' }]
+  const box = { x: 0, y: 0, ...page }
+  const paper: Mark = { mark: 'fill', path: rectangle(0, 0, page.width, page.height), ink: 'paper' }
+  const [head, ground, tail] = elements(toSvg([paper], box))
+  const drawn: string[] = []
   for (const part of parts) {
-    for (const mark of part.draw()) marks.push(mark)
+    drawn.push(elements(toSvg(part.draw(), box))[1])
     await breathe()
   }
-  const svg = toSvg(marks, { x: 0, y: 0, ...page })
-  const start = svg.indexOf('>') + 1
-  return `${svg.slice(0, start)}<style>${await fontFaces()}</style>${svg.slice(start)}`
+  return `${head}<style>${await fontFaces()}</style>${ground}${drawn.join('')}${tail}`
+}
+
+/** An SVG's start tag, what stands in it, and its end tag. */
+function elements(svg: string): [head: string, content: string, tail: string] {
+  const [start, end] = [svg.indexOf('>') + 1, svg.lastIndexOf('</svg>')]
+  return [svg.slice(0, start), svg.slice(start, end), svg.slice(end)]
 }
 
 async function fontFaces(): Promise<string> {
