@@ -12,6 +12,7 @@ import {
   latestRevision,
   selectAuthors,
   selectEntries,
+  selectEntriesOf,
   selectItemsAt,
   selectTouchedIds,
 } from './ledger.queries'
@@ -90,10 +91,8 @@ export class HistoryService {
     const em = this.dataSource.manager
     const versions = await selectVersions(em, sheetId, itemId)
     if (versions.length === 0) throw problem('not-found', `There is no item ${itemId} on this sheet.`)
-    const oldest = versions.at(-1)?.since ?? 1
-    const entries = new Map(
-      (await selectEntries(em, sheetId, { above: oldest - 1 })).map((entry) => [entry.revision, entry]),
-    )
+    const numbers = versions.map((version) => version.since)
+    const entries = await selectEntriesOf(em, sheetId, numbers)
     return versions.flatMap((version) => {
       const entry = entries.get(version.since)
       return entry ? [{ ...version, entry }] : []

@@ -223,6 +223,20 @@ export async function selectEntries(
   return rows.map(toEntry)
 }
 
+/** The entries with these numbers, by number. */
+export async function selectEntriesOf(
+  em: EntityManager,
+  sheetId: string,
+  numbers: number[],
+): Promise<Map<number, LedgerEntry>> {
+  const rows = await em.query<EntryRow[]>(
+    `SELECT ${entryColumns} FROM revision JOIN account ON account.id = revision.author_id
+     WHERE sheet_id = $1 AND number = ANY($2::integer[])`,
+    [sheetId, numbers],
+  )
+  return new Map(rows.map((row) => [row.revision, toEntry(row)]))
+}
+
 /** The newest entry of each sheet, by sheet id. */
 export async function selectLastEntries(
   em: EntityManager,
