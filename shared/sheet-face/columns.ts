@@ -5,19 +5,24 @@ import { heightOf, isSpace, type Block } from './block'
 /** Tolerance of heights added up, millimetres: rounding only. */
 const ROUNDING: Millimetres = 1e-6
 
-/** Sections of blocks set in columns of one height. Whole sections are shared out so that the highest column is as low as
- *  can be; where that does not do, they run on from column to column, broken between blocks and never after a heading.
- *  Undefined where they do not fit: nothing is ever cut. */
-export function fillColumns(
+/** Sets sections of blocks in columns of one height; undefined where they do not fit: nothing is ever cut. */
+export type ColumnFill = (
   sections: readonly (readonly Block[])[],
   count: number,
   height: Millimetres,
-): Block[][] | undefined {
-  const filled = sections.filter((section) => section.length > 0)
-  const shared = shareOut(filled, count)
-  if (highest(shared) <= height + ROUNDING) return shared
-  return runOn(filled.flat(), count, height)
+) => Block[][] | undefined
+
+/** Whole sections, shared out so that the highest column is as low as can be. */
+export const fillWhole: ColumnFill = (sections, count, height) => {
+  const shared = shareOut(sections.filter(isFilled), count).map(withoutLeadingSpace)
+  return highest(shared) <= height + ROUNDING ? shared : undefined
 }
+
+/** Sections that run on from column to column, broken between blocks and never after a heading. */
+export const fillRunningOn: ColumnFill = (sections, count, height) =>
+  runOn(sections.filter(isFilled).flat(), count, height)
+
+const isFilled = (section: readonly Block[]): boolean => section.length > 0
 
 const highest = (columns: readonly (readonly Block[])[]): Millimetres => Math.max(0, ...columns.map(heightOf))
 
@@ -38,16 +43,22 @@ function runOn(blocks: readonly Block[], count: number, height: Millimetres): Bl
   const columns: Block[][] = [[]]
   for (const group of keptTogether(blocks)) {
     const column = columns.at(-1) ?? []
-    if (heightOf([...column, ...group]) <= height + ROUNDING) {
-      if (column.length > 0 || !group.every(isSpace)) column.push(...group)
+    const added = column.length === 0 ? withoutLeadingSpace(group) : group
+    if (heightOf([...column, ...added]) <= height + ROUNDING) {
+      column.push(...added)
       continue
     }
-    if (group.every(isSpace)) continue
-    const moved = group.slice(group.findIndex((block) => !isSpace(block)))
+    const moved = withoutLeadingSpace(group)
     if (heightOf(moved) > height + ROUNDING) return undefined
-    columns.push(moved)
+    if (moved.length > 0) columns.push(moved)
   }
   return columns.length <= count ? columns : undefined
+}
+
+/** White space at the head of a column would only set it lower than its neighbours. */
+function withoutLeadingSpace(blocks: readonly Block[]): Block[] {
+  const first = blocks.findIndex((block) => !isSpace(block))
+  return first < 0 ? [] : blocks.slice(first)
 }
 
 /** Blocks with the headings that must not be parted from them. */

@@ -6,13 +6,13 @@ import type { Mark } from '../symbols/display-list'
 import type { Millimetres, XY } from '../units'
 import { heightOf, space, stack, type Block } from './block'
 import { colophon } from './colophon'
-import { drawColumns, fillColumns } from './columns'
+import { drawColumns, fillRunningOn, fillWhole, type ColumnFill } from './columns'
 import { unitsById } from './compose-face'
 import type { EditionStatement } from './edition-statement'
 import { northDiagram } from './north-diagram'
 import { neatlineBounds, pageLayout, type Box } from './page-layout'
 import { findUnprintable } from './printable'
-import { scaleBar } from './scale-bar'
+import { scaleBar, SCALE_BAR_HEIGHT } from './scale-bar'
 import { cautionBox, creditsBlock, projectionBlock } from './statements'
 import { entriesInUse, symbolsList } from './symbols-list'
 import { titleBlock } from './title-block'
@@ -20,9 +20,11 @@ import { typeLadder, typeScale, type TypeScale } from './type-scale'
 import { unitsList } from './units-list'
 
 /** Room below the neatline for corner figures, and the white edge at the page's foot. */
-const BELOW_FACE: Millimetres = 15
-const FOOT: Millimetres = 12
+const BELOW_FACE: Millimetres = 13
+const FOOT: Millimetres = 9
 const COLUMN_GUTTER: Millimetres = 12
+/** White between title, columns and foot, at type factor 1. */
+const BETWEEN: Millimetres = 4
 /** Text columns: a narrower one cannot be read, a wider one loses the eye. */
 const NARROWEST: Millimetres = 52
 const WIDEST: Millimetres = 185
@@ -53,15 +55,36 @@ export function composeMargin(input: SheetFaceInput): MarginOutcome {
   const layout = pageLayout(input.sheet)
   const room = roomProblem(layout.face, layout.margin)
   if (room !== undefined) return { outcome: 'cannot-print', reason: room }
-  for (const type of typeLadder) {
-    const marks = setMargin(input, layout.face, layout.margin, type)
-    if (marks) return unprintable(marks) ?? { outcome: 'composed', marks, type }
+  const set = setLargest(input, layout.face, layout.margin)
+  if (!set) return { outcome: 'cannot-print', reason: tooFull(input.items, layout.margin) }
+  return unprintable(set.marks) ?? { outcome: 'composed', ...set }
+}
+
+/** Steps of smaller type that are worth taking to keep sections whole. */
+const STEPS_FOR_WHOLE = 2
+
+/** The largest type in which everything fits, or one little smaller in which no section is broken. */
+function setLargest(
+  input: SheetFaceInput,
+  face: Box,
+  margin: Box,
+): { marks: Mark[]; type: TypeScale } | undefined {
+  const tryFrom = (types: readonly TypeScale[], fill: ColumnFill) => {
+    for (const [index, type] of types.entries()) {
+      const marks = setMargin(input, face, margin, { type, fill })
+      if (marks) return { marks, type, index }
+    }
+    return undefined
   }
-  return { outcome: 'cannot-print', reason: tooFull(input.items, layout.margin) }
+  const broken = tryFrom(typeLadder, fillRunningOn)
+  const from = broken?.index ?? 0
+  const whole = tryFrom(broken ? typeLadder.slice(from, from + 1 + STEPS_FOR_WHOLE) : typeLadder, fillWhole)
+  const best = whole ?? broken
+  return best && { marks: best.marks, type: best.type }
 }
 
 function roomProblem(face: Box, margin: Box): string | undefined {
-  if (face.y < BELOW_FACE + FOOT) {
+  if (face.y < BELOW_FACE + SCALE_BAR_HEIGHT + FOOT) {
     return `The map face is ${face.height.toFixed(0)} mm high and does not leave room below it for the scale bar. Choose a higher page.`
   }
   const narrowest = NARROWEST * 0.8
@@ -85,16 +108,30 @@ function tooFull(items: readonly Item[], margin: Box): string {
   return `The legend (${units} units, ${symbols} symbols) does not fit the ${margin.width.toFixed(0)} × ${margin.height.toFixed(0)} mm beside the map face even in the smallest readable type. Choose a larger page or shorten the descriptions of units.`
 }
 
-function setMargin(input: SheetFaceInput, face: Box, margin: Box, type: TypeScale): Mark[] | undefined {
+interface Setting {
+  type: TypeScale
+  fill: ColumnFill
+}
+
+function setMargin(
+  input: SheetFaceInput,
+  face: Box,
+  margin: Box,
+  { type, fill }: Setting,
+): Mark[] | undefined {
   const { sheet, edition } = input
   const { authors } = sheetFaceOf(input.items)
   const below = setBelowFace(input, face, type)
-  if (!below) return undefined
   const title = titleBlock(sheet, authors, edition, margin.width, type)
   const foot = colophon(sheet, authors, edition, margin.width, type)
   const [bottom, top] = [margin.y, margin.y + margin.height]
-  const rest = { ...margin, y: bottom + foot.height, height: margin.height - title.height - foot.height }
-  const columns = setColumns(input, rest, type, below.hasStatements ? [] : ['statements'])
+  const gap = BETWEEN * type.factor
+  const rest = {
+    ...margin,
+    y: bottom + foot.height + gap,
+    height: margin.height - title.height - foot.height - 2 * gap,
+  }
+  const columns = setColumns(input, rest, { type, fill }, below.hasStatements ? [] : ['statements'])
   return (
     columns && [
       ...title.draw(margin.x, top),
@@ -108,32 +145,36 @@ function setMargin(input: SheetFaceInput, face: Box, margin: Box, type: TypeScal
 function setColumns(
   { sheet, items, edition }: SheetFaceInput,
   box: Box,
-  type: TypeScale,
+  { type, fill }: Setting,
   extra: readonly 'statements'[],
 ): Mark[] | undefined {
   const units = [...unitsById(items).values()]
   const entries = entriesInUse(items)
   for (const count of columnCounts(box.width, type)) {
-    const width = (box.width - (count - 1) * COLUMN_GUTTER) / count
+    const gutter = gutterFor(type)
+    const width = (box.width - (count - 1) * gutter) / count
     const statements = extra.flatMap(() =>
       statementBlocks({ sheet, items, edition }, width, type).flatMap((block) => [
-        space(5 * type.factor),
+        space(4 * type.factor),
         block,
       ]),
     )
     const sections = [unitsList(units, width, type), symbolsList(entries, width, type), statements]
-    const columns = fillColumns(sections, count, box.height)
+    const columns = fill(sections, count, box.height)
     if (columns) {
-      return drawColumns(columns, { x: box.x, top: box.y + box.height, width, gutter: COLUMN_GUTTER })
+      return drawColumns(columns, { x: box.x, top: box.y + box.height, width, gutter })
     }
   }
   return undefined
 }
 
+/** Small type stands closer. */
+const gutterFor = (type: TypeScale): Millimetres => COLUMN_GUTTER * Math.min(1, type.factor)
+
 /** Numbers of columns that give readable widths, fewest first. */
 function columnCounts(width: Millimetres, type: TypeScale): number[] {
   return [1, 2, 3, 4, 5, 6].filter((count) => {
-    const each = (width - (count - 1) * COLUMN_GUTTER) / count
+    const each = (width - (count - 1) * gutterFor(type)) / count
     return each >= NARROWEST * type.factor && (each <= WIDEST || count === 6)
   })
 }
@@ -159,10 +200,9 @@ function setBelowFace(
   input: SheetFaceInput,
   face: Box,
   type: TypeScale,
-): { marks: Mark[]; hasStatements: boolean } | undefined {
+): { marks: Mark[]; hasStatements: boolean } {
   const top = face.y - BELOW_FACE
   const bar = scaleBar(input.sheet.scale, face.width)
-  if (bar.height > top - FOOT) return undefined
   const scale = bar.draw(face.x, top)
   const row = statementRow(input, face.width, typeScale(Math.min(type.factor, STATEMENT_FACTOR), 1.28))
   const rowTop = top - bar.height - 8

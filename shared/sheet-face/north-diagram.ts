@@ -6,6 +6,7 @@ import { angleInWords } from './figures'
 import { textLines, type TextStyle } from './text-block'
 import type { TypeScale } from './type-scale'
 
+/** Length of the arrows at type factor 1 and above. */
 const ARM: Millimetres = 22
 /** Room above the arrows for their names, and beside the text for the whole diagram. */
 const LABEL: Millimetres = 4.5
@@ -28,23 +29,24 @@ export function northDiagram(convergence: Degrees, width: Millimetres, type: Typ
     width - ROOM,
     type.small,
   )
+  const arm = ARM * Math.min(1, type.factor ** 2)
   const heading = stack([paragraph('NORTH', width, type.age), space(0.8 * type.factor)])
   return {
-    height: heading.height + Math.max(words.height, ARM + LABEL),
+    height: heading.height + Math.max(words.height, arm + LABEL),
     draw: (x, top) => [
       ...heading.draw(x, top),
-      ...arrows(convergence, [x + 12, top - heading.height - ARM - LABEL]),
+      ...arrows(convergence, [x + 12, top - heading.height - arm - LABEL], arm),
       ...words.draw(x + ROOM, top - heading.height),
     ],
   }
 }
 
-function arrows(convergence: Degrees, foot: MM): Mark[] {
+function arrows(convergence: Degrees, foot: MM, arm: Millimetres): Mark[] {
   const agree = Math.round(Math.abs(convergence) * 60) === 0
   // The frame's up is grid north; true north lies the other way round from it.
   const drawn = agree ? 0 : -Math.sign(convergence) * Math.max(LEAST_DRAWN, Math.abs(convergence))
-  const grid = tip(foot, 0, ARM)
-  const north = tip(foot, drawn, ARM)
+  const grid = tip(foot, 0, arm)
+  const north = tip(foot, drawn, arm)
   const outside = drawn < 0 ? -1 : 1
   const label = (text: string, at: MM, side: number): Mark[] =>
     textLines(

@@ -10,7 +10,13 @@ import { textLines, type TextStyle } from './text-block'
 const BAR_HEIGHT: Millimetres = 1.6
 const FIGURE: TextStyle = { size: 2.5, weight: 400, ink: 'frame', leading: 1.2 }
 const RATIO: TextStyle = { size: 3.6, weight: 700, ink: 'black', leading: 1.2 }
-const HEIGHT: Millimetres = 17
+/** From the top of the ratio to the foot of the words below the bar. */
+export const SCALE_BAR_HEIGHT: Millimetres = 13.8
+/** From the top of the ratio to the top of the bar. */
+const BAR_BELOW: Millimetres = 8.4
+
+/** Share of its room that a bar takes at most: its unit stands beside it. */
+const SHARE = 0.85
 
 /** What a scale bar measures: whole units to the right of zero, and one divided unit to its left. */
 export interface ScaleBarPlan {
@@ -34,20 +40,20 @@ export function planScaleBar(scale: number, width: Millimetres): ScaleBarPlan {
 
 /** Scale as a ratio and as a bar, centred on a width. Lengths are exact grid lengths at the sheet's scale. */
 export function scaleBar(scale: number, width: Millimetres): Block {
-  const plan = planScaleBar(scale, width)
+  const plan = planScaleBar(scale, width * SHARE)
   const length = plan.unitMm * (plan.units + 1)
   return {
-    height: HEIGHT,
+    height: SCALE_BAR_HEIGHT,
     draw(x, top) {
       const zero = x + (width - length) / 2 + plan.unitMm
-      const bottom = top - 9.5 - BAR_HEIGHT
+      const bottom = top - BAR_BELOW - BAR_HEIGHT
       return [
         ...textLines([`Scale 1:${groupThousands(scale)}`], { x: x + width / 2, top, align: 'middle' }, RATIO),
         ...barMarks(plan, zero, bottom),
         ...barFigures(plan, zero, bottom + BAR_HEIGHT + 3.4),
         ...textLines(
           [groundWords(scale)],
-          { x: x + width / 2, top: bottom - 1.2, align: 'middle' },
+          { x: x + width / 2, top: bottom - 0.7, align: 'middle' },
           { ...FIGURE, ink: 'quiet' },
         ),
       ]

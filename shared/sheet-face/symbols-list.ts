@@ -32,7 +32,7 @@ export function symbolsList(entries: readonly LegendEntry[], width: Millimetres,
 
 function entryRow(entry: LegendEntry, width: Millimetres, type: TypeScale): Block {
   // Symbols stay at the size they have on the map; only the type around them follows the page.
-  const sample = { width: 18, height: 8 }
+  const sample = { width: 18, height: 8 * Math.min(1, type.factor) }
   const indent = sample.width + 4 * type.factor
   const words = paragraph(entry.title, width - indent, { ...type.text, ink: 'black' })
   const height = Math.max(sample.height, words.height)

@@ -51,10 +51,18 @@ const wordsOf = (list: DisplayList): string =>
     .map((text) => text.text)
     .join(' ')
     .replaceAll('\u00a0', ' ')
+    // A line may end after a hyphen.
+    .replaceAll('- ', '-')
 
 const small = aPrintedSheet({
   neatline: rectangleRing(284_000, 5_278_000, 289_000, 5_283_000),
   page: { width: 420, height: 297 },
+})
+
+/** As small as a page is proposed: the scale bar has exactly the room that the layout leaves for it. */
+const tiny = aPrintedSheet({
+  neatline: rectangleRing(284_000, 5_278_000, 286_200, 5_281_740),
+  page: { width: 297, height: 210 },
 })
 
 describe.each([
@@ -63,6 +71,7 @@ describe.each([
   ['A3, 12 units', small, unitItems(12, 10)],
   ['A3, 45 units', small, unitItems(45, 4)],
   ['A3 without a legend', small, []],
+  ['A4, 6 units', tiny, unitItems(6, 5)],
 ])('the margin of %s', (_, sheet, units) => {
   const items = [...units, ...mapItems()]
   const list = composed(sheet, items)
