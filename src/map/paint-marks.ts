@@ -33,9 +33,9 @@ export function paintMarks(
   context.lineJoin = context.lineCap = 'round'
   for (const rings of marks.areas) light(context, view, rings)
   for (const item of marks.hovered)
-    emphasize(context, view, item, { alpha: 0.2, halo: 7, line: 0, ring: symbolPx })
+    emphasize(context, view, item, { alpha: 0.28, halo: 8, isSelected: false, symbolPx })
   for (const item of marks.selected)
-    emphasize(context, view, item, { alpha: 0.3, halo: 8, line: 1.5, ring: symbolPx })
+    emphasize(context, view, item, { alpha: 0.2, halo: 8, isSelected: true, symbolPx })
   if (marks.place) ring(context, toPx(view, marks.place), 9, 2)
   if (marks.sketch) paintSketch(context, view, marks.sketch)
 }
@@ -43,30 +43,36 @@ export function paintMarks(
 interface Emphasis {
   alpha: number
   halo: number
-  line: number
-  ring: number
+  isSelected: boolean
+  symbolPx: number
 }
 
 function emphasize(
   context: CanvasRenderingContext2D,
   view: ViewFrame,
   item: LineItem | PointItem,
-  { alpha, halo, line, ring: symbolPx }: Emphasis,
+  { alpha, halo, isSelected, symbolPx }: Emphasis,
 ): void {
   if (!isLineItem(item)) {
-    context.globalAlpha = line > 0 ? 1 : 0.55
-    ring(context, toPx(view, item.geometry.coordinates), 4.6 * symbolPx, line > 0 ? 2 : 1.5)
+    context.globalAlpha = isSelected ? 1 : 0.55
+    ring(context, toPx(view, item.geometry.coordinates), 4.6 * symbolPx, isSelected ? 2 : 1.5)
     context.globalAlpha = 1
     return
   }
   trace(context, view, item.geometry.coordinates)
+  if (isSelected) {
+    // A casing: the symbol itself stays to be seen between its two edges.
+    context.lineWidth = halo + 3
+    context.stroke()
+    context.globalCompositeOperation = 'destination-out'
+    context.lineWidth = halo
+    context.stroke()
+    context.globalCompositeOperation = 'source-over'
+  }
   context.globalAlpha = alpha
   context.lineWidth = halo
   context.stroke()
   context.globalAlpha = 1
-  if (line === 0) return
-  context.lineWidth = line
-  context.stroke()
 }
 
 function trace(context: CanvasRenderingContext2D, view: ViewFrame, line: readonly XY[]): void {

@@ -28,4 +28,4 @@ export function changedSinceSentence(item: Item, entries: readonly LedgerEntry[]
 
 /** Hours and minutes of an ISO time, in the reader's own zone. */
 const clockTime = (at: string): string =>
-  new Date(at).toLocaleTimeString(undefined, { hour: '2-digit', minute: '2-digit' })
+  new Date(at).toLocaleTimeString(undefined, { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' })

@@ -31,11 +31,12 @@ export class DrawLineMode extends QuietMode {
 
   begin(): void {
     this.map.cursor('crosshair')
-    this.host.say(`${this.pen.title}: click where it begins, or type a place below.`)
+    this.tellBeginning()
   }
 
   end(): void {
     this.clear()
+    this.host.say('')
   }
 
   override move({ at }: PointerInput): void {
@@ -111,7 +112,11 @@ export class DrawLineMode extends QuietMode {
     if (this.steps.is('drawing')) this.steps.go('waiting')
     this.vertices = []
     this.map.show(null)
-    this.host.say('')
+    this.tellBeginning()
+  }
+
+  private tellBeginning(): void {
+    this.host.say(`${this.pen.title}: click where it begins, or type a place.`)
   }
 
   private show(next: Snapped | null): void {
