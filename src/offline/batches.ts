@@ -47,19 +47,22 @@ export function thawFirst(batches: readonly Batch[]): Batch[] {
   return first ? [{ ...first, request: null }, ...rest] : []
 }
 
-/** Moves the base of unsent batches to a revision that is now known, except where somebody else changed one of the
- *  batch's items in between: that batch keeps its base, so that the server sees the conflict. */
+/** Moves the base of unsent batches along with the revision that is known. A batch stays behind where somebody else
+ *  changed one of its items in between, and one that stayed behind before stays there: the server must see its conflict.
+ *  @param foreign ids that others changed after `from` */
 export function advanceBase(
   batches: readonly Batch[],
-  revision: number,
-  foreign: ReadonlySet<string>,
+  { from, to, foreign }: { from: number; to: number; foreign: ReadonlySet<string> },
 ): Batch[] {
-  return batches.map((batch) =>
-    batch.request || batch.edits.some((edit) => foreign.has(editedId(edit)))
-      ? batch
-      : { ...batch, base: revision },
-  )
+  return batches.map((batch) => {
+    const staysBehind = batch.base !== from || batch.edits.some((edit) => foreign.has(editedId(edit)))
+    return batch.request || staysBehind ? batch : { ...batch, base: to }
+  })
 }
+
+/** Puts unsent batches on top of a revision, whatever was changed before it: somebody decided so. */
+export const rebase = (batches: readonly Batch[], revision: number): Batch[] =>
+  batches.map((batch) => (batch.request ? batch : { ...batch, base: revision }))
 
 /** Batches without the edits of some items; empty batches go. Frozen ones are left alone. */
 export function dropItems(batches: readonly Batch[], ids: ReadonlySet<string>): Batch[] {

@@ -7,6 +7,7 @@ import {
   advanceBase,
   countWaiting,
   dropItems,
+  rebase,
   thawFirst,
   touchedIds,
   type Batch,
@@ -100,6 +101,21 @@ export class SheetExchange {
     return this.batches.some((batch) => editsShapeFaces(batch.edits))
   }
 
+  /** Begins to send what a closed page left waiting. Batches on whose items nobody worked since move to the present
+   *  revision first: else the own request before them would look like somebody else's. */
+  async begin(): Promise<void> {
+    const bases = this.batches.filter((batch) => !batch.request).map((batch) => batch.base)
+    for (const base of new Set(bases.filter((each) => each < this.revision))) {
+      const answer = await this.ports.readChanges(base).catch(() => undefined)
+      if (this.closed || !answer) continue
+      const mine = this.idsUnderWay()
+      const changed = [...answer.put.map((item) => item.id), ...answer.removed]
+      const foreign = new Set(changed.filter((id) => !mine.has(id)))
+      await this.keep(advanceBase(this.batches, { from: base, to: this.revision, foreign }))
+    }
+    this.retry()
+  }
+
   /** Takes checked edits: shown at once, kept in the outbox, sent as soon as may be. */
   put(label: string, edits: readonly Edit[]): void {
     void this.keep(addEdits(this.batches, { base: this.revision, label, edits }))
@@ -126,9 +142,7 @@ export class SheetExchange {
   async settle(choice: 'theirs' | 'mine', ids: readonly string[]): Promise<void> {
     const touched = touchedIds(this.batches)
     await this.keep(
-      choice === 'theirs'
-        ? dropItems(this.batches, new Set(ids))
-        : advanceBase(this.batches, this.revision, new Set()),
+      choice === 'theirs' ? dropItems(this.batches, new Set(ids)) : rebase(this.batches, this.revision),
     )
     this.show(touched)
     this.retry()
@@ -182,8 +196,8 @@ export class SheetExchange {
     this.batches = rest
     this.announced = Math.max(this.announced, answer.revision)
     if (answer.revision === this.revision + 1) {
+      this.batches = advanceBase(rest, { from: this.revision, to: answer.revision, foreign: new Set() })
       this.revision = answer.revision
-      this.batches = advanceBase(rest, this.revision, new Set())
       this.ports.entries([answer.entry])
     } else if (isNews) {
       // Others were faster: their revisions lie between. Without them the next batch would be sent on a wrong base.
@@ -227,7 +241,7 @@ export class SheetExchange {
     const foreign = new Set(changed.filter((id) => !mine.has(id)))
     for (const id of foreign) this.foreignEntries.set(id, answer.entries)
     this.ports.entries(answer.entries)
-    await this.keep(advanceBase(this.batches, this.revision, foreign))
+    await this.keep(advanceBase(this.batches, { from: since, to: this.revision, foreign }))
     this.show(changed)
     if (answer.removed.length > 0 || answer.put.some((item) => shapesFaces(item.kind))) {
       this.ports.facesChanged('saved')

@@ -114,7 +114,7 @@ export const useSheetStore = defineStore('sheet', () => {
     itemsVersion.value += 1
     report()
     keeper.refresh()
-    exchange.retry()
+    void exchange.begin()
   }
 
   const keepFaces = (number: string) =>

@@ -1,6 +1,7 @@
 import { kindWords, type Item } from '@shared/items/item'
 
-const startsWithVowel = /^[aeiou]/
+/** "unit" is spoken with a consonant. */
+const startsWithVowel = /^(?!unit)[aeiou]/
 
 /** "a contact", "an axial trace", "an anticline". */
 export const withArticle = (word: string): string => `${startsWithVowel.test(word) ? 'an' : 'a'} ${word}`
@@ -8,8 +9,8 @@ export const withArticle = (word: string): string => `${startsWithVowel.test(wor
 /** What an item is called in a sentence: a fold by its form, another by its kind, with its name where it has one. */
 export function itemWord(item: Item): string {
   const word = item.kind === 'axial-trace' ? item.properties.form : kindWords[item.kind].one
-  if ('name' in item.properties && item.properties.name !== '') return `${word} “${item.properties.name}”`
   if (item.kind === 'unit') return `unit ${item.properties.label}`
+  if ('name' in item.properties && item.properties.name !== '') return `${word} “${item.properties.name}”`
   return word
 }
 
@@ -17,7 +18,7 @@ export function itemWord(item: Item): string {
 export function itemsWord(items: readonly Item[]): string {
   const [first] = items
   if (!first) return 'nothing'
-  if (items.length === 1) return withArticle(itemWord(first))
+  if (items.length === 1) return first.kind === 'unit' ? itemWord(first) : withArticle(itemWord(first))
   const sameKind = items.every((item) => item.kind === first.kind)
   return `${items.length} ${sameKind ? kindWords[first.kind].many : 'items'}`
 }

@@ -6,6 +6,7 @@ import {
   dropItems,
   freezeFirst,
   messageOf,
+  rebase,
   thawFirst,
 } from '@/offline/batches'
 import { aLine } from '../../../support/sheet-items'
@@ -62,8 +63,18 @@ describe('batches of unsent edits', () => {
 
   it('moves the base along with known revisions, except where somebody else changed the same item', () => {
     const batches = addEdits([], move)
-    expect(advanceBase(batches, 9, new Set())[0]?.base).toBe(9)
-    expect(advanceBase(batches, 9, new Set([contact.id]))[0]?.base).toBe(7)
+    const to9 = { from: 7, to: 9, foreign: new Set<string>() }
+    expect(advanceBase(batches, to9)[0]?.base).toBe(9)
+    const behind = advanceBase(batches, { ...to9, foreign: new Set([contact.id]) })
+    expect(behind[0]?.base).toBe(7)
+    expect(advanceBase(behind, { from: 9, to: 10, foreign: new Set() })[0]?.base).toBe(7)
+    expect(rebase(behind, 10)[0]?.base).toBe(10)
+  })
+
+  it('leaves the base of a frozen batch alone', () => {
+    const frozen = freezeFirst(addEdits([], move), 'key')
+    expect(advanceBase(frozen, { from: 7, to: 9, foreign: new Set() })).toEqual(frozen)
+    expect(rebase(frozen, 9)).toEqual(frozen)
   })
 
   it('drops the edits of items that were given up, and a batch that has none left', () => {

@@ -112,10 +112,29 @@ describe('sending', () => {
     )
     const exchange = open([], left)
     expect(exchange.items.get(contact.id)).toEqual(contact)
-    exchange.retry()
+    await exchange.begin()
     await settle()
     expect(ledger.received[0]?.key).toBe('from before')
     expect(exchange.saved.state).toBe('saved')
+  })
+
+  it('sends what a closed page left one after the other, without taking its own for somebody else’s', async () => {
+    const [mine, theirs] = [aContact(), aContact()]
+    ledger = new FakeLedger(7, [mine, theirs])
+    const step = noted(mine, 'first')
+    const left = addEdits(
+      freezeFirst(
+        addEdits([], { base: 7, label: 'changed a note', edits: [{ before: mine, after: step }] }),
+        'from before',
+      ),
+      { base: 7, label: 'changed a note', edits: [{ before: step, after: noted(mine, 'second') }] },
+    )
+    ledger.putByOther(noted(theirs, 'meanwhile'))
+    const exchange = open([...ledger.items.values()], left)
+    await exchange.begin()
+    await settle()
+    expect(exchange.saved).toEqual({ state: 'saved', revision: 10, waiting: 0 })
+    expect(noteOf(ledger.items.get(mine.id))).toBe('second')
   })
 })
 
@@ -147,6 +166,37 @@ describe('other people’s changes', () => {
     expect(noteOf(exchange.items.get(theirs.id))).toBe('theirs')
     expect(exchange.foreignEntries.has(theirs.id)).toBe(true)
     expect(exchange.foreignEntries.has(mine.id)).toBe(false)
+  })
+
+  it('are not overwritten by the late answer to a request that came before them', async () => {
+    const contact = aContact()
+    ledger = new FakeLedger(7, [contact])
+    const exchange = open([contact])
+    ledger.weather.push('lost after')
+    exchange.put('changed a note', [{ before: contact, after: noted(contact, 'mine') }])
+    await settle()
+    ledger.putByOther(noted(contact, 'theirs, on top of mine'))
+    exchange.hear(9)
+    await settle()
+    await clock.advance(1000)
+    expect(exchange.saved).toEqual({ state: 'saved', revision: 9, waiting: 0 })
+    expect(noteOf(exchange.items.get(contact.id))).toBe('theirs, on top of mine')
+  })
+
+  it('are still a conflict after an own request for other items went through', async () => {
+    const [first, second] = [aContact(), aContact()]
+    ledger = new FakeLedger(7, [first, second])
+    const exchange = open([first, second])
+    ledger.weather.push('lost before')
+    exchange.put('changed a note', [{ before: first, after: noted(first, 'mine') }])
+    await settle()
+    exchange.put('changed a note', [{ before: second, after: noted(second, 'mine') }])
+    ledger.putByOther(noted(second, 'theirs'))
+    exchange.hear(8)
+    await settle()
+    await clock.advance(1000)
+    expect(exchange.saved).toMatchObject({ state: 'stopped', waiting: 1 })
+    expect(noteOf(ledger.items.get(second.id))).toBe('theirs')
   })
 
   async function inConflict() {
