@@ -18,7 +18,8 @@ export default defineConfig({
       output: { codeSplitting: { groups: [{ name: 'ol', test: /node_modules[\\/]ol[\\/]/, priority: 10 }] } },
     },
   },
-  server: { host: '127.0.0.1', proxy: { '/api': api, '/problems': api } },
+  // A prefix alone would take /api-reference too, which is a page.
+  server: { host: '127.0.0.1', proxy: { '^/api/': api } },
   test: {
     projects: [
       {

@@ -59,6 +59,7 @@ export function shapeWords(schema: Schema | undefined, depth = 0): string {
   if (Array.isArray(schema['enum'])) return schema['enum'].map((value) => JSON.stringify(value)).join(' | ')
   const choices = schemas(schema['anyOf'] ?? schema['oneOf'] ?? schema['allOf'])
   if (choices.length) return [...new Set(choices.map((choice) => shapeWords(choice, depth)))].join(' | ')
+  if (Array.isArray(type)) return type.map((one) => shapeWords({ ...schema, type: one }, depth)).join(' | ')
   if (type === 'array')
     return `list of ${isSchema(schema['items']) ? shapeWords(schema['items'], depth + 1) : 'values'}`
   if (type === 'object') return objectWords(schema, depth)

@@ -15,8 +15,11 @@ export function stateWords(sheet: Pick<Sheet, 'state' | 'edition'>): string {
   }
 }
 
-/** A ledger entry as a sentence: `Rosa Kelp drew 1 contact`; a message that is a sentence itself stands after a colon. */
+/** Verbs with which the messages of the ledger begin besides those in -ed. */
+const VERBS = /^(\p{Lowercase}+ed|drew|took|set|put|gave|cut)\b/u
+
+/** A ledger entry as a sentence: `Rosa Kelp drew 1 contact`; a message that begins otherwise stands after a colon. */
 export function entryWords({ author, message }: LedgerEntry): string {
   const text = message.trim() || 'changed the sheet'
-  return /^\p{Lowercase}/u.test(text) ? `${author.name} ${text}` : `${author.name}: ${text}`
+  return VERBS.test(text) ? `${author.name} ${text}` : `${author.name}: ${text}`
 }
