@@ -29,7 +29,7 @@ export class Schemas {
     const schemas: [string, JsonSchema][] = [...this.named.output]
     for (const [name, definition] of this.named.input) {
       if (differing.has(name)) schemas.push([`${name}Input`, markInput(definition)])
-      else if (!this.named.output.has(name)) schemas.push([name, definition])
+      else if (!this.named.output.has(name)) schemas.push([name, markInput(definition)])
     }
     schemas.sort(([a], [b]) => a.localeCompare(b, 'en'))
     return { schemas: Object.fromEntries(schemas), differing }

@@ -9,8 +9,8 @@ const MAX_FAULTS = 100
 /** Input as its schema gives it.
  *  Throws 'invalid-input' with a JSON pointer per fault. */
 export function parseInput<S extends z.ZodType>(schema: S, input: unknown): z.output<S> {
-  const unstorable = findUnstorableText(input)
-  if (unstorable) throw invalidInput([unstorable])
+  const unusable = findUnusable(input)
+  if (unusable) throw invalidInput([unusable])
   const parsed = schema.safeParse(input)
   if (parsed.success) return parsed.data
   throw invalidInput(parsed.error.issues.slice(0, MAX_FAULTS).flatMap(toFaults))
@@ -41,22 +41,23 @@ export const toPointer = (path: readonly PropertyKey[]): string =>
 /** A NUL or half a surrogate pair: valid in a JSON string, but PostgreSQL can store neither. */
 const UNSTORABLE = /\0|\p{Surrogate}/u
 
-/** Where the input holds text that cannot be stored. Walks with its own stack, so that deep nesting cannot exhaust ours. */
-function findUnstorableText(input: unknown): Fault | undefined {
+/** Deepest nesting that is read: none of ours needs a tenth of it, and schemas walk it on the stack. */
+const MAX_DEPTH = 100
+
+/** Where the input cannot be used whatever its schema: text that cannot be stored, or nesting without end. Walks with a
+ *  stack of its own, so that deep nesting cannot exhaust ours. */
+function findUnusable(input: unknown): Fault | undefined {
   const open: { value: unknown; path: PropertyKey[] }[] = [{ value: input, path: [] }]
-  for (let next = open.pop(); next; next = open.pop()) {
-    const { value, path } = next
+  for (let place = open.pop(); place; place = open.pop()) {
+    const { value, path } = place
+    const at = (detail: string): Fault => ({ pointer: toPointer(path), detail })
     if (typeof value === 'string' && UNSTORABLE.test(value)) {
-      return { pointer: toPointer(path), detail: 'This text holds a character that cannot be stored.' }
+      return at('This text holds a character that cannot be stored.')
     }
     if (typeof value !== 'object' || value === null) continue
+    if (path.length > MAX_DEPTH) return at('This is nested too deep to be read.')
     for (const [key, inner] of Object.entries(value)) {
-      if (UNSTORABLE.test(key)) {
-        return {
-          pointer: toPointer(path),
-          detail: 'A field name here holds a character that cannot be stored.',
-        }
-      }
+      if (UNSTORABLE.test(key)) return at('A field name here holds a character that cannot be stored.')
       if (typeof inner === 'string' || typeof inner === 'object')
         open.push({ value: inner, path: [...path, key] })
     }
