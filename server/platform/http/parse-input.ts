@@ -16,6 +16,11 @@ export function parseInput<S extends z.ZodType>(schema: S, input: unknown): z.ou
   throw invalidInput(parsed.error.issues.slice(0, MAX_FAULTS).flatMap(toFaults))
 }
 
+/** Parts of a path as their schema gives them; undefined where they can name nothing. */
+export function parsePath<S extends z.ZodType>(schema: S, parts: unknown): z.output<S> | undefined {
+  return findUnusable(parts) ? undefined : schema.safeParse(parts).data
+}
+
 function invalidInput(errors: Fault[]): ProblemError {
   const [first] = errors
   const more = errors.length > 1 ? ` (and ${errors.length - 1} more)` : ''

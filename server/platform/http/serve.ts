@@ -4,7 +4,7 @@ import { roles as allRoles, type Role } from '@shared/api/accounts'
 import type { Access, Endpoint, Form } from '@shared/api/endpoint'
 import { problem } from '../problem'
 import type { SheetIdentity, SignedIn } from './access'
-import { parseInput } from './parse-input'
+import { parseInput, parsePath } from './parse-input'
 import { readJson, readUpload, removeUpload, type UploadedFile } from './read-body'
 import { checkToken } from './session'
 
@@ -86,10 +86,10 @@ function requireAccount(access: Access, account: SignedIn | undefined): void {
 }
 
 /** A path that cannot name anything names nothing. */
-function parseParams<P extends z.ZodType>(endpoint: Endpoint<P>, params: unknown): z.output<P> {
-  const parsed = endpoint.params.safeParse(params)
-  if (!parsed.success) throw problem('not-found', 'This address names nothing that there is.')
-  return parsed.data
+function parseParams<P extends z.ZodType>(endpoint: Endpoint<P>, params: object): z.output<P> {
+  const parsed = parsePath(endpoint.params, { ...params })
+  if (parsed === undefined) throw problem('not-found', 'This address names nothing that there is.')
+  return parsed
 }
 
 interface Admitted {

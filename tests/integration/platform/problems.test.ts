@@ -91,14 +91,17 @@ describe('a problem', () => {
     expect((await request(server.url).get('/api/health')).status).toBe(200)
   })
 
-  it.each(['/api/sheets/%E0%A4%A', '/api/sheets/%00', '/api/nothing', '/api/sheets/../../etc'])(
-    'says that there is nothing at %s',
-    async (path) => {
-      const { status, body } = await editor.get(path)
-      expect(status).toBe(404)
-      expect(body.type).toBe('/problems/not-found')
-    },
-  )
+  it.each([
+    '/api/sheets/%E0%A4%A',
+    '/api/sheets/%00',
+    '/api/catalogue/MI-14/1/files/%00.pdf',
+    '/api/nothing',
+    '/api/sheets/../../etc',
+  ])('says that there is nothing at %s', async (path) => {
+    const { status, body } = await editor.get(path)
+    expect(status).toBe(404)
+    expect(body.type).toBe('/problems/not-found')
+  })
 })
 
 describe('an upload', () => {
