@@ -10,15 +10,11 @@ import {
   uploadIntake,
 } from '@shared/api/intake'
 import { serve } from '../../platform/http/serve'
-import { problem } from '../../platform/problem'
 import type { IntakeService } from './intake.service'
 
 /** Routes of the intake room. */
 export function mountIntake(router: Router, intake: IntakeService): void {
-  serve(router, uploadIntake, async ({ sheet, account, file }) => {
-    if (!file) throw problem('invalid-input', 'Choose a file to bring.')
-    return intake.bring(sheet.id, account.id, file)
-  })
+  serve(router, uploadIntake, async ({ sheet, account, file }) => intake.bring(sheet.id, account.id, file))
   serve(router, listIntakes, async ({ sheet }) => intake.list(sheet.id))
   serve(router, getIntake, async ({ sheet, params }) => intake.get(sheet.id, params.intake))
   serve(router, previewIntake, async ({ sheet, params, body }) =>

@@ -37,7 +37,10 @@ describe('moving a unit in the legend', () => {
 })
 
 describe('the place of a new unit', () => {
-  const legend = ['Quaternary', 'Devonian', 'Devonian', 'Cambrian'].map((age, index) => ({ age, rank: index }))
+  const legend = ['Quaternary', 'Devonian', 'Devonian', 'Cambrian'].map((age, index) => ({
+    age,
+    rank: index,
+  }))
 
   it.each([
     ['Devonian', 3],

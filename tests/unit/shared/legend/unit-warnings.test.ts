@@ -39,7 +39,8 @@ describe('contrast', () => {
   })
 
   it('of a label is enough on every colour that an age proposes', () => {
-    for (const division of timeDivisions) expect(labelReadsOn(mutedColour(division.colour)), division.name).toBe(true)
+    for (const division of timeDivisions)
+      expect(labelReadsOn(mutedColour(division.colour)), division.name).toBe(true)
   })
 })
 

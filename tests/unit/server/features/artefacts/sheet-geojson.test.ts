@@ -4,7 +4,13 @@ import { CAUTION } from '@shared/sheet-face/caution'
 import { itemSchema } from '@shared/items/item'
 import { sheetGeoJson } from '../../../../../server/features/artefacts/sheet-geojson'
 import { utmConvergence, utmDefinition } from '../../../../reference/geodesy'
-import { aPrintedSheet, mapItems, rectangleRing, released, unitItems } from '../../../../support/printed-sheet'
+import {
+  aPrintedSheet,
+  mapItems,
+  rectangleRing,
+  released,
+  unitItems,
+} from '../../../../support/printed-sheet'
 
 const signedArea = (ring: readonly Position[]): number =>
   ring.reduce((sum, [x = 0, y = 0], index) => {
