@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { lithologies } from './lithology'
 import { attitudeConventionSchema } from './points'
 
 export const colourSchema = z.string().regex(/^#[0-9a-f]{6}$/, 'A colour is written like #c9a26b.')
@@ -11,6 +12,8 @@ export const unitPropertiesSchema = z.strictObject({
   /** Age in words, for example Devonian; units of one age stand under one heading. */
   age: z.string().trim().max(80).default(''),
   colour: colourSchema,
+  /** The lithology whose pattern is drawn over the colour. */
+  pattern: z.enum(['none', ...lithologies]).default('none'),
   description: z.string().max(4000).default(''),
   /** Place in the legend: the youngest unit has the smallest number. */
   rank: z.number().min(-1e9).max(1e9),
@@ -22,5 +25,7 @@ export const sheetFacePropertiesSchema = z.strictObject({
   authors: z.string().max(500).default(''),
   attitudeConvention: attitudeConventionSchema.default('strike-dip'),
   credit: z.string().max(1000).default(''),
+  /** In one ink, units are told apart by pattern and grey alone, and all linework is black. */
+  printing: z.enum(['colour', 'one-ink']).default('colour'),
 })
 export type SheetFaceProperties = z.infer<typeof sheetFacePropertiesSchema>

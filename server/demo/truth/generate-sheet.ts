@@ -92,13 +92,16 @@ class ItemWriter {
   ) {}
 
   units(): ItemOf<'unit'>[] {
-    const described = [...coverUnits, ...layers].map(({ label, name, age, colour, description }) => ({
-      label,
-      name,
-      age,
-      colour,
-      description,
-    }))
+    const described = [...coverUnits, ...layers].map(
+      ({ label, name, age, colour, pattern, description }) => ({
+        label,
+        name,
+        age,
+        colour,
+        pattern,
+        description,
+      }),
+    )
     return described.map((properties, index) => ({
       kind: 'unit',
       id: this.id(),
@@ -139,6 +142,7 @@ class ItemWriter {
         name: 'Cormorant fault',
         type: 'normal',
         side: 'right',
+        dip: null,
       },
     }))
   }
@@ -162,8 +166,11 @@ class ItemWriter {
         ...this.lineProperties(this.confidenceOf(concealed, false)),
         name: this.foldName(hinge),
         form: hinge.form,
+        side: 'right',
         plunge: axis && Math.round(axis.plunge),
         trend: axis && normalizeAzimuth(Math.round(axis.gridTrend + this.options.convergenceAt(middle))),
+        doubly: 'no',
+        otherPlunge: null,
       },
     }
   }

@@ -100,6 +100,7 @@ export class SheetsService {
         authors: newSheet.authors,
         attitudeConvention: newSheet.attitudeConvention,
         credit: '',
+        printing: 'colour' as const,
       },
     }
     await this.ledger.appendEdits(em, id, authorId, [{ before: null, after: sheetFace }], {

@@ -1,12 +1,12 @@
 import { describe, expect, it } from 'vitest'
 import { contrast, labelReadsOn, mutedColour } from '@shared/legend/colours'
 import { groupByAge } from '@shared/legend/group-by-age'
-import { unitWarnings } from '@shared/legend/unit-warnings'
+import { unitWarnings, type LegendUnit } from '@shared/legend/unit-warnings'
 import { timeDivisions } from '@shared/time-scale/periods'
 
-const unit = (id: string, label: string, colour: string, age = '', rank = 0) => ({
+const unit = (id: string, label: string, colour: string, age = '', rank = 0): LegendUnit => ({
   id,
-  properties: { label, name: `Unit ${label}`, age, colour, description: '', rank },
+  properties: { label, name: `Unit ${label}`, age, colour, pattern: 'none', description: '', rank },
 })
 
 describe('warnings about a unit', () => {

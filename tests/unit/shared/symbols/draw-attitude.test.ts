@@ -158,7 +158,15 @@ describe('a unit label', () => {
     geometry: { type: 'Point' as const, coordinates: [3, 4] as MM },
     properties: { note: '', unit: '5b0c1d1e-7a3f-4c58-9b4a-0d6f2f1a9e03', identity: 'certain' as const },
   }
-  const unit = { label: 'Dr', name: 'Rill Sandstone', age: '', colour: '#cf9d87', description: '', rank: 1 }
+  const unit = {
+    label: 'Dr',
+    name: 'Rill Sandstone',
+    age: '',
+    colour: '#cf9d87',
+    pattern: 'none' as const,
+    description: '',
+    rank: 1,
+  }
   const textOf = (identity: 'certain' | 'questionable', known = true) =>
     numeralOf(
       drawItem({ ...label, properties: { ...label.properties, identity } }, plainFrame(), {

@@ -16,7 +16,7 @@ const sheetFace = (attitudeConvention: 'strike-dip' | 'dip-direction-dip'): Item
   id: '7f1c0b6a-0f5e-4e6c-9d70-0d9f4f5b1a01',
   kind: 'sheet-face',
   geometry: null,
-  properties: { authors: '', credit: '', attitudeConvention },
+  properties: { authors: '', credit: '', attitudeConvention, printing: 'colour' },
 })
 const attitude: ItemOf<'attitude'> = {
   id: '7f1c0b6a-0f5e-4e6c-9d70-0d9f4f5b1a02',
