@@ -43,7 +43,7 @@ export function lineItem(
         conversions,
       }
     case 'fault': {
-      const properties = { ...basis, type: target.type, side: lines.faultSide }
+      const properties = { ...basis, type: target.type, side: lines.faultSide, dip: null }
       return {
         outcome: 'item',
         item: { kind: 'fault', ...line, properties },
@@ -55,7 +55,15 @@ export function lineItem(
         ground.projection.convergenceAt(placed.geometry[0] ?? [0, 0]),
       )
       if (axis.outcome === 'refused') return axis
-      const properties = { ...basis, form: target.form, plunge: axis.plunge, trend: axis.trend }
+      const properties = {
+        ...basis,
+        form: target.form,
+        side: 'right' as const,
+        plunge: axis.plunge,
+        trend: axis.trend,
+        doubly: 'no' as const,
+        otherPlunge: null,
+      }
       const item: Item = { kind: 'axial-trace', ...line, properties }
       return { outcome: 'item', item, conversions: [...conversions, ...axis.conversions] }
     }

@@ -1,5 +1,5 @@
 import type { LocationConfidence } from '../items/confidence'
-import type { FoldForm } from '../items/lines'
+import { foldForms, type FoldForm } from '../items/lines'
 import type { LineTarget } from './mapping'
 import { correctSpelling, understand, vocabulary, wordsOf } from './words'
 
@@ -7,7 +7,7 @@ type FaultSense = 'normal' | 'reverse' | 'thrust' | 'left-lateral' | 'right-late
 type OtherSense = 'dike' | 'vein' | 'marker-bed'
 type LineSense = 'contact' | 'fault' | 'frame' | FoldForm | FaultSense | OtherSense
 
-const foldSenses: readonly string[] = ['anticline', 'syncline', 'antiform', 'synform', 'monocline']
+const foldSenses: readonly string[] = foldForms
 const faultSenses: readonly string[] = [
   'normal',
   'reverse',
@@ -39,7 +39,6 @@ const lineWords = vocabulary<LineSense>([
   ['syncline', 'syncline, synclines, synclinal'],
   ['antiform', 'antiform, antiforms, antiformal'],
   ['synform', 'synform, synforms, synformal'],
-  ['monocline', 'monocline, monoclines, monoclinal'],
   ['dike', 'dike, dikes, dyke, dykes'],
   ['vein', 'vein, veins'],
   ['marker-bed', 'marker bed, marker beds, marker horizon, key bed, key beds'],

@@ -1,4 +1,4 @@
-import type { FoldForm } from '../items/lines'
+import { foldWords, type FoldForm } from '../items/lines'
 import type { AttitudeConvention } from '../items/points'
 import type { Azimuth, Degrees } from '../units'
 import { azimuthFigure, compassWords } from './compass'
@@ -31,7 +31,8 @@ export function describeAttitude(plane: Plane): string {
 
 /** A fold and its axis in words: `Anticline, plunging 21° toward 028°`; the form alone where no plunge is stated. */
 export function describeAxis(form: FoldForm, plunge: Degrees | null, trend: Azimuth | null): string {
-  const name = form.charAt(0).toUpperCase() + form.slice(1)
+  const words = foldWords[form]
+  const name = words.charAt(0).toUpperCase() + words.slice(1)
   if (plunge === null || trend === null) return name
   if (plunge === 0) return `${name}, axis horizontal, trending ${azimuthFigure(trend)}°`
   if (plunge === 90) return `${name}, axis vertical`

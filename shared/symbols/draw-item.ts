@@ -7,12 +7,13 @@ import { contacts } from './definitions/contacts'
 import { faults } from './definitions/faults'
 import { folds } from './definitions/folds'
 import { otherLines } from './definitions/other-lines'
-import { stationMarks, unitLabelType } from './definitions/points'
+import { unitLabelType } from './definitions/points'
 import type { DisplayList, Mark } from './display-list'
 import { drawAttitude } from './draw-attitude'
 import { drawLine, type LineDrawing } from './draw-line'
+import { drawLineation } from './draw-lineation'
+import { drawPlace } from './draw-place'
 import { toMm, type DrawingFrame } from './frame'
-import { placeMarks } from './place-marks'
 
 /** What some items' drawings depend on besides themselves. */
 export interface DrawingContext {
@@ -48,14 +49,10 @@ export function drawItem(item: Item, frame: DrawingFrame, context?: DrawingConte
     case 'axial-trace':
     case 'other-line':
       return drawLineItem(item, frame)
-    case 'attitude': {
-      const place = item.geometry.coordinates
-      return drawAttitude(item.properties, toMm(frame, place), frame.convergenceAt(place))
-    }
-    case 'station': {
-      const [x, y] = toMm(frame, item.geometry.coordinates)
-      return placeMarks(stationMarks, ([px, py]) => [x + px, y + py])
-    }
+    case 'attitude':
+    case 'lineation':
+    case 'station':
+      return drawPointItem(item, frame)
     case 'unit-label':
       return [unitLabelMark(item, toMm(frame, item.geometry.coordinates), context)]
     case 'unit':
@@ -64,10 +61,23 @@ export function drawItem(item: Item, frame: DrawingFrame, context?: DrawingConte
   }
 }
 
+function drawPointItem(item: ItemOf<'attitude' | 'lineation' | 'station'>, frame: DrawingFrame): DisplayList {
+  const place = item.geometry.coordinates
+  const [at, convergence] = [toMm(frame, place), frame.convergenceAt(place)]
+  switch (item.kind) {
+    case 'attitude':
+      return drawAttitude(item.properties, at, convergence)
+    case 'lineation':
+      return drawLineation(item.properties, at, convergence)
+    case 'station':
+      return drawPlace(item.properties, at, convergence)
+  }
+}
+
 function drawLineItem(item: LineItem, frame: DrawingFrame): DisplayList {
   const points = item.geometry.coordinates.map((place) => toMm(frame, place))
   const { locationConfidence, identity } = item.properties
-  const isLeft = item.kind === 'fault' && item.properties.side === 'left'
+  const isLeft = 'side' in item.properties && item.properties.side === 'left'
   const plunge = item.kind === 'axial-trace' ? plungeOf(item, frame) : undefined
   return drawLine(lineSymbolOf(item), points, {
     locationConfidence,

@@ -163,7 +163,7 @@ export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
 const showsPlunge = (entry: LegendEntry): boolean =>
   entry.kind === 'axial-trace' &&
   entry.properties.locationConfidence === 'certain' &&
-  variantOf(entry) !== 'monocline'
+  !variantOf(entry).startsWith('monocline')
 
 function centred(marks: readonly Mark[], size: Size): Mark[] {
   const box = boundsOf(marks)

@@ -5,7 +5,7 @@ import type { Path, PathStep } from './display-list'
 const CURVE_PIECES = 16
 
 /** Handle length of a cubic curve that follows a quarter circle of radius 1. Source: derived; 4/3 · (√2 − 1). */
-const QUARTER = (4 / 3) * (Math.SQRT2 - 1)
+export const QUARTER_HANDLE = (4 / 3) * (Math.SQRT2 - 1)
 
 /** A path through points, open unless `closed`. */
 export const polyline = (points: readonly MM[], closed = false): PathStep[] => [
@@ -15,7 +15,7 @@ export const polyline = (points: readonly MM[], closed = false): PathStep[] => [
 
 /** A full circle. */
 export function circle([x, y]: MM, radius: Millimetres): PathStep[] {
-  const h = radius * QUARTER
+  const h = radius * QUARTER_HANDLE
   return [
     ['move', x + radius, y],
     ['curve', x + radius, y + h, x + h, y + radius, x, y + radius],
@@ -28,7 +28,7 @@ export function circle([x, y]: MM, radius: Millimetres): PathStep[] {
 
 /** The half circle from `at + (0, radius)` round the side of smaller x to `at − (0, radius)`, without its first step. */
 export function halfCircleLeft([x, y]: MM, radius: Millimetres): PathStep[] {
-  const h = radius * QUARTER
+  const h = radius * QUARTER_HANDLE
   return [
     ['curve', x - h, y + radius, x - radius, y + h, x - radius, y],
     ['curve', x - radius, y - h, x - h, y - radius, x, y - radius],

@@ -2,6 +2,7 @@ import type { Millimetres } from '../../units'
 import { confidenceStrokes, type Decoration, type LineSymbol } from '../definition'
 import type { Mark } from '../display-list'
 import { circle, polyline } from '../paths'
+import { placeMarks } from '../place-marks'
 
 /** Faults are visibly heavier than contacts (symbolization.md section 3). */
 const WIDTH: Millimetres = 0.6
@@ -35,6 +36,16 @@ const ballAndBar: Decoration = {
       ink: 'black',
     },
     { mark: 'fill', path: circle([0, side * (BAR + BALL * 0.8)], BALL), ink: 'black' },
+  ],
+}
+
+/** One side is down at one end, the other at the other. */
+const ballsAtBothSides: Decoration = {
+  ...ballAndBar,
+  size: 6 * BALL,
+  marks: ({ side }) => [
+    ...placeMarks(ballAndBar.marks({ side }), ([x, y]) => [x - 2 * BALL, y]),
+    ...placeMarks(ballAndBar.marks({ side: side === 1 ? -1 : 1 }), ([x, y]) => [x + 2 * BALL, y]),
   ],
 }
 
@@ -136,4 +147,5 @@ export const faults: readonly LineSymbol[] = [
   // Standing on the right side and looking left across a left-lateral fault, the left side has moved to the left: back.
   { ...fault, variant: 'left-lateral', title: 'Left-lateral fault', decoration: halfArrows(-1) },
   { ...fault, variant: 'right-lateral', title: 'Right-lateral fault', decoration: halfArrows(1) },
+  { ...fault, variant: 'rotational', title: 'Rotational fault', decoration: ballsAtBothSides },
 ]

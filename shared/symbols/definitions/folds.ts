@@ -1,7 +1,7 @@
 import type { Millimetres, MM } from '../../units'
 import { confidenceStrokes, type Decoration, type LineSymbol } from '../definition'
-import type { Mark } from '../display-list'
-import { polyline } from '../paths'
+import type { Mark, PathStep } from '../display-list'
+import { polyline, QUARTER_HANDLE } from '../paths'
 
 const fold = {
   kind: 'axial-trace',
@@ -54,22 +54,86 @@ const limbArrows = (dips: 'away' | 'toward', head: 'open' | 'outlined'): Decorat
   }
 }
 
-/** Two bars across the trace. The way a monocline's limb dips is not among its attributes, so no arrow claims it. */
-const bars: Decoration = {
-  size: 1.6,
-  interval: 26,
-  bearingOver: 5,
-  marks: () =>
-    [-0.6, 0.6].map((x): Mark => ({
-      mark: 'stroke',
-      path: polyline([
-        [x, -1.9],
-        [x, 1.9],
-      ]),
-      width: STROKE,
-      ink: 'fold',
-    })),
+/** Half the distance between the two legs of an overturned fold's arrow, and how far its turn reaches beyond the trace. */
+const LEG: Millimetres = 1.15
+
+/** A U-turned arrow for a fold whose two limbs dip the same way: it turns beyond the trace and opens to the side of the
+ *  dip, where an anticline's heads point away from the trace and a syncline's toward it. Source: common practice
+ *  (symbolization.md section 3); the drawing is ours. */
+const turnedArrow = (dips: 'away' | 'toward'): Decoration => {
+  const tip = dips === 'away' ? REACH + 0.3 : 0.75
+  return {
+    size: 2 * (LEG + HEAD_HALF),
+    interval: 26,
+    bearingOver: 2 * REACH,
+    marks: ({ side }) => [
+      {
+        mark: 'stroke',
+        path: [
+          ['move', -LEG, side * (REACH + 0.3)],
+          ['line', -LEG, 0],
+          ...halfTurn(side),
+          ['line', LEG, side * (REACH + 0.3)],
+        ],
+        width: STROKE,
+        ink: 'fold',
+      },
+      ...[-LEG, LEG].map((x): Mark => openHead(x, side, tip, dips === 'away' ? -HEAD : HEAD)),
+    ],
+  }
 }
+
+/** The half circle from the left leg to the right one, beyond the trace from the stated side. */
+function halfTurn(side: 1 | -1): PathStep[] {
+  const h = LEG * QUARTER_HANDLE
+  return [
+    ['curve', -LEG, -side * h, -h, -side * LEG, 0, -side * LEG],
+    ['curve', h, -side * LEG, LEG, -side * h, LEG, 0],
+  ]
+}
+
+/** Two barbs about a leg. @param back from the tip to the barbs' ends, away from the trace positive */
+const openHead = (x: Millimetres, side: 1 | -1, tip: Millimetres, back: Millimetres): Mark => ({
+  mark: 'stroke',
+  path: polyline([
+    [x - HEAD_HALF, side * (tip + back)],
+    [x, side * tip],
+    [x + HEAD_HALF, side * (tip + back)],
+  ]),
+  width: STROKE,
+  ink: 'fold',
+  cap: 'round',
+})
+
+/** One bend of a monocline: an arrow in the steep limb, pointing the way it dips, and a bar for the limb that lies nearly
+ *  flat. The steep limb falls away from the anticlinal bend and down to the synclinal one. Source: common practice. */
+const bend = (dips: 'away' | 'toward'): Decoration => {
+  const [tail, tip, steep] = dips === 'away' ? [0, REACH, 1] : [REACH + 0.1, 0.75, -1]
+  return {
+    size: 2 * HEAD_HALF + STROKE,
+    interval: 26,
+    bearingOver: 2 * REACH,
+    marks: ({ side }) => {
+      const steepSide = side === steep ? 1 : -1
+      return [...limbArrow(steepSide, tail, tip, 'open'), ...flatLimb(steepSide === 1 ? -1 : 1)]
+    },
+  }
+}
+
+const flatLimb = (side: 1 | -1): Mark[] => [
+  {
+    mark: 'stroke',
+    path: [
+      ['move', 0, 0],
+      ['line', 0, side * FLAT],
+      ['move', -HEAD_HALF, side * FLAT],
+      ['line', HEAD_HALF, side * FLAT],
+    ],
+    width: STROKE,
+    ink: 'fold',
+  },
+]
+const FLAT: Millimetres = 1.3
 
 /** Axial traces, in the folds' red. Antiform and synform, whose age order is not known, have outlined arrow heads. */
 export const folds: readonly LineSymbol[] = [
@@ -77,7 +141,30 @@ export const folds: readonly LineSymbol[] = [
   { ...fold, variant: 'syncline', title: 'Syncline', decoration: limbArrows('toward', 'open') },
   { ...fold, variant: 'antiform', title: 'Antiform', decoration: limbArrows('away', 'outlined') },
   { ...fold, variant: 'synform', title: 'Synform', decoration: limbArrows('toward', 'outlined') },
-  { ...fold, variant: 'monocline', title: 'Monocline', decoration: bars },
+  {
+    ...fold,
+    variant: 'overturned-anticline',
+    title: 'Overturned anticline',
+    decoration: turnedArrow('away'),
+  },
+  {
+    ...fold,
+    variant: 'overturned-syncline',
+    title: 'Overturned syncline',
+    decoration: turnedArrow('toward'),
+  },
+  {
+    ...fold,
+    variant: 'monocline-anticlinal-bend',
+    title: 'Monocline, anticlinal bend',
+    decoration: bend('away'),
+  },
+  {
+    ...fold,
+    variant: 'monocline-synclinal-bend',
+    title: 'Monocline, synclinal bend',
+    decoration: bend('toward'),
+  },
 ]
 
 /** The arrowhead of a plunge, on the trace: solid, its back drawn in a little, about half as wide as long. */

@@ -64,6 +64,7 @@ const faultNames: Record<FaultProperties['type'], string> = {
   thrust: 'Thrust',
   'left-lateral': 'Left-lateral fault',
   'right-lateral': 'Right-lateral fault',
+  rotational: 'Rotational fault',
 }
 
 /** What the decorated side of a fault is, where its type has one. */

@@ -1,5 +1,6 @@
 import type { Edit } from '@shared/changes/change-set'
 import { isLineItem, type Item, type LineItem } from '@shared/items/item'
+import { otherSide, reversedSide } from '@shared/items/lines'
 import { drafted, refused, type Drafted, type EditorView } from './change-draft'
 import { itemsWord } from './item-words'
 import { withLine } from './line-nodes'
@@ -35,7 +36,7 @@ export function changeProperties(
   return drafted(`${deed} ${itemsWord(edits.flatMap((edit) => edit.before ?? []))}`, edits)
 }
 
-/** Turns lines round. What they mean on the ground stays: a fault's side changes hands, and a fold's trend is an azimuth
+/** Turns lines round. What they mean on the ground stays: the side of a fault or fold is renamed, and a fold's trend is an azimuth
  *  of its own that no direction of drawing touches. */
 export function reverseLines(view: EditorView, ids: readonly string[]): Drafted {
   const lines = existing(view, ids).filter(isLineItem)
@@ -48,7 +49,11 @@ export function reverseLines(view: EditorView, ids: readonly string[]): Drafted 
 
 function reversed(item: LineItem): LineItem {
   const turned = withLine(item, item.geometry.coordinates.toReversed())
-  if (turned.kind !== 'fault') return turned
-  const side = turned.properties.side === 'left' ? 'right' : 'left'
-  return { ...turned, properties: { ...turned.properties, side } }
+  if (turned.kind === 'fault') {
+    return { ...turned, properties: { ...turned.properties, side: reversedSide(turned.properties) } }
+  }
+  if (turned.kind === 'axial-trace') {
+    return { ...turned, properties: { ...turned.properties, side: otherSide(turned.properties.side) } }
+  }
+  return turned
 }

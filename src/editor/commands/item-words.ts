@@ -1,4 +1,5 @@
 import { kindWords, type Item } from '@shared/items/item'
+import { foldWords } from '@shared/items/lines'
 
 /** "unit" is spoken with a consonant. */
 const startsWithVowel = /^(?!unit)[aeiou]/
@@ -8,7 +9,7 @@ export const withArticle = (word: string): string => `${startsWithVowel.test(wor
 
 /** What an item is called in a sentence: a fold by its form, another by its kind, with its name where it has one. */
 export function itemWord(item: Item): string {
-  const word = item.kind === 'axial-trace' ? item.properties.form : kindWords[item.kind].one
+  const word = item.kind === 'axial-trace' ? foldWords[item.properties.form] : kindWords[item.kind].one
   if (item.kind === 'unit') return `unit ${item.properties.label}`
   if ('name' in item.properties && item.properties.name !== '') return `${word} “${item.properties.name}”`
   return word

@@ -47,7 +47,7 @@ describe('an axis in words', () => {
     expect(describeAxis('anticline', 21, 28)).toBe('Anticline, plunging 21° toward 028°'))
 
   it('says what is known when there is no plunge', () => {
-    expect(describeAxis('monocline', null, null)).toBe('Monocline')
+    expect(describeAxis('overturned-syncline', null, null)).toBe('Overturned syncline')
     expect(describeAxis('synform', 0, 28)).toBe('Synform, axis horizontal, trending 028°')
     expect(describeAxis('syncline', 90, 28)).toBe('Syncline, axis vertical')
   })

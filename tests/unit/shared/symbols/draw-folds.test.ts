@@ -48,7 +48,7 @@ describe('the arrows of a fold', () => {
   })
 
   it('mirror each other across the trace', () => {
-    for (const form of ['anticline', 'syncline', 'antiform', 'synform', 'monocline'] as const) {
+    for (const form of ['anticline', 'syncline', 'antiform', 'synform'] as const) {
       const arrows = arrowsOn(form, 0).flat()
       const sorted = (points: MM[]) =>
         points
