@@ -23,7 +23,10 @@ export function fakeNetwork(answer: (sent: Sent, count: number) => Reply | Promi
     const request: Sent = {
       method: init.method ?? 'GET',
       url,
-      headers: Object.fromEntries(new Headers(init.headers)),
+      // A browser sends names in lower case; the fake window keeps them as they were written.
+      headers: Object.fromEntries(
+        [...new Headers(init.headers)].map(([name, value]) => [name.toLowerCase(), value]),
+      ),
       body: typeof init.body === 'string' ? JSON.parse(init.body) : init.body,
     }
     sent.push(request)
