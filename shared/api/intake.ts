@@ -30,6 +30,8 @@ export const intakeSchema = z
     notes: z.array(z.string()),
     proposal: mappingSchema,
     proposalNotes: z.array(proposalNoteSchema),
+    /** The mapping that it was taken in with; null until it is. */
+    mapping: mappingSchema.nullable(),
     /** Revision that it became. */
     revision: z.number().int().nullable(),
     /** An earlier intake of the same bytes on this sheet, in words; null if there was none. */

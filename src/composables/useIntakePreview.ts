@@ -1,16 +1,16 @@
 import { onScopeDispose, ref, shallowRef, watch } from 'vue'
 import { previewIntake, type Intake, type IntakePreview } from '@shared/api/intake'
 import type { Problem } from '@shared/api/problems'
+import type { Mapping } from '@shared/intake/mapping'
 import { call } from '@/api/client'
-import type { IntakeDraft } from '@/stores/intake'
 import { useSheetStore } from '@/stores/sheet'
 import { problemOf } from './useIntakes'
 
 /** A person changes several fields in a row; the server is asked when the hand rests. */
 const REST_MS = 350
 
-/** What the mapping as it now stands would take in, kept up to date. */
-export function useIntakePreview(of: () => { intake: Intake; draft: IntakeDraft } | null) {
+/** What a mapping makes of a file, kept up to date while the mapping is worked on. */
+export function useIntakePreview(of: () => { intake: Intake; mapping: Mapping } | null) {
   const sheet = useSheetStore()
   const preview = shallowRef<IntakePreview | null>(null)
   const problem = shallowRef<Problem | null>(null)
@@ -25,10 +25,9 @@ export function useIntakePreview(of: () => { intake: Intake; draft: IntakeDraft 
     if (!subject || number === undefined) return
     const mine = ++turn
     try {
-      const { mapping } = subject.draft
       const answer = await call(previewIntake, {
         params: { sheet: number, intake: subject.intake.id },
-        body: { mapping },
+        body: { mapping: subject.mapping },
       })
       if (mine !== turn) return
       preview.value = answer
@@ -56,7 +55,7 @@ export function useIntakePreview(of: () => { intake: Intake; draft: IntakeDraft 
     { immediate: true },
   )
   watch(
-    () => JSON.stringify(of()?.draft.mapping),
+    () => JSON.stringify(of()?.mapping),
     () => later(REST_MS),
   )
   onScopeDispose(() => {

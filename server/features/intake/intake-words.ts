@@ -1,16 +1,7 @@
 import type { Intake } from '@shared/api/intake'
 import type { Applied } from '@shared/intake/apply'
-import { kindWords, type ItemKind } from '@shared/items/item'
 import { problem } from '../../platform/problem'
 import type { StoredIntake } from './intake.queries'
-
-/** Ledger message of an intake: took in “north shore.kml”: 41 attitudes, 3 faults. */
-export function takenInMessage(file: string, byKind: readonly { kind: ItemKind; items: number }[]): string {
-  const counts = byKind.map(
-    ({ kind, items }) => `${items} ${items === 1 ? kindWords[kind].one : kindWords[kind].many}`,
-  )
-  return `took in “${file}”: ${counts.join(', ')}`
-}
 
 /** Refuses to take in nothing, and says whether all of it is elsewhere or each has its own reason. */
 export function requireSomething({ items, refusals, outside, leftOut }: Applied, file: string): void {
@@ -40,6 +31,7 @@ export function toIntakeAnswer(intake: StoredIntake): Intake {
     state: intake.state,
     at: intake.createdAt.toISOString(),
     by: intake.by,
+    mapping: intake.mapping,
     revision: intake.revision,
     sameFileTakenIn:
       same && `${same.name} took in the same file as “${same.file}” at revision ${same.revision}.`,

@@ -17,6 +17,7 @@ export interface StoredIntake {
   state: Intake['state']
   crs: FileCrs | null
   summary: FileSummary
+  mapping: Mapping | null
   revision: number | null
   createdAt: Date
   by: Person
@@ -24,7 +25,7 @@ export interface StoredIntake {
 }
 
 const intakeColumns = `intake.id, intake.sheet_id AS "sheetId", intake.file, intake.bytes, intake.sha256,
-  intake.storage_key AS "storageKey", intake.state, intake.crs, intake.summary, intake.revision,
+  intake.storage_key AS "storageKey", intake.state, intake.crs, intake.summary, intake.mapping, intake.revision,
   intake.created_at AS "createdAt",
   json_build_object('id', account.id, 'name', account.name, 'initials', account.initials) AS by,
   (SELECT json_build_object('file', other.file, 'name', taker.name, 'revision', other.revision, 'at', entry.at)

@@ -6,6 +6,7 @@ import type { DataSource } from 'typeorm'
 import type { Intake, IntakePreview } from '@shared/api/intake'
 import type { LedgerEntry } from '@shared/api/sheets'
 import type { Mapping } from '@shared/intake/mapping'
+import { takenInMessage } from '@shared/intake/taken-in-message'
 import { problem } from '../../platform/problem'
 import type { Storage } from '../../platform/storage'
 import type { LedgerService } from '../ledger/ledger.service'
@@ -23,7 +24,7 @@ import {
   selectIntakes,
   type StoredIntake,
 } from './intake.queries'
-import { requireSomething, takenInMessage, toIntakeAnswer } from './intake-words'
+import { requireSomething, toIntakeAnswer } from './intake-words'
 import type { FileCrs } from './readers/read-outcome'
 
 /** Largest file that is read, bytes. */

@@ -1,8 +1,15 @@
 import type { LocationConfidence } from '@shared/items/confidence'
-import type { LineTarget, PointTarget } from '@shared/intake/mapping'
-import { foldForms, otherLineTypes, type faultTypes } from '@shared/items/lines'
+import { lineTargetSchema, type LineTarget, type PointTarget } from '@shared/intake/mapping'
+import { lineKinds } from '@shared/items/item'
 import { planeTypes } from '@shared/items/points'
+import { lineSymbols } from '@shared/symbols/draw-item'
 import { legendEntries, type LegendEntry } from '@shared/symbols/legend-entries'
+
+/** Choices under one heading; without a title, choices for themselves. */
+export interface OptionGroup {
+  title: string
+  options: readonly { key: string; title: string }[]
+}
 
 /** One choice of what a value becomes. */
 export interface TargetOption<T> {
@@ -11,97 +18,80 @@ export interface TargetOption<T> {
   target: T
 }
 
-export interface TargetGroup<T> {
-  title: string
-  options: TargetOption<T>[]
+export interface TargetGroup<T> extends OptionGroup {
+  options: readonly TargetOption<T>[]
 }
 
-const faultTitles: Record<(typeof faultTypes)[number], string> = {
-  unspecified: 'Fault, type not stated',
-  normal: 'Normal fault',
-  reverse: 'Reverse fault',
-  thrust: 'Thrust',
-  'left-lateral': 'Left-lateral fault',
-  'right-lateral': 'Right-lateral fault',
-}
+type Target = LineTarget | PointTarget
 
-const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1).replaceAll('-', ' ')
-const option = <T extends LineTarget | PointTarget>(title: string, target: T): TargetOption<T> => ({
+export const LEAVE_OUT = 'leave-out'
+
+/** A target as one word, for the value of a form control; whatever the order of its properties, which storage changes. */
+export const targetKey = ({ kind, ...properties }: Target): string =>
+  [
+    kind,
+    ...Object.entries(properties)
+      .sort()
+      .map(([, value]) => String(value)),
+  ].join('.')
+
+const option = <T extends Target>(title: string, target: T): TargetOption<T> => ({
   key: targetKey(target),
   title,
   target,
 })
 
-/** A target as one word, for the value of a form control. */
-export const targetKey = (target: LineTarget | PointTarget): string => Object.values(target).join('.')
+const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1).replaceAll('-', ' ')
 
-export const LEAVE_OUT = 'leave-out'
+const lineGroupTitles: Record<(typeof lineKinds)[number], string> = {
+  contact: 'Contacts',
+  fault: 'Faults',
+  'axial-trace': 'Axial traces',
+  'other-line': 'Other lines',
+}
 
-export const lineTargets: TargetGroup<LineTarget>[] = [
-  { title: 'Contacts', options: [option('Contact', { kind: 'contact' })] },
-  {
-    title: 'Faults',
-    // The keys of a record of all types are those types.
-    options: (Object.keys(faultTitles) as (keyof typeof faultTitles)[]).map((type) =>
-      option(faultTitles[type], { kind: 'fault', type }),
-    ),
-  },
-  {
-    title: 'Axial traces',
-    options: foldForms.map((form) => option(capital(form), { kind: 'axial-trace', form })),
-  },
-  {
-    title: 'Other lines',
-    options: otherLineTypes.map((type) => option(capital(type), { kind: 'other-line', type })),
-  },
-]
+/** Every line that has a symbol, with the symbol's name. */
+export const lineTargets: readonly TargetGroup<LineTarget>[] = lineKinds.map((kind) => ({
+  title: lineGroupTitles[kind],
+  options: lineSymbols
+    .filter((symbol) => symbol.kind === kind)
+    .map(({ variant, title }) => option(title, lineTarget(kind, variant))),
+}))
 
-export const pointTargets: TargetGroup<PointTarget>[] = [
-  {
-    title: 'Attitudes',
-    options: planeTypes.flatMap((type) => {
-      const upright = option<PointTarget>(capital(type), { kind: 'attitude', type, overturned: false })
-      const overturned = option<PointTarget>(`${capital(type)}, overturned`, {
-        kind: 'attitude',
-        type,
-        overturned: true,
-      })
-      return type === 'bedding' ? [upright, overturned] : [upright]
-    }),
-  },
+function lineTarget(kind: (typeof lineKinds)[number], variant: string): LineTarget {
+  if (kind === 'contact') return { kind }
+  return lineTargetSchema.parse(kind === 'axial-trace' ? { kind, form: variant } : { kind, type: variant })
+}
+
+export const pointTargets: readonly TargetGroup<PointTarget>[] = [
+  { title: 'Attitudes', options: planeTypes.flatMap((type) => [false, true].flatMap(attitudeOption(type))) },
   { title: 'Other points', options: [option('Station', { kind: 'station' })] },
 ]
 
-/** The option that a target is; undefined for leaving out. */
-export const optionOf = <T extends LineTarget | PointTarget>(
-  groups: readonly TargetGroup<T>[],
-  target: T,
-): TargetOption<T> | undefined =>
-  groups.flatMap(({ options }) => options).find(({ key }) => key === targetKey(target))
-
-/** The legend entry that a target will be drawn as; undefined where it is left out. */
-export function entryOf(
-  target: LineTarget | PointTarget,
-  confidence: LocationConfidence,
-): LegendEntry | undefined {
-  return legendEntries.find((entry) => entry.kind === target.kind && fits(entry, target, confidence))
+/** Only planes that have a top are overturned: those that the legend explains so. */
+function attitudeOption(type: (typeof planeTypes)[number]) {
+  return (overturned: boolean): TargetOption<PointTarget>[] => {
+    const target: PointTarget = { kind: 'attitude', type, overturned }
+    const title = overturned ? `${capital(type)}, overturned` : capital(type)
+    return entryOf(target, 'certain') ? [option(title, target)] : []
+  }
 }
 
-function fits(entry: LegendEntry, target: LineTarget | PointTarget, confidence: LocationConfidence): boolean {
-  if (entry.kind === 'station') return target.kind === 'station'
-  if (entry.kind === 'attitude') {
-    const { type, overturned } = entry.properties
-    return target.kind === 'attitude' && type === target.type && overturned === target.overturned
-  }
-  if (entry.properties.locationConfidence !== confidence) return false
-  switch (entry.kind) {
-    case 'contact':
-      return true
-    case 'fault':
-      return target.kind === 'fault' && entry.properties.type === target.type
-    case 'axial-trace':
-      return target.kind === 'axial-trace' && entry.properties.form === target.form
-    case 'other-line':
-      return target.kind === 'other-line' && entry.properties.type === target.type
-  }
+/** The option with a key. */
+export const optionWith = <T extends Target>(
+  groups: readonly TargetGroup<T>[],
+  key: string,
+): TargetOption<T> | undefined => groups.flatMap(({ options }) => options).find((each) => each.key === key)
+
+/** The legend entry that a target will be drawn as; undefined where it is left out. */
+export const entryOf = (target: Target, confidence: LocationConfidence): LegendEntry | undefined =>
+  legendEntries.find((entry) => agrees(entry, target, confidence))
+
+/** Whether an entry has all that a target says, and the confidence if it is a line. */
+function agrees(entry: LegendEntry, target: Target, confidence: LocationConfidence): boolean {
+  const properties = new Map<string, unknown>(Object.entries({ kind: entry.kind, ...entry.properties }))
+  const stated = properties.get('locationConfidence') ?? confidence
+  return (
+    stated === confidence && Object.entries(target).every(([name, value]) => properties.get(name) === value)
+  )
 }
