@@ -25,7 +25,7 @@ export function pointItem(
   const common = commonOf(record, points, placed.geometry, application.newId())
   const conversions = [...placed.conversions, ...common.conversions]
   if (target.kind === 'attitude') return attitudeItem(record, target, { ...common, conversions }, application)
-  const properties = { note: common.note, name: common.station }
+  const properties = { note: common.note, type: 'station' as const, name: common.station, azimuth: null }
   return { outcome: 'item', item: { kind: 'station', ...common.point, properties }, conversions }
 }
 
@@ -78,6 +78,8 @@ function attitudeItem(
     strike: turned?.azimuth ?? null,
     dip: read.dip,
     overturned,
+    undulating: false,
+    topsKnown: false,
     station,
     reading: {
       text: read.text.slice(0, 200),

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { lineGeometrySchema, pointGeometrySchema } from './geometry'
+import { lineGeometrySchema, noGeometrySchema, pointGeometrySchema } from './geometry'
 import { sheetFacePropertiesSchema, unitPropertiesSchema } from './legend'
 import {
   axialTracePropertiesSchema,
@@ -7,12 +7,17 @@ import {
   faultPropertiesSchema,
   otherLinePropertiesSchema,
 } from './lines'
-import { attitudePropertiesSchema, stationPropertiesSchema, unitLabelPropertiesSchema } from './points'
+import {
+  attitudePropertiesSchema,
+  lineationPropertiesSchema,
+  stationPropertiesSchema,
+  unitLabelPropertiesSchema,
+} from './points'
 
 const id = z.uuid()
 const line = { id, geometry: lineGeometrySchema }
 const point = { id, geometry: pointGeometrySchema }
-const placeless = { id, geometry: z.null() }
+const placeless = { id, geometry: noGeometrySchema }
 
 /** Everything that makes a sheet is an item; its kind says what geometry and properties it has. */
 export const itemSchema = z
@@ -22,6 +27,7 @@ export const itemSchema = z
     z.strictObject({ kind: z.literal('axial-trace'), ...line, properties: axialTracePropertiesSchema }),
     z.strictObject({ kind: z.literal('other-line'), ...line, properties: otherLinePropertiesSchema }),
     z.strictObject({ kind: z.literal('attitude'), ...point, properties: attitudePropertiesSchema }),
+    z.strictObject({ kind: z.literal('lineation'), ...point, properties: lineationPropertiesSchema }),
     z.strictObject({ kind: z.literal('station'), ...point, properties: stationPropertiesSchema }),
     z.strictObject({ kind: z.literal('unit-label'), ...point, properties: unitLabelPropertiesSchema }),
     z.strictObject({ kind: z.literal('unit'), ...placeless, properties: unitPropertiesSchema }),
@@ -34,7 +40,7 @@ export type ItemKind = Item['kind']
 export type ItemOf<K extends ItemKind> = Extract<Item, { kind: K }>
 
 export const lineKinds = ['contact', 'fault', 'axial-trace', 'other-line'] as const
-export const pointKinds = ['attitude', 'station', 'unit-label'] as const
+export const pointKinds = ['attitude', 'lineation', 'station', 'unit-label'] as const
 export const placelessKinds = ['unit', 'sheet-face'] as const
 export const itemKinds = [...lineKinds, ...pointKinds, ...placelessKinds] as const
 
@@ -51,6 +57,7 @@ export const kindWords: Record<ItemKind, { one: string; many: string }> = {
   'axial-trace': { one: 'axial trace', many: 'axial traces' },
   'other-line': { one: 'line', many: 'lines' },
   attitude: { one: 'attitude', many: 'attitudes' },
+  lineation: { one: 'lineation', many: 'lineations' },
   station: { one: 'station', many: 'stations' },
   'unit-label': { one: 'unit label', many: 'unit labels' },
   unit: { one: 'unit', many: 'units' },

@@ -31,6 +31,10 @@ export const attitudePropertiesSchema = z
     /** Dip, degrees below horizontal, 0–90. */
     dip: inclinationSchema,
     overturned: z.boolean().default(false),
+    /** The bed undulates, or the foliation is crenulated: strike and dip are its average. */
+    undulating: z.boolean().default(false),
+    /** Sedimentary structures show which side of the bed is its top. */
+    topsKnown: z.boolean().default(false),
     station: z.string().max(100).default(''),
     reading: readingSchema.nullable().default(null),
   })
@@ -40,9 +44,64 @@ export const attitudePropertiesSchema = z
   })
 export type AttitudeProperties = z.infer<typeof attitudePropertiesSchema>
 
+/** A lineation measured for itself, or the axis of a fold too small for a trace of its own. */
+export const lineationTypes = ['lineation', 'minor-fold-axis'] as const
+
+/** How a lineation was written: `120/35` as trend and plunge, or as a rake on its plane. */
+export const lineationReadingSchema = readingSchema.extend({ convention: z.enum(['trend-plunge', 'rake']) })
+export type LineationReading = z.infer<typeof lineationReadingSchema>
+
+/** The plane that a lineation lies on. */
+const carryingPlaneSchema = z
+  .strictObject({
+    type: z.enum(planeTypes).default('foliation'),
+    /** As an attitude's: null only for a horizontal plane. */
+    strike: azimuthSchema.nullable(),
+    dip: inclinationSchema,
+    overturned: z.boolean().default(false),
+  })
+  .refine((plane) => plane.strike !== null || plane.dip === 0, {
+    message: 'A dipping plane needs a strike.',
+    path: ['strike'],
+  })
+
+export const lineationPropertiesSchema = z
+  .strictObject({
+    ...pointBasis,
+    type: z.enum(lineationTypes).default('lineation'),
+    /** Azimuth of the down-going end, degrees from true north; null only for a vertical line. */
+    trend: azimuthSchema.nullable(),
+    /** Plunge, degrees below horizontal, 0–90. */
+    plunge: inclinationSchema,
+    /** The plane it was measured on, drawn together with it; null where none is stated. */
+    plane: carryingPlaneSchema.nullable().default(null),
+    station: z.string().max(100).default(''),
+    reading: lineationReadingSchema.nullable().default(null),
+  })
+  .refine((line) => line.trend !== null || line.plunge === 90, {
+    message: 'A line that is not vertical needs a trend.',
+    path: ['trend'],
+  })
+export type LineationProperties = z.infer<typeof lineationPropertiesSchema>
+
+export const stationTypes = [
+  'station',
+  'sample',
+  'fossil-locality',
+  'borehole',
+  'spring',
+  'quarry',
+  'mine-adit',
+  'tops-direction',
+] as const
+export type StationType = (typeof stationTypes)[number]
 export const stationPropertiesSchema = z.strictObject({
   ...pointBasis,
+  type: z.enum(stationTypes).default('station'),
   name: z.string().max(100).default(''),
+  /** Degrees from true north: the way an adit goes in, or the direction in which beds get younger; null where it is not
+   *  stated, and for every other type. */
+  azimuth: azimuthSchema.nullable().default(null),
 })
 export type StationProperties = z.infer<typeof stationPropertiesSchema>
 

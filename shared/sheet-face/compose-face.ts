@@ -1,11 +1,12 @@
 import type { Face } from '../api/faces'
 import type { Sheet } from '../api/sheets'
 import { sheetProjection } from '../geometry/projection'
-import type { Item, ItemKind } from '../items/item'
+import { kindWords, type Item } from '../items/item'
 import type { UnitProperties } from '../items/legend'
 import type { DisplayList } from '../symbols/display-list'
 import { drawFace } from '../symbols/draw-face'
 import { drawItem } from '../symbols/draw-item'
+import { drawingOrder } from '../symbols/drawing-order'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '../symbols/frame'
 import { polyline } from '../symbols/paths'
 import { drawSheetFrame, facePath } from './graticule'
@@ -20,17 +21,6 @@ export interface SheetPart {
 
 /** Items of one part: few enough to draw in a moment, enough that parts stay few. */
 const ITEMS_PER_PART = 100
-
-/** Kinds in the order of drawing: what must stay readable comes later. */
-const drawingOrder: readonly { kind: ItemKind; words: string }[] = [
-  { kind: 'contact', words: 'contacts' },
-  { kind: 'other-line', words: 'lines' },
-  { kind: 'fault', words: 'faults' },
-  { kind: 'axial-trace', words: 'axial traces' },
-  { kind: 'station', words: 'stations' },
-  { kind: 'attitude', words: 'attitudes' },
-  { kind: 'unit-label', words: 'unit labels' },
-]
 
 type GroundOfSheet = Pick<Sheet, 'crs' | 'neatline' | 'page' | 'scale'>
 
@@ -66,12 +56,12 @@ export function composeFace(
           some.flatMap((face) => faceMarks(face, frame, unitOf)),
         ),
     })),
-    ...drawingOrder.flatMap(({ kind, words }) =>
+    ...drawingOrder.flatMap((kind) =>
       inParts(items.filter((item) => item.kind === kind)).map((some) => ({
-        words,
+        words: kindWords[kind].many,
         draw: () =>
           clipped(
-            words,
+            kindWords[kind].many,
             some.flatMap((item) => drawItem(item, frame, { unitOf })),
           ),
       })),

@@ -1,6 +1,6 @@
 import type { LocationConfidence } from '../items/confidence'
 import type { LineItem } from '../items/item'
-import type { AttitudeProperties } from '../items/points'
+import type { AttitudeProperties, LineationProperties, StationType } from '../items/points'
 import type { Millimetres } from '../units'
 import type { Ink, Mark } from './display-list'
 
@@ -18,29 +18,42 @@ export interface LineStroke {
   cap?: 'round'
 }
 
+export type LineEnd = 'start' | 'end'
+
+/** +1 left of a line, seen along it; −1 right. */
+export type SideSign = 1 | -1
+
 /** What decorations need to know of the item they stand on. */
 export interface LineAttributes {
-  /** +1: the stated side is left of the line, seen along it; −1: right. */
-  side: 1 | -1
+  /** The stated side. */
+  side: SideSign
 }
 
-/** A small drawing repeated along a line, in its own frame: x along the line, y to its left, origin on the line. */
+/** A small drawing on a line, in its own frame: x along the line, y to its left, origin on the line. */
 export interface Decoration {
   /** Room it takes along the line. */
   size: Millimetres
-  /** From one to the next, about: the line is shared out evenly. */
-  interval: Millimetres
+  /** Repeated: from one to the next, about, as the line is shared out evenly. Or once near each end: from there to its middle. */
+  placed: { every: Millimetres } | { fromEnds: Millimetres }
   /** Stretch of line over which its direction is taken. */
   bearingOver: Millimetres
-  marks(attributes: LineAttributes): readonly Mark[]
+  /** Whether it bends with the line beneath it, as a tooth's foot does. */
+  follows?: true
+  /** @param end the end it stands near, of one that stands near the ends */
+  marks(attributes: LineAttributes, end: LineEnd): readonly Mark[]
 }
 
 /** A line symbol: data, in millimetres on the printed sheet. */
 export interface LineSymbol {
+  /** Stable name, for example `fault.normal`. */
+  id: string
   kind: LineItem['kind']
   /** The item's type or form; empty where the kind has only one. */
   variant: string
+  /** What it means, as the legend says it. */
   title: string
+  /** Names of the item's attributes that the drawing follows, beside the type or form that picks the symbol. */
+  drivenBy: readonly string[]
   ink: Ink
   strokes: Record<LocationConfidence, LineStroke>
   /** Drawn along the middle of the stroke: makes the line a double one. */
@@ -49,17 +62,50 @@ export interface LineSymbol {
   published?: Partial<Record<LocationConfidence, Published>>
 }
 
+/** What a point symbol says of itself beside its drawing. */
+export interface PointFacts {
+  /** What it means, as the legend says it. */
+  title: string
+  /** Attributes of the item that the drawing follows, as words: `strike`, `dip`. */
+  drivenBy: readonly string[]
+  published?: Published
+}
+
 /** The cases of a plane's attitude that have a drawing of their own. */
 export const attitudeCases = ['inclined', 'horizontal', 'vertical', 'overturned'] as const
 export type AttitudeCase = (typeof attitudeCases)[number]
 
-/** A plane symbol: one drawing per case, in a frame with y up the strike and x down dip, origin at the place. */
-export interface AttitudeSymbol {
+/** One drawing per case of an attitude; none for `overturned` where planes have no top. */
+export type AttitudeDrawings = Partial<Record<AttitudeCase, readonly Mark[]>> &
+  Record<Exclude<AttitudeCase, 'overturned'>, readonly Mark[]>
+
+/** A plane symbol, in a frame with y up the strike and x down dip, origin at the place. */
+export interface AttitudeSymbol extends PointFacts {
   type: AttitudeProperties['type']
-  title: string
-  /** Without `overturned`, planes that have no top. */
-  cases: Partial<Record<AttitudeCase, readonly Mark[]>> &
-    Record<Exclude<AttitudeCase, 'overturned'>, readonly Mark[]>
+  cases: AttitudeDrawings
+  /** The same planes where they undulate; missing where that is not said of them. */
+  undulating?: AttitudeDrawings
+  /** Added where the top of the bed is known; of a vertical bed, where its top lies on the side of x. */
+  topsKnown?: Partial<Record<AttitudeCase, readonly Mark[]>>
+}
+
+/** The cases of a line's attitude that have a drawing of their own. */
+export const lineationCases = ['plunging', 'horizontal', 'vertical'] as const
+export type LineationCase = (typeof lineationCases)[number]
+
+/** A symbol of a lineation, in a frame with y along its trend, origin at the place. */
+export interface LineationSymbol extends PointFacts {
+  type: LineationProperties['type']
+  cases: Record<LineationCase, readonly Mark[]>
+}
+
+/** A symbol of a place, origin at the place: as it stands on the page or, where the item has an azimuth to show, with y
+ *  along it. */
+export interface PlaceSymbol extends PointFacts {
+  type: StationType
+  marks: readonly Mark[]
+  /** What the azimuth of such an item is, as a field's name; missing where it has none. */
+  azimuth?: string
 }
 
 /** Sizes of a dashed line's four location confidences. */

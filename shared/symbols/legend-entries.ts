@@ -1,5 +1,5 @@
 import { locationConfidences, type LocationConfidence } from '../items/confidence'
-import type { Item, ItemOf, LineItem } from '../items/item'
+import type { Item, ItemOf } from '../items/item'
 import type { UnitProperties } from '../items/legend'
 import {
   axialTracePropertiesSchema,
@@ -7,35 +7,19 @@ import {
   faultPropertiesSchema,
   otherLinePropertiesSchema,
 } from '../items/lines'
-import { attitudePropertiesSchema, stationPropertiesSchema } from '../items/points'
 import type { Millimetres } from '../units'
-import { attitudeCases, type AttitudeCase, type LineSymbol } from './definition'
-import { attitudes } from './definitions/attitudes'
-import { stationMarks } from './definitions/points'
+import type { LineSymbol } from './definition'
 import type { DisplayList, Mark } from './display-list'
-import { attitudeCaseOf, drawAttitude } from './draw-attitude'
 import { unitInk } from './draw-face'
 import { lineSymbolOf, lineSymbols, variantOf } from './draw-item'
 import { drawLine } from './draw-line'
+import type { LegendEntry, LegendKind, PointEntry } from './legend-entry'
 import { polyline } from './paths'
 import { boundsOf, placeMarks } from './place-marks'
+import { drawPointEntry, pointEntries, pointEntryIdOf } from './point-entries'
 import { measureText } from './text-metrics'
 
-/** Kinds of item that the legend explains by a drawn sample; units have swatches instead. */
-export type LegendKind = LineItem['kind'] | 'attitude' | 'station'
-
-interface EntryOf<K extends LegendKind> {
-  /** Stable name, for example `fault.normal.certain`. */
-  id: string
-  kind: K
-  group: 'lines' | 'points'
-  title: string
-  /** What an item drawn with this entry starts with. Of an attitude, strike and dip are those of the sample. */
-  properties: ItemOf<K>['properties']
-}
-
-/** A row of the legend, and a pen of the palette: one for each symbol that looks different. */
-export type LegendEntry = { [K in LegendKind]: EntryOf<K> }[LegendKind]
+export type { LegendEntry, LegendKind } from './legend-entry'
 
 /** An item that has a legend entry. */
 type ExplainedItem = ItemOf<LegendKind>
@@ -74,41 +58,10 @@ function lineEntry(symbol: LineSymbol, locationConfidence: LocationConfidence): 
   }
 }
 
-/** Planes shown as samples: striking north-east, so that the mark and its figure stand lower right. */
-const samplePlanes: Record<AttitudeCase, { strike: number | null; dip: number; overturned: boolean }> = {
-  inclined: { strike: 60, dip: 35, overturned: false },
-  horizontal: { strike: null, dip: 0, overturned: false },
-  vertical: { strike: 60, dip: 90, overturned: false },
-  overturned: { strike: 60, dip: 75, overturned: true },
-}
-
-const attitudeId = (type: string, attitudeCase: AttitudeCase): string => `attitude.${type}.${attitudeCase}`
-
-const attitudeEntries: LegendEntry[] = attitudes.flatMap(({ type, title, cases }) =>
-  attitudeCases
-    .filter((attitudeCase) => cases[attitudeCase] !== undefined)
-    .map((attitudeCase): LegendEntry => ({
-      id: attitudeId(type, attitudeCase),
-      kind: 'attitude',
-      group: 'points',
-      title: `${title}, ${attitudeCase}`,
-      properties: attitudePropertiesSchema.parse({ type, ...samplePlanes[attitudeCase] }),
-    })),
-)
-
-const stationEntry: LegendEntry = {
-  id: 'station',
-  kind: 'station',
-  group: 'points',
-  title: 'Station',
-  properties: stationPropertiesSchema.parse({}),
-}
-
 /** Every entry, in the order of the palette: lines by kind and confidence, then points. */
 export const legendEntries: readonly LegendEntry[] = [
   ...lineSymbols.flatMap((symbol) => locationConfidences.map((confidence) => lineEntry(symbol, confidence))),
-  ...attitudeEntries,
-  stationEntry,
+  ...pointEntries,
 ]
 
 const entriesById: ReadonlyMap<string, LegendEntry> = new Map(legendEntries.map((entry) => [entry.id, entry]))
@@ -125,9 +78,9 @@ export function legendEntryOf(item: Item): LegendEntry | undefined {
     case 'other-line':
       return entriesById.get(lineId(lineSymbolOf(item), item.properties.locationConfidence))
     case 'attitude':
-      return entriesById.get(attitudeId(item.properties.type, attitudeCaseOf(item.properties)))
+    case 'lineation':
     case 'station':
-      return stationEntry
+      return entriesById.get(pointEntryIdOf(item))
     default:
       return undefined
   }
@@ -141,8 +94,7 @@ interface Size {
 /** The sample of an entry at its true size, in a box with its origin at the lower left: a line across its middle, a point at
  *  its centre. What is higher or wider than the box is not cut. */
 export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
-  if (entry.kind === 'attitude') return centred(drawAttitude(entry.properties, [0, 0], 0), size)
-  if (entry.kind === 'station') return centred(stationMarks, size)
+  if (isPointEntry(entry)) return centred(drawPointEntry(entry), size)
   const middle = size.height / 2
   return drawLine(
     lineSymbolOf(entry),
@@ -164,6 +116,8 @@ const showsPlunge = (entry: LegendEntry): boolean =>
   entry.kind === 'axial-trace' &&
   entry.properties.locationConfidence === 'certain' &&
   !variantOf(entry).startsWith('monocline')
+
+const isPointEntry = (entry: LegendEntry): entry is PointEntry => entry.group === 'points'
 
 function centred(marks: readonly Mark[], size: Size): Mark[] {
   const box = boundsOf(marks)

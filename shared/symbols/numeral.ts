@@ -1,5 +1,6 @@
-import type { Millimetres, MM } from '../units'
+import type { Degrees, Millimetres, MM } from '../units'
 import type { Ink, Mark, TextMark } from './display-list'
+import { turnTo } from './paths'
 import { inkPoints } from './place-marks'
 import { capHeight, measureText } from './text-metrics'
 
@@ -14,31 +15,47 @@ export interface NumeralType {
 /** Finest step in which a figure is moved out until it is clear. */
 const STEP: Millimetres = 0.05
 
-/** An upright figure beside a symbol: as near to it as its ink allows, straight away from `from` in one direction.
- *  @param away unit vector on the drawing: the down-dip direction, or the side of an arrow
- *  @param ink marks that the figure keeps clear of, as they lie on the drawing
- *  @param furthest distance at which the search ends, and the figure stands whatever is there */
-export function numeralBeside(
-  text: string,
-  { from, away, ink, furthest }: { from: MM; away: MM; ink: readonly Mark[]; furthest: Millimetres },
-  type: NumeralType & { ink: Ink },
-): TextMark {
+/** A figure would sooner stand twice as far away than be turned by this. */
+const TURN_AS_FAR: Degrees = 90
+
+/** Where a figure is to stand. */
+export interface NumeralPlace {
+  from: MM
+  /** Unit vector on the drawing: the down-dip direction, or the side of an arrow. */
+  away: MM
+  /** Marks that the figure keeps clear of, as they lie on the drawing. */
+  ink: readonly Mark[]
+  /** Distance at which the search ends, and the figure stands whatever is there. */
+  furthest: Millimetres
+  /** Turns from `away` that will do as well, degrees: where the nearest place is, and the least turn among equals. */
+  turns?: readonly Degrees[]
+}
+
+/** An upright figure beside a symbol: as near to `from` as its ink allows, straight away from it in one direction. */
+export function numeralBeside(text: string, place: NumeralPlace, type: NumeralType & { ink: Ink }): TextMark {
+  const { from, ink, furthest, turns = [0] } = place
   const half: MM = [measureText(text, type.size, type.weight) / 2, capHeight(type.size, type.weight) / 2]
   const lines = inkPoints(ink)
-  let distance = type.gap
-  while (distance < furthest) {
-    const middle: MM = [from[0] + away[0] * distance, from[1] + away[1] * distance]
-    const isClear = lines.every(({ points, halfWidth }) => {
-      const [x, y] = [half[0] + type.gap + halfWidth, half[1] + type.gap + halfWidth]
-      return points.every((point, index) => !crossesBox(points[index - 1] ?? point, point, middle, [x, y]))
+  const isClear = (middle: MM): boolean =>
+    lines.every(({ points, halfWidth }) => {
+      const box: MM = [half[0] + type.gap + halfWidth, half[1] + type.gap + halfWidth]
+      return points.every((point, index) => !crossesBox(points[index - 1] ?? point, point, middle, box))
     })
-    if (isClear) break
-    distance += STEP
-  }
+  const ways = turns.map((turn) => {
+    const away = turnTo(turn, [0, 0])(place.away)
+    const pointAt = (distance: Millimetres): MM => [
+      from[0] + away[0] * distance,
+      from[1] + away[1] * distance,
+    ]
+    let distance = type.gap
+    while (distance < furthest && !isClear(pointAt(distance))) distance += STEP
+    return { at: pointAt(distance), effort: distance * (1 + Math.abs(turn) / TURN_AS_FAR) }
+  })
+  const [first] = ways.toSorted((a, b) => a.effort - b.effort)
   return {
     mark: 'text',
     text,
-    at: [from[0] + away[0] * distance, from[1] + away[1] * distance],
+    at: first?.at ?? from,
     size: type.size,
     weight: type.weight,
     ink: type.ink,

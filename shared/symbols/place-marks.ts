@@ -11,6 +11,8 @@ export const placeMarks = (marks: readonly Mark[], map: (point: MM) => MM): Mark
       case 'stroke':
       case 'fill':
         return { ...mark, path: mapPath(mark.path, map) }
+      case 'pattern':
+        return { ...mark, path: mapPath(mark.path, map), anchor: map(mark.anchor) }
       case 'text':
         return { ...mark, at: map(mark.at) }
       case 'group':
@@ -35,9 +37,12 @@ export const inkPoints = (list: DisplayList): { points: MM[]; halfWidth: Millime
       case 'stroke':
         return flatten(mark.path).map((points) => ({ points, halfWidth: mark.width / 2 }))
       case 'fill':
+      case 'pattern':
         return flatten(mark.path).map((points) => ({ points, halfWidth: 0 }))
-      case 'text':
-        return [{ points: textCorners(mark), halfWidth: mark.halo ?? 0 }]
+      case 'text': {
+        const corners = textCorners(mark)
+        return [{ points: [...corners, corners[0]], halfWidth: mark.halo ?? 0 }]
+      }
       case 'group':
         return inkPoints(mark.marks)
     }

@@ -1,26 +1,9 @@
 import Flatbush from 'flatbush'
 import { gridDistance } from '@shared/geometry/bearings'
 import { nearestOnLine } from '@shared/geometry/nearest'
-import {
-  isLineItem,
-  isPointItem,
-  type Item,
-  type ItemKind,
-  type LineItem,
-  type PointItem,
-} from '@shared/items/item'
+import { isLineItem, isPointItem, type Item, type LineItem, type PointItem } from '@shared/items/item'
+import { drawingOrder } from '@shared/symbols/drawing-order'
 import type { Metres, XY } from '@shared/units'
-
-/** Kinds in the order of drawing: what must stay readable comes later. */
-const drawingOrder: readonly ItemKind[] = [
-  'contact',
-  'other-line',
-  'fault',
-  'axial-trace',
-  'station',
-  'attitude',
-  'unit-label',
-]
 
 export interface GroundBox {
   min: XY
@@ -32,10 +15,13 @@ export interface GroundBox {
 export class ItemIndex {
   private readonly items: readonly (LineItem | PointItem)[]
   private readonly tree: Flatbush | undefined
+  /** All items that are points, in drawing order. */
+  readonly points: readonly PointItem[]
 
   constructor(items: readonly Item[]) {
     const placed = items.filter((item): item is LineItem | PointItem => item.geometry !== null)
     this.items = drawingOrder.flatMap((kind) => placed.filter((item) => item.kind === kind))
+    this.points = this.items.filter(isPointItem)
     if (this.items.length === 0) return
     this.tree = new Flatbush(this.items.length)
     for (const item of this.items) {

@@ -19,7 +19,7 @@ export const aLine = <K extends 'contact' | 'fault' | 'axial-trace' | 'other-lin
   properties: Partial<ItemOf<K>['properties']>,
 ): ItemOf<K> => item(kind, { type: 'LineString', coordinates }, properties)
 
-export const aPoint = <K extends 'attitude' | 'station' | 'unit-label'>(
+export const aPoint = <K extends 'attitude' | 'lineation' | 'station' | 'unit-label'>(
   kind: K,
   coordinates: XY,
   properties: Partial<ItemOf<K>['properties']>,

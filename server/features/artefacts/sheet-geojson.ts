@@ -9,6 +9,7 @@ import { unitsById } from '@shared/sheet-face/compose-face'
 import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import type { EditionStatement } from '@shared/sheet-face/edition-statement'
 import { describeAttitude, describeAxis } from '@shared/structure/attitude-words'
+import { describeLineation } from '@shared/structure/lineation-words'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
 import type { LonLat, XY } from '@shared/units'
 import { breathe } from './breathe'
@@ -101,6 +102,8 @@ function wordsOf(item: Item, unit: UnitProperties | undefined): string {
   switch (item.kind) {
     case 'attitude':
       return describeAttitude(item.properties)
+    case 'lineation':
+      return describeLineation(item.properties)
     case 'axial-trace': {
       const { form, plunge, trend } = item.properties
       return describeAxis(form, plunge, trend)

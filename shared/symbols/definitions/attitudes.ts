@@ -1,6 +1,6 @@
 import type { Millimetres, MM } from '../../units'
-import type { AttitudeSymbol } from '../definition'
-import type { Mark, Path } from '../display-list'
+import type { AttitudeDrawings, AttitudeSymbol } from '../definition'
+import type { Mark, Path, PathStep } from '../display-list'
 import { circle, halfCircleLeft, mapPath, polyline, turnTo } from '../paths'
 
 const STRIKE: Millimetres = 5.6
@@ -20,16 +20,32 @@ const strikeLine = line(
     [0, STRIKE / 2],
   ]),
 )
-const cross = line([
-  ...polyline([
-    [-CROSS, 0],
-    [CROSS, 0],
-  ]),
-  ...polyline([
-    [0, -CROSS],
-    [0, CROSS],
-  ]),
+/** Height of a wave's crests, and how a cubic curve follows half a wave. Source: derived; the curve's middle is at 3/4 of
+ *  its handles' height. */
+const CREST: Millimetres = 0.42
+const HANDLE = { height: 4 / 3, along: 0.36 }
+
+/** A line up y that waves about it: two whole waves, at rest in its middle, where the mark stands. */
+function wave(length: Millimetres): PathStep[] {
+  const half = length / 4
+  return [
+    ['move', 0, -length / 2],
+    ...[1, -1, 1, -1].map((side, index): PathStep => {
+      const from = (index - 2) * half
+      const x = side * CREST * HANDLE.height
+      return ['curve', x, from + HANDLE.along * half, x, from + (1 - HANDLE.along) * half, 0, from + half]
+    }),
+  ]
+}
+const waveLine = line(wave(STRIKE))
+
+const arm = polyline([
+  [0, -CROSS],
+  [0, CROSS],
 ])
+const crossOf = (path: Path): Mark => line([...mapPath(path, turnTo(90, [0, 0])), ...path])
+const cross = crossOf(arm)
+const waveCross = crossOf(wave(2 * CROSS))
 
 /** A head that stands on the strike line, on the down-dip side (+1) or the other (−1). */
 type Head = (side: 1 | -1) => Mark
@@ -97,44 +113,53 @@ const diamond = (half: Millimetres): MM[] => [
   [-half, 0],
 ]
 
-/** Plane symbols: a long strike line with its mark down dip. Kinds of plane differ by the mark alone. */
+const BALL: Millimetres = 0.46
+const ball = (at: MM): Mark => solid(circle(at, BALL))
+
+/** The cases of a plane whose strike line and cross are given: straight ones, or waves. */
+const drawings = (head: Head, strike: Mark, level: readonly Mark[]): AttitudeDrawings => ({
+  inclined: [strike, head(1)],
+  horizontal: level,
+  vertical: [strike, ...bothSides(head)],
+})
+
+const ring = outline(circle([0, 0], 1.25))
+const solidDiamond = solid(polyline(diamond(1.1), true))
+
+/** Plane symbols: a long strike line with its mark down dip. Kinds of plane differ by the mark alone; a strike line that
+ *  waves says that the plane does. */
 export const attitudes: readonly AttitudeSymbol[] = [
   {
     type: 'bedding',
     title: 'Bedding',
-    cases: {
-      inclined: [strikeLine, tick(1)],
-      horizontal: [cross, outline(circle([0, 0], 1.25))],
-      vertical: [strikeLine, ...bothSides(tick)],
-      overturned: [strikeLine, hook],
+    drivenBy: ['strike', 'dip', 'overturned', 'undulating', 'tops known'],
+    cases: { ...drawings(tick, strikeLine, [cross, ring]), overturned: [strikeLine, hook] },
+    undulating: { ...drawings(tick, waveLine, [waveCross, ring]), overturned: [waveLine, hook] },
+    topsKnown: {
+      inclined: [ball([TICK, 0])],
+      horizontal: [ball([0, 0])],
+      vertical: [ball([TICK, 0])],
+      overturned: [ball([TICK, -HOOK])],
     },
   },
   {
     type: 'foliation',
     title: 'Foliation',
-    cases: {
-      inclined: [strikeLine, solidTriangle(1)],
-      horizontal: [cross, solid(polyline(diamond(1.1), true))],
-      vertical: [strikeLine, ...bothSides(solidTriangle)],
-    },
+    drivenBy: ['strike', 'dip', 'undulating'],
+    cases: drawings(solidTriangle, strikeLine, [cross, solidDiamond]),
+    undulating: drawings(solidTriangle, waveLine, [waveCross, solidDiamond]),
   },
   {
     type: 'cleavage',
     title: 'Cleavage',
-    cases: {
-      inclined: [strikeLine, openTriangle(1)],
-      horizontal: [cross, outline(polyline(diamond(1.25), true))],
-      vertical: [strikeLine, ...bothSides(openTriangle)],
-    },
+    drivenBy: ['strike', 'dip'],
+    cases: drawings(openTriangle, strikeLine, [cross, outline(polyline(diamond(1.25), true))]),
   },
   {
     type: 'joint',
     title: 'Joint',
-    cases: {
-      inclined: [strikeLine, bar(1)],
-      horizontal: [cross, crossBars],
-      vertical: [strikeLine, ...bothSides(bar)],
-    },
+    drivenBy: ['strike', 'dip'],
+    cases: drawings(bar, strikeLine, [cross, crossBars]),
   },
 ]
 

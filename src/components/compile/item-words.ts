@@ -3,7 +3,9 @@ import type { Item, ItemOf, LineItem } from '@shared/items/item'
 import type { FaultProperties } from '@shared/items/lines'
 import type { UnitProperties } from '@shared/items/legend'
 import { describeAttitude, describeAxis } from '@shared/structure/attitude-words'
-import { compassWords } from '@shared/structure/compass'
+import { azimuthFigure, compassWords } from '@shared/structure/compass'
+import { describeLineation } from '@shared/structure/lineation-words'
+import { placeSymbolOf } from '@shared/symbols/draw-place'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
 import { normalizeAzimuth, type Azimuth, type Degrees, type Metres, type XY } from '@shared/units'
 
@@ -28,8 +30,10 @@ export function itemTitle(item: Item, context: WordsContext): string {
     }
     case 'attitude':
       return attitudeTitle(item)
+    case 'lineation':
+      return describeLineation(item.properties)
     case 'station':
-      return item.properties.name ? `Station ${item.properties.name}` : 'Station'
+      return placeTitle(item)
     case 'unit-label':
       return unitLabelTitle(context.unitOf(item.properties.unit), item.properties.identity)
     case 'unit':
@@ -53,6 +57,13 @@ function attitudeTitle({ properties }: ItemOf<'attitude'>): string {
   return words === 'Horizontal'
     ? `${type}, horizontal`
     : `${type} ${words.charAt(0).toLowerCase()}${words.slice(1)}`
+}
+
+function placeTitle(item: ItemOf<'station'>): string {
+  const { name, azimuth } = item.properties
+  const { title, azimuth: meaning } = placeSymbolOf(item.properties.type)
+  const toward = meaning && azimuth !== null ? `, ${meaning.toLowerCase()} ${azimuthFigure(azimuth)}°` : ''
+  return `${title}${name ? ` ${name}` : ''}${toward}`
 }
 
 const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)
@@ -99,7 +110,8 @@ export function itemFacts(item: Item): string[] {
   if (item.geometry?.type === 'LineString' && 'name' in item.properties) {
     return [item.properties.name, lengthWords(gridLength(item.geometry.coordinates))].filter(Boolean)
   }
-  if (item.kind === 'attitude' && item.properties.station) return [`station ${item.properties.station}`]
+  if ((item.kind === 'attitude' || item.kind === 'lineation') && item.properties.station)
+    return [`station ${item.properties.station}`]
   return []
 }
 

@@ -10,13 +10,26 @@ import { useUnfinishedStore } from '@/stores/unfinished'
 import { draftOf, readDraft, type AttitudeDraft } from './attitude-draft'
 import { useWords } from './useWords'
 
+/** What a new attitude starts with; of one on the sheet, what plane it is. */
+export type StartingAttitude = Pick<
+  AttitudeProperties,
+  'type' | 'overturned' | 'undulating' | 'topsKnown' | 'station'
+> & { text: string }
+
 export interface AttitudeSource {
   /** The attitude to change; null for a new one. */
   item: ItemOf<'attitude'> | null
   place: XY
-  /** What a new one starts with. */
-  start: Pick<AttitudeProperties, 'type' | 'overturned' | 'station'> & { text: string }
+  start: StartingAttitude
 }
+
+const startingProperties = ({ type, undulating, topsKnown, station }: StartingAttitude) => ({
+  type,
+  undulating,
+  topsKnown,
+  station,
+  note: '',
+})
 
 /** The draft of a reading, what it says, and how it becomes an attitude on the sheet. */
 export function useAttitudeEntry(source: () => AttitudeSource) {
@@ -65,7 +78,7 @@ export function useAttitudeEntry(source: () => AttitudeSource) {
           id: newId(),
           kind: 'attitude',
           geometry: { type: 'Point', coordinates: place },
-          properties: { type: start.type, station: start.station, note: '', ...values },
+          properties: { ...startingProperties(start), ...values },
         })
     refusal.value = Object.values(refused ?? {})[0] ?? ''
     if (refused) return false

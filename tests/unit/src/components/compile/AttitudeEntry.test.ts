@@ -10,7 +10,14 @@ vi.mock('@/stores/sheet', async () => ({
 }))
 
 const PLACE: [number, number] = [289_000, 5_283_000]
-const start = { type: 'bedding', overturned: false, station: '', text: '' } as const
+const start = {
+  type: 'bedding',
+  overturned: false,
+  undulating: false,
+  topsKnown: false,
+  station: '',
+  text: '',
+} as const
 
 const sheetFace = (attitudeConvention: 'strike-dip' | 'dip-direction-dip'): Item => ({
   id: '7f1c0b6a-0f5e-4e6c-9d70-0d9f4f5b1a01',
@@ -27,6 +34,8 @@ const attitude: ItemOf<'attitude'> = {
     strike: 45,
     dip: 40,
     overturned: false,
+    undulating: false,
+    topsKnown: false,
     station: '',
     note: '',
     reading: null,

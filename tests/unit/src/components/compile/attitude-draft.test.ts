@@ -97,7 +97,16 @@ describe('a declination', () => {
 })
 
 describe('going on with an attitude', () => {
-  const plane = { type: 'bedding', strike: 45, dip: 40, overturned: false, station: '', note: '' } as const
+  const plane = {
+    type: 'bedding',
+    strike: 45,
+    dip: 40,
+    overturned: false,
+    undulating: false,
+    topsKnown: false,
+    station: '',
+    note: '',
+  } as const
   const reading = (convention: 'strike-dip' | 'dip-direction-dip' | 'quadrant', text: string) => ({
     ...plane,
     reading: { text, convention, northReference: 'magnetic' as const, declination: -14 },

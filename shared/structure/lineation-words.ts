@@ -1,0 +1,33 @@
+import type { LineationProperties } from '../items/points'
+import { describeAttitude, dipFigure } from './attitude-words'
+import { azimuthFigure, compassWords } from './compass'
+
+/** What a lineation's words depend on. */
+export type DescribedLineation = Pick<LineationProperties, 'type' | 'trend' | 'plunge' | 'plane'>
+
+const names: Record<LineationProperties['type'], string> = {
+  lineation: 'Lineation',
+  'minor-fold-axis': 'Minor fold axis',
+}
+
+/** A line as notebooks write it, `120/35`: trend and plunge; `vertical` without a trend. */
+export function formatLineation({ trend, plunge }: Pick<LineationProperties, 'trend' | 'plunge'>): string {
+  return trend === null || plunge === 90 ? 'vertical' : `${azimuthFigure(trend)}/${dipFigure(plunge)}`
+}
+
+/** A lineation in words: `Lineation, plunges 35° toward 120° (south-east), on foliation that strikes 045°, dips 40° toward
+ *  135° (south-east)`. */
+export function describeLineation({ type, trend, plunge, plane }: DescribedLineation): string {
+  const line = `${names[type]}, ${describePlunge(trend, plunge)}`
+  if (!plane) return line
+  const words = describeAttitude(plane)
+  return `${line}, on ${plane.type} that ${words === 'Horizontal' ? 'is horizontal' : lowerFirst(words)}`
+}
+
+function describePlunge(trend: number | null, plunge: number): string {
+  if (trend === null || plunge === 90) return 'vertical'
+  if (plunge === 0) return `horizontal, trending ${azimuthFigure(trend)}°`
+  return `plunges ${Math.round(plunge * 10) / 10}° toward ${azimuthFigure(trend)}° (${compassWords(trend)})`
+}
+
+const lowerFirst = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1)
