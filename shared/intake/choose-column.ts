@@ -45,6 +45,24 @@ function valueFit(
   return { column, understood: sum(given.filter((entry) => understands(entry.value))), stated: sum(given) }
 }
 
+interface FormWords {
+  one: string
+  many: string
+}
+
+export const lineForm: FormWords = { one: 'line', many: 'lines' }
+export const pointForm: FormWords = { one: 'point', many: 'points' }
+
+export const counted = (count: number, { one, many }: FormWords): string =>
+  `${count} ${count === 1 ? one : many}`
+
+/** For how many records a column says what they are: “Type” says what 21 of 24 points are. */
+export function saysWhat({ column, understood, stated }: ValueFit, form: FormWords): string {
+  const start = `“${column.name}” says what`
+  if (understood < stated) return `${start} ${understood} of ${stated} ${form.many} are.`
+  return stated === 1 ? `${start} the ${form.one} is.` : `${start} all ${counted(stated, form)} are.`
+}
+
 /** Whether a column holds numbers within a range, and little else. */
 export const isNumeric = (column: IntakeColumn, least: number, greatest: number): boolean =>
   column.numbers !== null &&
@@ -65,7 +83,7 @@ const plainName = (name: string): string =>
  *  @param hints whether a likely meaning can be offered for a value */
 export function strangeValues(
   strange: readonly { value: string; count: number }[],
-  { one, many }: { one: string; many: string },
+  form: FormWords,
   hints: (value: string) => boolean,
 ): string | undefined {
   const [first] = strange
@@ -75,5 +93,5 @@ export function strangeValues(
   const hinted = strange.filter(({ value }) => hints(value)).length
   const offer =
     hinted === 0 ? '' : ` A likely meaning is offered beside ${hinted === strange.length ? 'each' : hinted}.`
-  return `${what} not understood and would be left out (${records} ${records === 1 ? one : many}).${offer}`
+  return `${what} not understood and would be left out (${counted(records, form)}).${offer}`
 }

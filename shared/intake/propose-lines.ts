@@ -3,7 +3,10 @@ import {
   columnByValues,
   columnNamed,
   isNumeric,
+  counted,
   isWordy,
+  lineForm,
+  saysWhat,
   strangeValues,
   type ValueFit,
 } from './choose-column'
@@ -76,14 +79,14 @@ function valueNotes(values: IntakeColumn['values']): ProposalNote[] {
   const given = values.map(({ value, lines }) => ({ value, count: lines }))
   const strange = strangeValues(
     given.filter(({ value }) => !readLineType(value)),
-    { one: 'line', many: 'lines' },
+    lineForm,
     (value) => suggestLineType(value) !== undefined,
   )
   const senseless = given.filter(({ value }) => readLineType(value) && isSenseless(value))
   const unstated = senseless.map(({ value, count }): ProposalNote => ({
     weight: 'reason',
     field,
-    text: `“${value}” (${count} ${count === 1 ? 'line' : 'lines'}) does not say which way it slips: the type stays unspecified.`,
+    text: `“${value}” (${counted(count, lineForm)}) does not say which way it slips: the type stays unspecified.`,
   }))
   return strange ? [...unstated, { weight: 'check', field, text: strange }] : unstated
 }
@@ -100,7 +103,7 @@ function proposeConfidence(
     notes.push({
       weight: 'reason',
       field,
-      text: `“${own.column.name}” states the location confidence of ${own.understood} lines.`,
+      text: `“${own.column.name}” states the location confidence of ${counted(own.understood, lineForm)}.`,
     })
     return {
       confidenceColumn: own.column.name,
@@ -144,7 +147,7 @@ function typeNote(column: IntakeColumn, fit: ValueFit | undefined): ProposalNote
     ? {
         weight: 'reason',
         field,
-        text: `“${column.name}” says what ${fit.understood} of ${fit.stated} lines are.`,
+        text: saysWhat(fit, lineForm),
       }
     : {
         weight: 'check',

@@ -1,6 +1,14 @@
 import type { AttitudeConvention } from '../items/points'
 import { parseAttitude } from '../structure/attitude-text'
-import { columnByValues, columnNamed, isNumeric, isWordy, strangeValues } from './choose-column'
+import {
+  columnByValues,
+  columnNamed,
+  isNumeric,
+  isWordy,
+  pointForm,
+  saysWhat,
+  strangeValues,
+} from './choose-column'
 import type { Mapping, PointTarget } from './mapping'
 import { readPointType, suggestPointType } from './point-words'
 import type { IntakeColumn, ProposalNote } from './report'
@@ -116,18 +124,13 @@ function proposeTypes(
     })
     return { typeColumn: null, types: {}, otherwise }
   }
-  if (fit)
-    notes.push({
-      weight: 'reason',
-      field,
-      text: `“${column.name}” says what ${fit.understood} of ${fit.stated} points are.`,
-    })
+  if (fit) notes.push({ weight: 'reason', field, text: saysWhat(fit, pointForm) })
   const values = column.values.filter(({ value, points }) => value !== '' && points > 0)
   const strange = strangeValues(
     values
       .filter(({ value }) => !readPointType(value))
       .map(({ value, points }) => ({ value, count: points })),
-    { one: 'point', many: 'points' },
+    pointForm,
     (value) => suggestPointType(value) !== undefined,
   )
   if (strange) notes.push({ weight: 'check', field: 'points.types', text: strange })

@@ -84,8 +84,9 @@ export const optionWith = <T extends Target>(
 ): TargetOption<T> | undefined => groups.flatMap(({ options }) => options).find((each) => each.key === key)
 
 /** The legend entry that a target will be drawn as; undefined where it is left out. */
-export const entryOf = (target: Target, confidence: LocationConfidence): LegendEntry | undefined =>
-  legendEntries.find((entry) => agrees(entry, target, confidence))
+export function entryOf(target: Target, confidence: LocationConfidence): LegendEntry | undefined {
+  return legendEntries.find((entry) => agrees(entry, target, confidence))
+}
 
 /** Whether an entry has all that a target says, and the confidence if it is a line. */
 function agrees(entry: LegendEntry, target: Target, confidence: LocationConfidence): boolean {
