@@ -22,30 +22,31 @@ const strikeLine = line(
 )
 /** Height of a wave's crests, and how a cubic curve follows half a wave. Source: derived; the curve's middle is at 3/4 of
  *  its handles' height. */
-const CREST: Millimetres = 0.42
+const CREST: Millimetres = 0.34
 const HANDLE = { height: 4 / 3, along: 0.36 }
 
-/** A line up y that waves about it: two whole waves, at rest in its middle, where the mark stands. */
-function wave(length: Millimetres): PathStep[] {
-  const half = length / 4
+/** A line up y that waves about it, at rest in its middle, where the mark stands.
+ *  @param halves half waves, an even number */
+function wave(length: Millimetres, halves: number): PathStep[] {
+  const half = length / halves
   return [
     ['move', 0, -length / 2],
-    ...[1, -1, 1, -1].map((side, index): PathStep => {
-      const from = (index - 2) * half
-      const x = side * CREST * HANDLE.height
+    ...Array.from({ length: halves }, (_, index): PathStep => {
+      const from = (index - halves / 2) * half
+      const x = (index % 2 === 0 ? 1 : -1) * CREST * HANDLE.height
       return ['curve', x, from + HANDLE.along * half, x, from + (1 - HANDLE.along) * half, 0, from + half]
     }),
   ]
 }
-const waveLine = line(wave(STRIKE))
+const waveLine = line(wave(STRIKE, 6))
 
 const arm = polyline([
   [0, -CROSS],
   [0, CROSS],
 ])
-const crossOf = (path: Path): Mark => line([...mapPath(path, turnTo(90, [0, 0])), ...path])
-const cross = crossOf(arm)
-const waveCross = crossOf(wave(2 * CROSS))
+const crossWith = (level: Path): Mark => line([...mapPath(level, turnTo(90, [0, 0])), ...arm])
+const cross = crossWith(arm)
+const waveCross = crossWith(wave(2 * CROSS, 4))
 
 /** A head that stands on the strike line, on the down-dip side (+1) or the other (−1). */
 type Head = (side: 1 | -1) => Mark

@@ -41,6 +41,9 @@ const openHead = (tip: Millimetres): Mark => ({
   cap: 'round',
 })
 
+/** Where the crown of a minor fold's arch stands on a plunging axis: beyond the mark of a plane. */
+const ARCH: Millimetres = 3.7
+
 /** A small fold across the shaft: an arch whose crown points up y. */
 const arch = (crown: Millimetres): Mark =>
   line([
@@ -74,7 +77,7 @@ export const lineations: readonly LineationSymbol[] = [
         solidHead(HALF),
         turned(solidHead(HALF)),
       ],
-      vertical: [solid(diamond(1.15))],
+      vertical: [solid(diamond(1.05))],
     },
   },
   {
@@ -82,8 +85,8 @@ export const lineations: readonly LineationSymbol[] = [
     title: 'Minor fold axis',
     drivenBy: ['trend', 'plunge', 'plane'],
     cases: {
-      plunging: [shaft(0, LENGTH), openHead(LENGTH), arch(2.9)],
-      horizontal: [shaft(-HALF, HALF), openHead(HALF), turned(openHead(HALF)), arch(0.6)],
+      plunging: [shaft(0, LENGTH), openHead(LENGTH), arch(ARCH)],
+      horizontal: [shaft(-HALF, HALF), openHead(HALF), turned(openHead(HALF)), arch(2.1), turned(arch(2.1))],
       vertical: [solid(diamond(0.85)), arch(2), turned(arch(2))],
     },
   },

@@ -3,7 +3,7 @@ import type { PlaceSymbol } from '../definition'
 import type { Mark, Path, PathStep } from '../display-list'
 import { circle, polyline } from '../paths'
 
-const STROKE: Millimetres = 0.3
+const STROKE: Millimetres = 0.34
 
 const line = (path: Path, width = STROKE): Mark => ({ mark: 'stroke', path, width, ink: 'black' })
 const round = (path: Path, width = STROKE): Mark => ({ ...line(path, width), cap: 'round' }) as Mark
@@ -32,20 +32,20 @@ const quarter = (x: 1 | -1, y: 1 | -1): PathStep[] => {
   ]
 }
 
-/** A pick: a shaft, and across its upper end a bent head. @param side toward which its head leans */
+/** A pick: a shaft, and across its upper end a head bent a little. @param side toward which it leans */
 const pick = (side: 1 | -1): Mark[] => [
   round(
     polyline([
-      [-side * 1.25, -1.25],
-      [side * 1.05, 1.05],
+      [-side * 1.35, -1.45],
+      [side * 1.1, 1],
     ]),
   ),
   round(
     [
-      ['move', side * 0.1, 1.55],
-      ['curve', side * 0.85, 1.5, side * 1.5, 0.85, side * 1.55, 0.1],
+      ['move', side * 0.35, 1.5],
+      ['curve', side * 0.8, 1.45, side * 1.55, 0.7, side * 1.6, 0.25],
     ],
-    0.46,
+    0.5,
   ),
 ]
 
@@ -91,11 +91,11 @@ export const places: readonly PlaceSymbol[] = [
     title: 'Spring',
     drivenBy: [],
     marks: [
-      solid(circle([0, 0], 0.62)),
+      solid(circle([0, 0], 0.7)),
       round([
-        ['move', 0.4, -0.3],
-        ['curve', 1.0, -1.2, 1.3, 0.2, 1.8, -0.7],
-        ['curve', 2.2, -1.4, 2.5, -0.4, 3.0, -1.1],
+        ['move', 0.5, -0.3],
+        ['curve', 1.2, -1.5, 1.4, 0.5, 2.1, -0.7],
+        ['curve', 2.7, -1.8, 2.9, 0.1, 3.5, -1.1],
       ]),
     ],
   },
@@ -109,12 +109,12 @@ export const places: readonly PlaceSymbol[] = [
       line([
         ...polyline([
           [0, 0],
-          [0, 2.9],
+          [0, 2.8],
         ]),
         ...polyline([
-          [-1.15, -1.25],
+          [-1.25, -1.45],
           [0, 0],
-          [1.15, -1.25],
+          [1.25, -1.45],
         ]),
       ]),
     ],
@@ -127,15 +127,28 @@ export const places: readonly PlaceSymbol[] = [
     marks: [
       line([
         ...polyline([
-          [-1.3, 0],
-          [1.3, 0],
+          [-1.5, -0.7],
+          [1.5, -0.7],
+        ]),
+        ...polyline([
+          [-1.5, 0],
+          [1.5, 0],
         ]),
         ...polyline([
           [0, 0],
-          [0, 2.6],
+          [0, 2.2],
         ]),
       ]),
-      solid(circle([0, 2.7], 0.55)),
+      solid(
+        polyline(
+          [
+            [0, 3.3],
+            [0.75, 1.9],
+            [-0.75, 1.9],
+          ],
+          true,
+        ),
+      ),
     ],
   },
 ]
