@@ -110,8 +110,10 @@ export const problemSchema = z
     instance: z.string(),
     /** What to do. */
     todo: z.string(),
-    /** Where in the input: JSON pointers. */
-    errors: z.array(z.strictObject({ pointer: z.string(), detail: z.string() })).optional(),
+    /** Where in the input: JSON pointers, and the id of the item that the place belongs to. */
+    errors: z
+      .array(z.strictObject({ pointer: z.string(), detail: z.string(), item: z.uuid().optional() }))
+      .optional(),
     /** Which items: their ids, with base, theirs and yours where they are in conflict. */
     items: z.array(z.unknown()).optional(),
   })

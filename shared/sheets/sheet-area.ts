@@ -2,7 +2,8 @@ import type { Area } from '../api/sheets'
 import { snapToGrid } from '../geometry/grid'
 import { gridDistance } from '../geometry/bearings'
 import type { SheetProjection } from '../geometry/projection'
-import { angleBetween, toRadians, type Degrees, type LonLat, type Metres, type XY } from '../units'
+import { findOutOfReach } from '../geometry/system-reach'
+import type { LonLat, Metres, XY } from '../units'
 
 /** The neatline of a new sheet, or why the area cannot be drawn in the projected system. */
 export type SheetArea = { outcome: 'ring'; neatline: XY[] } | { outcome: 'refused'; reason: string }
@@ -10,11 +11,6 @@ export type SheetArea = { outcome: 'ring'; neatline: XY[] } | { outcome: 'refuse
 /** Largest departure of a straight piece from the curve of a parallel or meridian, on paper: the width of a fine pen. */
 const SAGITTA_MM = 0.05
 const MOST_PIECES = 512
-
-/** How far from true scale a sheet may be: beyond 6 % its stated scale would mislead. */
-const MOST_DISTORTION = 0.06
-/** Farthest from the central meridian that a transverse Mercator grid is used; its neighbours are within 9°. */
-const FARTHEST_FROM_MERIDIAN: Degrees = 20
 
 /** Closed ring, counter-clockwise from the south-west corner, sheet metres on the 1 mm grid. Sides of an area in degrees
  *  are parallels and meridians, in as many straight pieces as keep within 0.05 mm of the curve on the printed sheet;
@@ -56,46 +52,19 @@ function cornersOf(area: Area, projection: SheetProjection): { lonLat: LonLat; x
   )
 }
 
-/** Why a place cannot be mapped in a projected system; undefined if it can. */
+/** Why a corner cannot be mapped in the chosen system; undefined if it can. */
 function whyUnfit(
-  { lonLat: [lon, lat], xy }: { lonLat: LonLat; xy: XY },
+  corner: { lonLat: LonLat; xy: XY },
   projection: SheetProjection,
   definition: string,
 ): string | undefined {
-  if (![lon, lat, ...xy].every(Number.isFinite) || Math.abs(lat) > 90) {
-    return 'The area does not exist in the chosen coordinate system.'
+  const found = findOutOfReach(corner, projection, definition)
+  if (!found) return undefined
+  if (found.why === 'nowhere') return 'The area does not exist in the chosen coordinate system.'
+  if (found.why === 'far-from-meridian') {
+    return `The area lies ${Math.round(found.degrees)}° from the central meridian of the chosen coordinate system: choose the zone that the area lies in.`
   }
-  const away = degreesFromMeridian(lon, definition)
-  if (away > FARTHEST_FROM_MERIDIAN) {
-    return `The area lies ${Math.round(away)}° from the central meridian of the chosen coordinate system: choose the zone that the area lies in.`
-  }
-  const back = projection.fromLonLat([lon, lat])
-  const distortion = Math.abs(scaleFactor([lon, lat], projection) - 1)
-  if (!(gridDistance(back, xy) < 1) || !(distortion < MOST_DISTORTION)) {
-    return 'The area lies outside the region that the chosen coordinate system is made for.'
-  }
-  return undefined
-}
-
-/** Degrees of longitude from the central meridian; 0 for systems that are not transverse Mercator. */
-function degreesFromMeridian(lon: Degrees, definition: string): Degrees {
-  const zone = /\+proj=utm .*\+zone=(\d+)/.exec(definition)?.[1]
-  if (zone) return angleBetween(lon, Number(zone) * 6 - 183)
-  const meridian = /\+proj=tmerc .*\+lon_0=(-?[\d.]+)/.exec(definition)?.[1]
-  return meridian ? angleBetween(lon, Number(meridian)) : 0
-}
-
-/** Grid distance over true distance of a short step along the meridian.
- *  Source: radius of the meridian on the WGS 84 ellipsoid, a(1 − e²)/(1 − e² sin² φ)^1.5. */
-function scaleFactor([lon, lat]: LonLat, projection: SheetProjection): number {
-  const step: Degrees = 0.001
-  const [a, e2] = [6378137, 0.00669437999014]
-  const radius: Metres = (a * (1 - e2)) / (1 - e2 * Math.sin(toRadians(lat)) ** 2) ** 1.5
-  const grid = gridDistance(
-    projection.fromLonLat([lon, lat - step / 2]),
-    projection.fromLonLat([lon, lat + step / 2]),
-  )
-  return grid / (radius * toRadians(step))
+  return 'The area lies outside the region that the chosen coordinate system is made for.'
 }
 
 /** Points along the four sides, counter-clockwise, each corner once. */

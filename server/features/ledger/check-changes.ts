@@ -20,6 +20,8 @@ export interface SheetRows {
 export interface Fault {
   pointer: string
   detail: string
+  /** The item that it is about. */
+  item: string
 }
 
 export const changedId = (change: Change): string => (change.op === 'put' ? change.item.id : change.id)
@@ -37,7 +39,7 @@ export function findFaults(changes: readonly Change[], base: number, rows: Sheet
         ? faultOfPut(change.item, rows)
         : faultOfRemove(change.id, base, rows)
     seen.add(id)
-    if (detail) faults.push({ pointer, detail })
+    if (detail) faults.push({ pointer, detail, item: id })
   })
   return faults.concat(findUnitFaults(changes, rows))
 }
@@ -75,7 +77,7 @@ function findUnitFaults(changes: readonly Change[], rows: SheetRows): Fault[] {
     const pointer = `/changes/${index}`
     if (change.op === 'put' && change.item.kind === 'unit-label' && !units.has(change.item.properties.unit)) {
       const detail = `The unit ${change.item.properties.unit} is not in the legend of this sheet.`
-      return [{ pointer: `${pointer}/item/properties/unit`, detail }]
+      return [{ pointer: `${pointer}/item/properties/unit`, detail, item: change.item.id }]
     }
     const labels = change.op === 'remove' ? (rows.labelsOfUnits.get(change.id) ?? 0) : 0
     if (change.op !== 'remove' || labels === 0) return []
@@ -85,6 +87,7 @@ function findUnitFaults(changes: readonly Change[], rows: SheetRows): Fault[] {
       {
         pointer,
         detail: `${name} is used by ${labels} unit ${labels === 1 ? 'label' : 'labels'}: give them another unit or remove them first.`,
+        item: change.id,
       },
     ]
   })

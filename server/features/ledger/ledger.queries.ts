@@ -9,13 +9,16 @@ export interface LockedSheet {
   id: string
   number: string
   srid: number
+  /** PROJ definition of its system. */
+  proj4: string
   state: SheetState
   revision: number
 }
 
 export async function lockSheet(em: EntityManager, sheetId: string): Promise<LockedSheet> {
   const [row] = await em.query<LockedSheet[]>(
-    'SELECT id, number, srid, state, revision FROM sheet WHERE id = $1 FOR UPDATE',
+    `SELECT id, number, srid, proj4text AS proj4, state, revision FROM sheet JOIN spatial_ref_sys USING (srid)
+     WHERE id = $1 FOR UPDATE OF sheet`,
     [sheetId],
   )
   if (!row) throw new RangeError(`There is no sheet ${sheetId}.`)

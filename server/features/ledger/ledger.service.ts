@@ -18,6 +18,7 @@ import {
   type Conflict,
   type SheetRows,
 } from './check-changes'
+import { findUnreachable } from './find-unreachable'
 import {
   closeVersions,
   countLabelsOfUnits,
@@ -153,6 +154,7 @@ export class LedgerService {
       const detail = `The sheet is at revision ${sheet.revision}; revision ${base} does not exist yet.`
       throw problem('invalid-input', detail, { errors: [{ pointer: '/base', detail }] })
     }
+    requireWithinSystem(sheet, changes)
     const rows = await loadRows(em, sheet.id, changes)
     requireEditorForLegend(author, changes, rows)
     const faults = findFaults(changes, base, rows)
@@ -201,12 +203,25 @@ function snapChanges(changes: readonly Change[]): { changes: Change[]; altered: 
     if (!item) {
       const detail = 'This line has no length: its vertices fall on one point of the 1 mm grid.'
       const pointer = `/changes/${index}/item/geometry/coordinates`
-      throw problem('invalid-input', detail, { errors: [{ pointer, detail }] })
+      throw problem('invalid-input', detail, { errors: [{ pointer, detail, item: change.item.id }] })
     }
     if (item !== change.item) altered.push(item)
     return { op: 'put', item }
   })
   return { changes: snapped, altered }
+}
+
+/** A place beyond the region of the sheet's system would be drawn, measured and printed wrong. */
+function requireWithinSystem(sheet: LockedSheet, changes: readonly Change[]): void {
+  const items = changes.flatMap((change) => (change.op === 'put' ? [change.item] : []))
+  const beyond = findUnreachable(items, sheet.proj4)
+  if (beyond.length === 0) return
+  const errors = beyond.slice(0, 100).map(({ id, at }) => ({
+    pointer: `/changes/${changes.findIndex((change) => changedId(change) === id)}/item/geometry/coordinates`,
+    detail: `The place ${at[0]} ${at[1]} lies outside the region that the sheet’s coordinate system (EPSG:${sheet.srid}) is made for.`,
+    item: id,
+  }))
+  throw problem('invalid-input', errors[0]?.detail ?? '', { errors })
 }
 
 function snapOrThrow(item: Item): Item {

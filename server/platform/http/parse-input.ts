@@ -1,7 +1,8 @@
-import type { z } from 'zod'
+import { z } from 'zod'
+import type { ProblemExtras } from '@shared/api/problems'
 import { problem, type ProblemError } from '../problem'
 
-type Fault = { pointer: string; detail: string }
+type Fault = NonNullable<ProblemExtras['errors']>[number]
 
 /** Most faults that one answer lists. */
 const MAX_FAULTS = 100
@@ -13,7 +14,8 @@ export function parseInput<S extends z.ZodType>(schema: S, input: unknown): z.ou
   if (unusable) throw invalidInput([unusable])
   const parsed = schema.safeParse(input)
   if (parsed.success) return parsed.data
-  throw invalidInput(parsed.error.issues.slice(0, MAX_FAULTS).flatMap(toFaults))
+  const issues = parsed.error.issues.slice(0, MAX_FAULTS)
+  throw invalidInput(issues.flatMap((issue) => toFaults(issue, input)))
 }
 
 /** Parts of a path as their schema gives them; undefined where they can name nothing. */
@@ -29,14 +31,31 @@ function invalidInput(errors: Fault[]): ProblemError {
   })
 }
 
-function toFaults(issue: z.core.$ZodIssue): Fault[] {
+function toFaults(issue: z.core.$ZodIssue, input: unknown): Fault[] {
+  const item = findItem(input, issue.path)
+  const at = (path: readonly PropertyKey[], detail: string): Fault => ({
+    pointer: toPointer(path),
+    detail,
+    ...(item ? { item } : {}),
+  })
   if (issue.code === 'unrecognized_keys') {
-    return issue.keys.map((key) => ({
-      pointer: toPointer([...issue.path, key]),
-      detail: `There is no field “${key}” here.`,
-    }))
+    return issue.keys.map((key) => at([...issue.path, key], `There is no field “${key}” here.`))
   }
-  return [{ pointer: toPointer(issue.path), detail: issue.message }]
+  return [at(issue.path, issue.message)]
+}
+
+const idSchema = z.looseObject({ id: z.uuid() })
+
+/** Id of the innermost thing with an id that a path leads through: the item that a fault is about. */
+function findItem(input: unknown, path: readonly PropertyKey[]): string | undefined {
+  let value = input
+  let found: string | undefined
+  for (const key of path) {
+    if (typeof value !== 'object' || value === null) return found
+    value = Reflect.get(value, key)
+    found = idSchema.safeParse(value).data?.id ?? found
+  }
+  return found
 }
 
 /** JSON pointer (RFC 6901) of a path of keys. */
@@ -49,23 +68,44 @@ const UNSTORABLE = /\0|\p{Surrogate}/u
 /** Deepest nesting that is read: none of ours needs a tenth of it, and schemas walk it on the stack. */
 const MAX_DEPTH = 100
 
+/** A place in the input, with the way to it only as a chain: a million places need no million lists of keys. */
+interface Place {
+  value: unknown
+  key: string
+  outer: Place | undefined
+  depth: number
+}
+
+function pathTo(place: Place): string[] {
+  const path: string[] = []
+  for (let at: Place | undefined = place; at?.outer; at = at.outer) path.unshift(at.key)
+  return path
+}
+
 /** Where the input cannot be used whatever its schema: text that cannot be stored, or nesting without end. Walks with a
  *  stack of its own, so that deep nesting cannot exhaust ours. */
 function findUnusable(input: unknown): Fault | undefined {
-  const open: { value: unknown; path: PropertyKey[] }[] = [{ value: input, path: [] }]
+  const open: Place[] = [{ value: input, key: '', outer: undefined, depth: 0 }]
   for (let place = open.pop(); place; place = open.pop()) {
-    const { value, path } = place
-    const at = (detail: string): Fault => ({ pointer: toPointer(path), detail })
-    if (typeof value === 'string' && UNSTORABLE.test(value)) {
-      return at('This text holds a character that cannot be stored.')
-    }
+    const { value, depth } = place
+    const detail = whyUnusable(value, depth)
+    if (detail) return { pointer: toPointer(pathTo(place)), detail }
     if (typeof value !== 'object' || value === null) continue
-    if (path.length > MAX_DEPTH) return at('This is nested too deep to be read.')
-    for (const [key, inner] of Object.entries(value)) {
-      if (UNSTORABLE.test(key)) return at('A field name here holds a character that cannot be stored.')
+    for (const key of Object.keys(value)) {
+      const inner: unknown = Reflect.get(value, key)
       if (typeof inner === 'string' || typeof inner === 'object')
-        open.push({ value: inner, path: [...path, key] })
+        open.push({ value: inner, key, outer: place, depth: depth + 1 })
     }
   }
   return undefined
+}
+
+function whyUnusable(value: unknown, depth: number): string | undefined {
+  if (typeof value === 'string') {
+    return UNSTORABLE.test(value) ? 'This text holds a character that cannot be stored.' : undefined
+  }
+  if (typeof value !== 'object' || value === null) return undefined
+  if (depth > MAX_DEPTH) return 'This is nested too deep to be read.'
+  const isOdd = !Array.isArray(value) && Object.keys(value).some((key) => UNSTORABLE.test(key))
+  return isOdd ? 'A field name here holds a character that cannot be stored.' : undefined
 }

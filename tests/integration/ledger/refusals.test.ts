@@ -35,12 +35,17 @@ describe('who may change what', () => {
 })
 
 describe('wrong input', () => {
+  const ids = (changes: unknown[]) =>
+    (changes as { id?: string; item?: { id: string } }[]).map(({ id, item }) => id ?? item?.id)
+
   const refusedAt = async (changes: unknown[], pointer: string, base = 1, agent = desk.editor) => {
     const before = await desk.latest()
     const { status, body } = await desk.post(agent, changes, { base })
     expect(status).toBe(400)
     expect(body.errors[0].pointer).toBe(pointer)
     expect(body.errors[0].detail).toMatch(/\.$/)
+    // Whatever the fault, the item that it is about is named.
+    if (pointer.startsWith('/changes/')) expect(ids(changes)).toContain(body.errors[0].item)
     expect(await desk.latest()).toBe(before)
     return body.errors[0].detail as string
   }
@@ -110,6 +115,76 @@ describe('wrong input', () => {
     )
     const single = { ...aContact(), geometry: { type: 'LineString', coordinates: [[1, 1]] } }
     await refusedAt([put(single)], '/changes/0/item/geometry/coordinates')
+  })
+
+  const shaped = (type: string, coordinates: unknown) => ({
+    ...aContact(),
+    geometry: { type, coordinates },
+  })
+  const ring = (last: number[]) => [[285_000, 5_280_000], [286_000, 5_280_000], [286_000, 5_281_000], last]
+
+  it('refuses a geometry of another type: areas, closed or not, several lines, a point for a line', async () => {
+    for (const geometry of [
+      shaped('Polygon', [ring([285_000, 5_280_000])]),
+      shaped('Polygon', [ring([285_000, 5_280_001])]),
+      shaped('MultiLineString', [ring([285_000, 5_281_000])]),
+      shaped('Point', [285_000, 5_280_000]),
+    ]) {
+      expect(await refusedAt([put(geometry)], '/changes/0/item/geometry/type')).toContain('LineString')
+    }
+    const attitude = { ...anAttitude(), geometry: aContact().geometry }
+    expect(await refusedAt([put(attitude)], '/changes/0/item/geometry/type')).toContain('Point')
+    await refusedAt([put({ ...aContact(), geometry: null })], '/changes/0/item/geometry')
+    await refusedAt([put({ ...aUnit(), geometry: aContact().geometry })], '/changes/0/item/geometry')
+    const high = shaped('LineString', [
+      [285_000, 5_280_000, 12],
+      [285_000, 5_281_000, 14],
+    ])
+    expect(await refusedAt([put(high)], '/changes/0/item/geometry/coordinates/0')).toContain('two numbers')
+  })
+
+  it('refuses what lies outside the region of the sheet’s system, naming the item and the place', async () => {
+    const far = shaped('LineString', [
+      [285_000, 5_280_000],
+      [9_000_000, 5_281_000],
+    ])
+    const detail = await refusedAt([put(aContact()), put(far)], '/changes/1/item/geometry/coordinates')
+    expect(detail).toContain('9000000 5281000')
+    const lonLat = shaped('LineString', [
+      [-29.85, 47.63],
+      [-29.84, 4_000_000_000],
+    ])
+    await refusedAt([put(lonLat)], '/changes/0/item/geometry/coordinates/1/1')
+  })
+
+  it('refuses numbers that are none, however they are written', async () => {
+    const send = (coordinates: string) =>
+      desk.editor
+        .post(`/api/sheets/${desk.sheet}/revisions`)
+        .set('Idempotency-Key', randomUUID())
+        .set('Content-Type', 'application/json')
+        .send(
+          JSON.stringify({ base: 1, changes: [put(aContact())] }).replace(
+            /"coordinates":.*?\]\]/,
+            coordinates,
+          ),
+        )
+    const infinite = await send('"coordinates":[[1,1],[1e999,2]]')
+    expect(infinite.status).toBe(400)
+    expect(infinite.body.errors[0].pointer).toBe('/changes/0/item/geometry/coordinates/1/0')
+    const none = await send('"coordinates":[[1,1],[NaN,2]]')
+    expect(none.status).toBe(400)
+    expect(none.body.detail).toBe('The body is not JSON.')
+    expect(await desk.latest()).toBe(1)
+  })
+
+  it('refuses a line of a million vertices, and goes on answering', async () => {
+    const long = shaped(
+      'LineString',
+      Array.from({ length: 1_000_000 }, (_, index) => [285_000 + (index % 1000), 5_280_000 + index / 1000]),
+    )
+    expect(await refusedAt([put(long)], '/changes/0/item/geometry/coordinates')).toContain('100000 vertices')
+    expect((await desk.post(desk.editor, [put(aContact())])).status).toBe(201)
   })
 
   it('refuses an empty change set and an unknown kind', async () => {

@@ -66,4 +66,18 @@ describe('parsing input', () => {
     const places = Array.from({ length: 5000 }, () => ({ east: 'x' }))
     expect(faultsOf({ name: 'a', places })).toHaveLength(100)
   })
+
+  it('names the innermost item that a fault is about', () => {
+    const item = z.strictObject({ id: z.uuid(), dip: z.number() })
+    const [first, second] = ['7b3e9b5e-0f1c-4b62-8a56-0f8f2c1d3a01', '7b3e9b5e-0f1c-4b62-8a56-0f8f2c1d3a02']
+    const sent = {
+      items: [
+        { id: first, dip: 4 },
+        { id: second, dip: 'steep' },
+      ],
+    }
+    expect(faultsOf(sent, z.strictObject({ items: z.array(item) }))).toMatchObject([
+      { pointer: '/items/1/dip', item: second },
+    ])
+  })
 })
