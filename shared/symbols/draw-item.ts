@@ -1,4 +1,3 @@
-import { plungeAgainstTrace } from '../structure/axial-trace'
 import type { Item, ItemOf, LineItem } from '../items/item'
 import type { UnitProperties } from '../items/legend'
 import type { MM } from '../units'
@@ -10,10 +9,12 @@ import { otherLines } from './definitions/other-lines'
 import { unitLabelType } from './definitions/points'
 import type { DisplayList, Mark } from './display-list'
 import { drawAttitude } from './draw-attitude'
-import { drawLine, type LineDrawing } from './draw-line'
+import { drawLine } from './draw-line'
 import { drawLineation } from './draw-lineation'
 import { drawPlace } from './draw-place'
 import { toMm, type DrawingFrame } from './frame'
+import type { LineDrawing } from './line-drawing'
+import { plungeHeads } from './plunge-heads'
 
 /** What some items' drawings depend on besides themselves. */
 export interface DrawingContext {
@@ -78,23 +79,20 @@ function drawLineItem(item: LineItem, frame: DrawingFrame): DisplayList {
   const points = item.geometry.coordinates.map((place) => toMm(frame, place))
   const { locationConfidence, identity } = item.properties
   const isLeft = 'side' in item.properties && item.properties.side === 'left'
-  const plunge = item.kind === 'axial-trace' ? plungeOf(item, frame) : undefined
   return drawLine(lineSymbolOf(item), points, {
     locationConfidence,
     identity,
     attributes: { side: isLeft ? 1 : -1 },
-    ...(plunge ? { plunge } : {}),
+    ...(item.kind === 'axial-trace'
+      ? { plunge: plungeHeads(item, (place) => frame.convergenceAt(place)) }
+      : {}),
+    ...(item.kind === 'fault' ? dipOf(item) : {}),
   })
 }
 
-/** The arrow of an axis that plunges, by whole degrees; a horizontal axis has none. A trend that contradicts the trace
- *  still draws at the nearer end: the contradiction is shown by the checks, not by a missing arrow. */
-function plungeOf(item: ItemOf<'axial-trace'>, frame: DrawingFrame): LineDrawing['plunge'] {
-  const { plunge, trend } = item.properties
-  if (plunge === null || trend === null || Math.round(plunge) === 0) return undefined
-  const { end } = plungeAgainstTrace(item.geometry.coordinates, trend, (place) => frame.convergenceAt(place))
-  return { degrees: plunge, end, figure: true }
-}
+/** A fault plane's dip, by the whole degrees that are printed; one that lies flat dips nowhere. */
+const dipOf = ({ properties: { dip } }: ItemOf<'fault'>): Pick<LineDrawing, 'dip'> =>
+  dip === null || Math.round(dip) === 0 ? {} : { dip: { degrees: dip, figure: true } }
 
 function unitLabelMark(item: ItemOf<'unit-label'>, at: MM, context: DrawingContext | undefined): Mark {
   const label = context?.unitOf(item.properties.unit)?.label

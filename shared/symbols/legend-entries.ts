@@ -106,7 +106,7 @@ export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
       locationConfidence: entry.properties.locationConfidence,
       identity: entry.properties.identity,
       attributes: { side: 1 },
-      ...(showsPlunge(entry) ? { plunge: { degrees: 20, end: 'end', figure: false } } : {}),
+      ...(showsPlunge(entry) ? { plunge: [{ end: 'end', points: 'out', degrees: null }] } : {}),
     },
   )
 }

@@ -5,7 +5,13 @@ import type { Degrees, Millimetres } from '../units'
 export type Stretch = readonly [from: Millimetres, to: Millimetres]
 
 /** Most that a line may turn beneath a decoration: a sharper bend would tear it off the line. */
-const SHARPEST_BEND: Degrees = 30
+export const SHARPEST_BEND: Degrees = 30
+
+/** A decoration smaller than this is judged on this much of the line: below it, the turns are those of a hand, not of the ground. */
+const LEAST_JUDGED: Millimetres = 1.8
+
+/** How far a repeated decoration may move from its even place, as a share of the spacing: more would bring two together. */
+const MOST_MOVED = 0.35
 
 /** How decorations share out a line. */
 export interface Sharing {
@@ -17,47 +23,100 @@ export interface Sharing {
   within: Stretch
   /** Parts that are taken already. */
   taken?: readonly Stretch[]
+  /** Whether the middle of the line stays free: an even number of decorations leaves it so. */
+  even?: boolean
 }
 
 /** Where decorations stand, distances from the line's start. They are equally spaced and symmetric in the part given to
- *  them, so that a reversed line carries the same ones; each moves, as little as it must, off sharp bends and off what is
- *  taken, and stands on the least sharp bend where there is no straight place near. One where only one fits, none where
- *  none fits, or where all its room is taken. */
+ *  them, so that a reversed line carries the same ones on the same ground; each moves, as little as it must, off sharp
+ *  bends and off what is taken, and is left out where there is no such place near. If that would leave the line bare, one
+ *  stands where the line is straightest: without any it would say something else. */
 export function placeAlong(line: MeasuredLine, sharing: Sharing): Millimetres[] {
-  const { size, interval } = sharing
+  const { size, interval, even = false } = sharing
   const [from, to] = sharing.within
   const room = to - from
   if (room < size || size <= 0) return []
-  const count = Math.max(1, Math.min(Math.round(room / interval), Math.floor(room / size)))
+  const count = evenedCount(room / interval, Math.floor(room / size), even)
   const spacing = room / count
-  const slack = (spacing - size) / 2
-  return Array.from({ length: count }, (_, index) => from + spacing * (index + 0.5)).flatMap((middle) => {
-    const place = nearestGoodPlace(line, middle, slack, sharing)
-    return place === undefined ? [] : [place]
-  })
+  const slack = count === 1 ? (room - size) / 2 : Math.min((spacing - size) / 2, spacing * MOST_MOVED)
+  const places = Array.from({ length: count }, (_, index) => from + spacing * (index + 0.5)).flatMap(
+    (middle) => straightPlaceNear(line, middle, { ...sharing, slack }) ?? [],
+  )
+  return places.length > 0 ? places : [straightestPlace(line, sharing) ?? []].flat()
 }
 
-/** The nearest place on either side of `middle` that is free and straight; else the straightest free one. */
-function nearestGoodPlace(
+function evenedCount(wanted: number, most: number, even: boolean): number {
+  if (!even || most < 2) return Math.max(1, Math.min(Math.round(wanted), most))
+  return 2 * Math.max(1, Math.min(Math.round(wanted / 2), Math.floor(most / 2)))
+}
+
+/** The nearest place to `middle`, at most `slack` away, that is free and straight; undefined where there is none. */
+export function straightPlaceNear(
   line: MeasuredLine,
   middle: Millimetres,
-  slack: Millimetres,
-  { size, taken = [] }: Sharing,
+  { size, slack, taken = [] }: Pick<Sharing, 'size' | 'taken'> & { slack: Millimetres },
 ): Millimetres | undefined {
-  const step = size / 4
+  const step = stepFor(size)
+  const first = favouredWay(line)
+  for (let away = 0; away <= slack; away += step) {
+    for (const place of away === 0 ? [middle] : [middle + first * away, middle - first * away]) {
+      if (!isTaken(place, size, taken) && sharpestTurn(line, place, size) <= SHARPEST_BEND) return place
+    }
+  }
+  return undefined
+}
+
+/** The free place where the line turns least, nearest to the middle among equals; undefined where all is taken. */
+export function straightestPlace(
+  line: MeasuredLine,
+  { size, within: [from, to], taken = [] }: Pick<Sharing, 'size' | 'within' | 'taken'>,
+): Millimetres | undefined {
+  const [middle, slack] = [(from + to) / 2, (to - from - size) / 2]
+  const step = Math.max(stepFor(size), slack / MOST_TRIED)
+  const first = favouredWay(line)
   let best: { place: Millimetres; turn: Degrees } | undefined
   for (let away = 0; away <= slack; away += step) {
-    for (const place of away === 0 ? [middle] : [middle + away, middle - away]) {
-      const isTaken = taken.some(([from, to]) => place + size / 2 > from && place - size / 2 < to)
-      if (isTaken) continue
+    for (const place of [middle + first * away, middle - first * away]) {
+      if (isTaken(place, size, taken)) continue
       const turn = sharpestTurn(line, place, size)
-      if (turn <= SHARPEST_BEND) return place
-      if (!best || turn < best.turn) best = { place, turn }
+      if (!best || turn < best.turn - LEAST_GAIN) best = { place, turn }
     }
   }
   return best?.place
 }
 
-/** The sharpest turn under a decoration, looked for at a few places across its size. */
-const sharpestTurn = (line: MeasuredLine, place: Millimetres, size: Millimetres): Degrees =>
-  Math.max(...[-0.4, -0.2, 0, 0.2, 0.4].map((share) => line.turnAt(place + share * size, size / 2)))
+/** Places tried on either side of the middle when looking for the straightest: enough for any line that could be read. */
+const MOST_TRIED = 400
+/** Turns nearer than this are equal. */
+const LEAST_GAIN: Degrees = 0.01
+
+const stepFor = (size: Millimetres): Millimetres => Math.min(size / 4, 0.5)
+
+const isTaken = (place: Millimetres, size: Millimetres, taken: readonly Stretch[]): boolean =>
+  taken.some(([from, to]) => place + size / 2 > from && place - size / 2 < to)
+
+/** Which way along the line wins where both would do: the eastern, else the northern one. Depends on the ground and not on
+ *  the way the line was drawn. */
+export function favouredWay(line: MeasuredLine): 1 | -1 {
+  const isClosed = isClosedLine(line)
+  const [ax, ay] = line.pointAt(isClosed ? line.length / 3 : 0)
+  const [bx, by] = line.pointAt(isClosed ? (line.length * 2) / 3 : line.length)
+  return bx > ax || (bx === ax && by > ay) ? 1 : -1
+}
+
+/** Whether a line ends where it begins. */
+export function isClosedLine(line: MeasuredLine): boolean {
+  const [ax, ay] = line.pointAt(0)
+  const [bx, by] = line.pointAt(line.length)
+  return line.length > 0 && ax === bx && ay === by
+}
+
+/** Spots across a decoration at which the line's turn is looked for, as shares of its size: close enough that no corner
+ *  hides between two. */
+const SPOTS = [-0.4, -0.3, -0.2, -0.1, 0, 0.1, 0.2, 0.3, 0.4]
+
+function sharpestTurn(line: MeasuredLine, place: Millimetres, size: Millimetres): Degrees {
+  const judged = Math.max(size, LEAST_JUDGED)
+  const inside = (spot: Millimetres) => Math.max(judged / 8, Math.min(line.length - judged / 8, spot))
+  return Math.max(...SPOTS.map((share) => line.turnAt(inside(place + share * judged), judged / 2)))
+}

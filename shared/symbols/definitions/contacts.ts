@@ -5,9 +5,11 @@ const fgdc = (number: string): Published => ({ standard: 'FGDC-STD-013-2006', nu
 /** Contacts: fine near-black lines, the lightest structure lines of the sheet. */
 export const contacts: readonly LineSymbol[] = [
   {
+    id: 'contact',
     kind: 'contact',
     variant: '',
     title: 'Contact',
+    drivenBy: ['locationConfidence', 'identity'],
     ink: 'black',
     strokes: confidenceStrokes({
       width: 0.2,

@@ -1,11 +1,20 @@
-import type { Millimetres } from '../../units'
-import { confidenceStrokes, type Decoration, type LineSymbol } from '../definition'
+import type { Millimetres, MM } from '../../units'
+import {
+  confidenceStrokes,
+  type Decoration,
+  type LineSymbol,
+  type Published,
+  type SideSign,
+} from '../definition'
+import type { FaultType } from '../../items/lines'
 import type { Mark } from '../display-list'
 import { circle, polyline } from '../paths'
-import { placeMarks } from '../place-marks'
 
 /** Faults are visibly heavier than contacts (symbolization.md section 3). */
 const WIDTH: Millimetres = 0.6
+const opposite = (side: SideSign): SideSign => (side === 1 ? -1 : 1)
+const fgdc = (number: string): Published => ({ standard: 'FGDC-STD-013-2006', number })
+
 const fault = {
   kind: 'fault',
   ink: 'black',
@@ -23,7 +32,7 @@ const BAR: Millimetres = 2
 /** Ball on a bar, on the downthrown side. */
 const ballAndBar: Decoration = {
   size: 2 * BALL,
-  interval: 28,
+  placed: { every: 28 },
   bearingOver: 4,
   marks: ({ side }) => [
     {
@@ -39,25 +48,23 @@ const ballAndBar: Decoration = {
   ],
 }
 
-/** One side is down at one end, the other at the other. */
-const ballsAtBothSides: Decoration = {
+/** The ball and bar of a fault whose downthrown side changes along it: one near each end, on opposite sides. What happens
+ *  between them is not stated, so nothing is drawn there. */
+const ballsAtEnds: Decoration = {
   ...ballAndBar,
-  size: 6 * BALL,
-  marks: ({ side }) => [
-    ...placeMarks(ballAndBar.marks({ side }), ([x, y]) => [x - 2 * BALL, y]),
-    ...placeMarks(ballAndBar.marks({ side: side === 1 ? -1 : 1 }), ([x, y]) => [x + 2 * BALL, y]),
-  ],
+  placed: { fromEnds: 6 },
+  marks: ({ side }, end) => ballAndBar.marks({ side: end === 'start' ? side : opposite(side) }, end),
 }
 
 const TOOTH: Millimetres = 2.3
 const TOOTH_HEIGHT: Millimetres = 1.9
 
-const tooth = (side: 1 | -1, base: Millimetres, height: Millimetres, foot: Millimetres) =>
+/** A triangle whose foot lies on the line in several pieces, so that it bends where the line does. */
+const tooth = (side: SideSign, base: Millimetres, height: Millimetres, foot: Millimetres) =>
   polyline(
     [
-      [-base / 2, side * foot],
       [0, side * (foot + height)],
-      [base / 2, side * foot],
+      ...[0.5, 0.3, 0.1, -0.1, -0.3, -0.5].map((share): MM => [share * base, side * foot]),
     ],
     true,
   )
@@ -65,16 +72,18 @@ const tooth = (side: 1 | -1, base: Millimetres, height: Millimetres, foot: Milli
 /** Solid teeth on the upper plate, pointing down the dip of the thrust. */
 const solidTeeth: Decoration = {
   size: TOOTH,
-  interval: 9,
+  placed: { every: 9 },
   bearingOver: TOOTH,
+  follows: true,
   marks: ({ side }) => [{ mark: 'fill', path: tooth(side, TOOTH, TOOTH_HEIGHT, WIDTH / 4), ink: 'black' }],
 }
 
 /** Open teeth on the hanging wall, wider apart than those of a thrust. */
 const openTeeth: Decoration = {
   size: TOOTH,
-  interval: 14,
+  placed: { every: 14 },
   bearingOver: TOOTH,
+  follows: true,
   marks: ({ side }) => [
     {
       mark: 'stroke',
@@ -90,7 +99,7 @@ const ARROW_OFFSET: Millimetres = 1.35
 const BARB: Millimetres = 2
 
 /** One half arrow beside the line. @param side +1 left of the line   @param along +1 pointing along it, −1 back */
-function halfArrow(side: 1 | -1, along: 1 | -1): Mark[] {
+function halfArrow(side: SideSign, along: 1 | -1): Mark[] {
   const y = side * ARROW_OFFSET
   const tip = (along * ARROW) / 2
   return [
@@ -122,30 +131,76 @@ function halfArrow(side: 1 | -1, along: 1 | -1): Mark[] {
  *  stands on; so the pair is the same when the line is reversed. @param left way of the left side's arrow */
 const halfArrows = (left: 1 | -1): Decoration => ({
   size: ARROW,
-  interval: 60,
+  placed: { every: 60 },
   bearingOver: ARROW,
-  marks: () => [...halfArrow(1, left), ...halfArrow(-1, left === 1 ? -1 : 1)],
+  marks: () => [...halfArrow(1, left), ...halfArrow(-1, opposite(left))],
 })
 
-/** Faults: heavy near-black lines; the decoration stands on the stated side. */
+/** The arrow of a fault's dip: a thin shaft square to the line and a small solid head, on the side to which the plane dips. */
+export const faultDip = {
+  size: 2,
+  bearingOver: 5,
+  numeral: { size: 2.3, weight: 700, gap: 0.45 },
+} as const
+
+const DIP_REACH: Millimetres = 4.2
+const DIP_HEAD: Millimetres = 1.5
+const DIP_STROKE: Millimetres = 0.28
+
+/** The dip arrow's own frame is that of a decoration. A vertical fault has a bar across instead: it dips to neither side. */
+export const faultDipMarks = (side: SideSign, isVertical: boolean): readonly Mark[] =>
+  isVertical
+    ? [dipShaft(-VERTICAL_REACH, VERTICAL_REACH)]
+    : [
+        dipShaft(0, side * (DIP_REACH - DIP_HEAD)),
+        {
+          mark: 'fill',
+          path: polyline(
+            [
+              [0, side * DIP_REACH],
+              [-0.55, side * (DIP_REACH - DIP_HEAD)],
+              [0.55, side * (DIP_REACH - DIP_HEAD)],
+            ],
+            true,
+          ),
+          ink: 'black',
+        },
+      ]
+
+const VERTICAL_REACH: Millimetres = 1.6
+
+const dipShaft = (from: Millimetres, to: Millimetres): Mark => ({
+  mark: 'stroke',
+  path: polyline([
+    [0, from],
+    [0, to],
+  ]),
+  width: DIP_STROKE,
+  ink: 'black',
+})
+
+type Own = Pick<LineSymbol, 'decoration' | 'published'>
+
+const symbol = (variant: FaultType, title: string, drivenBy: readonly string[], own: Own): LineSymbol => ({
+  ...fault,
+  id: `fault.${variant}`,
+  variant,
+  title,
+  drivenBy: ['locationConfidence', 'identity', ...drivenBy],
+  ...own,
+})
+
+/** Faults: heavy near-black lines; the decoration stands on the stated side, and so does the arrow of the dip. */
 export const faults: readonly LineSymbol[] = [
-  {
-    ...fault,
-    variant: 'unspecified',
-    title: 'Fault',
-    published: { concealed: { standard: 'FGDC-STD-013-2006', number: '2.1.7' } },
-  },
-  {
-    ...fault,
-    variant: 'normal',
-    title: 'Normal fault',
+  symbol('unspecified', 'Fault', ['dip', 'side'], { published: { concealed: fgdc('2.1.7') } }),
+  symbol('normal', 'Normal fault', ['side', 'dip'], {
     decoration: ballAndBar,
-    published: { certain: { standard: 'FGDC-STD-013-2006', number: '2.2.1' } },
-  },
-  { ...fault, variant: 'reverse', title: 'Reverse fault', decoration: openTeeth },
-  { ...fault, variant: 'thrust', title: 'Thrust', decoration: solidTeeth },
+    published: { certain: fgdc('2.2.1') },
+  }),
+  symbol('reverse', 'Reverse fault', ['side', 'dip'], { decoration: openTeeth }),
+  symbol('thrust', 'Thrust', ['side', 'dip'], { decoration: solidTeeth }),
   // Standing on the right side and looking left across a left-lateral fault, the left side has moved to the left: back.
-  { ...fault, variant: 'left-lateral', title: 'Left-lateral fault', decoration: halfArrows(-1) },
-  { ...fault, variant: 'right-lateral', title: 'Right-lateral fault', decoration: halfArrows(1) },
-  { ...fault, variant: 'rotational', title: 'Rotational fault', decoration: ballsAtBothSides },
+  symbol('left-lateral', 'Left-lateral fault', ['dip', 'side'], { decoration: halfArrows(-1) }),
+  symbol('right-lateral', 'Right-lateral fault', ['dip', 'side'], { decoration: halfArrows(1) }),
+  symbol('rotational', 'Rotational fault', ['side'], { decoration: ballsAtEnds }),
 ]

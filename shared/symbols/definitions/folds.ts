@@ -1,5 +1,6 @@
 import type { Millimetres, MM } from '../../units'
-import { confidenceStrokes, type Decoration, type LineSymbol } from '../definition'
+import { foldWords, type FoldForm } from '../../items/lines'
+import { confidenceStrokes, type Decoration, type LineSymbol, type SideSign } from '../definition'
 import type { Mark, PathStep } from '../display-list'
 import { polyline, QUARTER_HANDLE } from '../paths'
 
@@ -21,7 +22,7 @@ const HEAD_HALF: Millimetres = 0.8
 const STROKE: Millimetres = 0.36
 
 /** One limb's arrow. @param side +1 left of the trace   @param tip, tail distance from the trace */
-function limbArrow(side: 1 | -1, tail: Millimetres, tip: Millimetres, head: 'open' | 'outlined'): Mark[] {
+function limbArrow(side: SideSign, tail: Millimetres, tip: Millimetres, head: 'open' | 'outlined'): Mark[] {
   const back = tip + Math.sign(tail - tip) * HEAD
   const barbs: MM[] = [
     [-HEAD_HALF, side * back],
@@ -48,7 +49,7 @@ const limbArrows = (dips: 'away' | 'toward', head: 'open' | 'outlined'): Decorat
   const [tail, tip] = dips === 'away' ? [0.5, REACH] : [REACH + 0.1, 0.75]
   return {
     size: 2 * HEAD_HALF + STROKE,
-    interval: 26,
+    placed: { every: 26 },
     bearingOver: 2 * REACH,
     marks: () => [...limbArrow(1, tail, tip, head), ...limbArrow(-1, tail, tip, head)],
   }
@@ -64,7 +65,7 @@ const turnedArrow = (dips: 'away' | 'toward'): Decoration => {
   const tip = dips === 'away' ? REACH + 0.3 : 0.75
   return {
     size: 2 * (LEG + HEAD_HALF),
-    interval: 26,
+    placed: { every: 26 },
     bearingOver: 2 * REACH,
     marks: ({ side }) => [
       {
@@ -84,7 +85,7 @@ const turnedArrow = (dips: 'away' | 'toward'): Decoration => {
 }
 
 /** The half circle from the left leg to the right one, beyond the trace from the stated side. */
-function halfTurn(side: 1 | -1): PathStep[] {
+function halfTurn(side: SideSign): PathStep[] {
   const h = LEG * QUARTER_HANDLE
   return [
     ['curve', -LEG, -side * h, -h, -side * LEG, 0, -side * LEG],
@@ -93,7 +94,7 @@ function halfTurn(side: 1 | -1): PathStep[] {
 }
 
 /** Two barbs about a leg. @param back from the tip to the barbs' ends, away from the trace positive */
-const openHead = (x: Millimetres, side: 1 | -1, tip: Millimetres, back: Millimetres): Mark => ({
+const openHead = (x: Millimetres, side: SideSign, tip: Millimetres, back: Millimetres): Mark => ({
   mark: 'stroke',
   path: polyline([
     [x - HEAD_HALF, side * (tip + back)],
@@ -111,7 +112,7 @@ const bend = (dips: 'away' | 'toward'): Decoration => {
   const [tail, tip, steep] = dips === 'away' ? [0, REACH, 1] : [REACH + 0.1, 0.75, -1]
   return {
     size: 2 * HEAD_HALF + STROKE,
-    interval: 26,
+    placed: { every: 26 },
     bearingOver: 2 * REACH,
     marks: ({ side }) => {
       const steepSide = side === steep ? 1 : -1
@@ -120,7 +121,7 @@ const bend = (dips: 'away' | 'toward'): Decoration => {
   }
 }
 
-const flatLimb = (side: 1 | -1): Mark[] => [
+const flatLimb = (side: SideSign): Mark[] => [
   {
     mark: 'stroke',
     path: [
@@ -135,36 +136,27 @@ const flatLimb = (side: 1 | -1): Mark[] => [
 ]
 const FLAT: Millimetres = 1.3
 
+const AXIS = ['plunge', 'trend', 'doubly', 'otherPlunge']
+
+const symbol = (form: FoldForm, decoration: Decoration, sided: readonly string[] = []): LineSymbol => ({
+  ...fold,
+  id: `axial-trace.${form}`,
+  variant: form,
+  title: foldWords[form].charAt(0).toUpperCase() + foldWords[form].slice(1),
+  drivenBy: ['locationConfidence', 'identity', ...sided, ...AXIS],
+  decoration,
+})
+
 /** Axial traces, in the folds' red. Antiform and synform, whose age order is not known, have outlined arrow heads. */
 export const folds: readonly LineSymbol[] = [
-  { ...fold, variant: 'anticline', title: 'Anticline', decoration: limbArrows('away', 'open') },
-  { ...fold, variant: 'syncline', title: 'Syncline', decoration: limbArrows('toward', 'open') },
-  { ...fold, variant: 'antiform', title: 'Antiform', decoration: limbArrows('away', 'outlined') },
-  { ...fold, variant: 'synform', title: 'Synform', decoration: limbArrows('toward', 'outlined') },
-  {
-    ...fold,
-    variant: 'overturned-anticline',
-    title: 'Overturned anticline',
-    decoration: turnedArrow('away'),
-  },
-  {
-    ...fold,
-    variant: 'overturned-syncline',
-    title: 'Overturned syncline',
-    decoration: turnedArrow('toward'),
-  },
-  {
-    ...fold,
-    variant: 'monocline-anticlinal-bend',
-    title: 'Monocline, anticlinal bend',
-    decoration: bend('away'),
-  },
-  {
-    ...fold,
-    variant: 'monocline-synclinal-bend',
-    title: 'Monocline, synclinal bend',
-    decoration: bend('toward'),
-  },
+  symbol('anticline', limbArrows('away', 'open')),
+  symbol('syncline', limbArrows('toward', 'open')),
+  symbol('antiform', limbArrows('away', 'outlined')),
+  symbol('synform', limbArrows('toward', 'outlined')),
+  symbol('overturned-anticline', turnedArrow('away'), ['side']),
+  symbol('overturned-syncline', turnedArrow('toward'), ['side']),
+  symbol('monocline-anticlinal-bend', bend('away'), ['side']),
+  symbol('monocline-synclinal-bend', bend('toward'), ['side']),
 ]
 
 /** The arrowhead of a plunge, on the trace: solid, its back drawn in a little, about half as wide as long. */

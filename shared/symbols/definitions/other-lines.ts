@@ -3,7 +3,7 @@ import { circle, polyline } from '../paths'
 
 const diamonds: Decoration = {
   size: 2,
-  interval: 9,
+  placed: { every: 9 },
   bearingOver: 2,
   marks: () => [
     {
@@ -24,18 +24,24 @@ const diamonds: Decoration = {
 
 const beads: Decoration = {
   size: 1.1,
-  interval: 7,
+  placed: { every: 7 },
   bearingOver: 1.1,
   marks: () => [{ mark: 'fill', path: circle([0, 0], 0.55), ink: 'black' }],
 }
 
+const otherLine = {
+  kind: 'other-line',
+  ink: 'black',
+  drivenBy: ['locationConfidence', 'identity'],
+} as const
+
 /** Dikes, veins and marker beds: each told from contacts and faults by its own build. */
 export const otherLines: readonly LineSymbol[] = [
   {
-    kind: 'other-line',
+    ...otherLine,
+    id: 'other-line.dike',
     variant: 'dike',
     title: 'Dike',
-    ink: 'black',
     strokes: confidenceStrokes({
       width: 1.05,
       long: [4.2, 1.2],
@@ -45,10 +51,10 @@ export const otherLines: readonly LineSymbol[] = [
     core: { width: 0.6, ink: '#d795a5' },
   },
   {
-    kind: 'other-line',
+    ...otherLine,
+    id: 'other-line.vein',
     variant: 'vein',
     title: 'Vein',
-    ink: 'black',
     strokes: confidenceStrokes({
       width: 0.26,
       long: [3.5, 0.8],
@@ -58,10 +64,10 @@ export const otherLines: readonly LineSymbol[] = [
     decoration: diamonds,
   },
   {
-    kind: 'other-line',
+    ...otherLine,
+    id: 'other-line.marker-bed',
     variant: 'marker-bed',
     title: 'Marker bed',
-    ink: 'black',
     strokes: confidenceStrokes({
       width: 0.32,
       long: [3.5, 0.8],

@@ -1,0 +1,97 @@
+import type { MeasuredLine } from '../geometry/measured-line'
+import type { Millimetres } from '../units'
+import type { Decoration, LineEnd, LineSymbol } from './definition'
+import { faultDip } from './definitions/faults'
+import { placeHeads, type PlacedHead } from './draw-plunge'
+import type { LineDrawing } from './line-drawing'
+import { placeAlong, straightestPlace, straightPlaceNear, type Stretch } from './place-along'
+import { placeQueries, queryRoom } from './place-queries'
+
+/** A decoration in its place. */
+export interface PlacedDecoration {
+  /** Distance from the line's start. */
+  at: Millimetres
+  /** The end it stands near. */
+  end: LineEnd
+  /** Share of its full size; below 1 on a line too short for it. */
+  scale: number
+}
+
+/** What stands where on a line. */
+export interface LineLayout {
+  heads: readonly PlacedHead[]
+  /** The part that is stroked: all of it, but for arrowheads at its ends. */
+  drawn: Stretch
+  decorations: readonly PlacedDecoration[]
+  /** Where the arrow of a fault's dip stands. */
+  dipAt: Millimetres | undefined
+  /** Middles of question marks. */
+  queries: readonly Millimetres[]
+}
+
+/** Smallest share of its size in which a decoration is still drawn, on a line that is too short for the whole. */
+const LEAST_SCALE = 0.6
+
+/** Shares out a line: first the arrowheads at its ends, then the arrow of the dip at its middle, then decorations, and
+ *  question marks between them; but no decoration where it would leave no room for a single question mark, as doubt must show.
+ *  Depends on the whole line and nothing else, so that it is the same in every view, tile and print at one size. */
+export function layOutLine(line: MeasuredLine, symbol: LineSymbol, drawing: LineDrawing): LineLayout {
+  const heads = placeHeads(line, drawing.plunge ?? [])
+  const lengthAt = (end: LineEnd, of: 'covers' | 'room') => heads.find((head) => head.end === end)?.[of] ?? 0
+  const stretchBeside = (of: 'covers' | 'room'): Stretch => {
+    const from = lengthAt('start', of)
+    return [from, Math.max(from, line.length - lengthAt('end', of))]
+  }
+  const [drawn, within] = [stretchBeside('covers'), stretchBeside('room')]
+
+  const dipAt = drawing.dip && middlePlace(line, within)
+  const dipSpan: Stretch[] = dipAt === undefined ? [] : [around(dipAt, faultDip.size)]
+  const decorationsClearOf = (taken: readonly Stretch[]) =>
+    symbol.decoration ? placeDecoration(line, symbol.decoration, { within, taken, dipAt }) : []
+  const spans = (placed: readonly PlacedDecoration[]): Stretch[] =>
+    placed.map(({ at, scale }) => around(at, (symbol.decoration?.size ?? 0) * scale))
+
+  const decorations = decorationsClearOf(dipSpan)
+  if (drawing.identity === 'certain') return { heads, drawn, decorations, dipAt, queries: [] }
+  const queries = placeQueries(line, { within: drawn, taken: [...spans(decorations), ...dipSpan] })
+  if (queries.length > 0) return { heads, drawn, decorations, dipAt, queries }
+  const alone = placeQueries(line, { within: drawn, taken: [] })
+  const queried = alone.map((at) => around(at, queryRoom(line, at)))
+  return { heads, drawn, decorations: decorationsClearOf(queried), dipAt: undefined, queries: alone }
+}
+
+const around = (at: Millimetres, size: Millimetres): Stretch => [at - size / 2, at + size / 2]
+
+/** The straight place nearest to the middle. */
+function middlePlace(line: MeasuredLine, within: Stretch): Millimetres | undefined {
+  const [from, to] = within
+  const size = Math.min(faultDip.size, to - from)
+  const slack = (to - from - size) / 2
+  return straightPlaceNear(line, (from + to) / 2, { size, slack }) ?? straightestPlace(line, { size, within })
+}
+
+function placeDecoration(
+  line: MeasuredLine,
+  { size, placed }: Decoration,
+  { within, taken, dipAt }: { within: Stretch; taken: readonly Stretch[]; dipAt: Millimetres | undefined },
+): PlacedDecoration[] {
+  const [from, to] = within
+  const isAtEnds = 'fromEnds' in placed
+  const scale = Math.min(1, (to - from) / (isAtEnds ? 2.5 * size : size))
+  if (scale < LEAST_SCALE) return []
+  const fitted = size * scale
+  const nearest = (at: Millimetres): LineEnd => (at < (from + to) / 2 ? 'start' : 'end')
+  if (!isAtEnds) {
+    const sharing = { size: fitted, interval: placed.every, within, taken, even: dipAt !== undefined }
+    return placeAlong(line, sharing).map((at) => ({ at, end: nearest(at), scale }))
+  }
+  const inset = Math.max(fitted / 2, Math.min(placed.fromEnds, (to - from) / 4))
+  const slack = Math.min(inset - fitted / 2, (to - from) / 2 - inset - fitted / 2)
+  return [from + inset, to - inset].flatMap((middle, index): PlacedDecoration[] => {
+    const half: Stretch = index === 0 ? [from, from + 2 * inset] : [to - 2 * inset, to]
+    const at =
+      straightPlaceNear(line, middle, { size: fitted, slack: Math.max(0, slack), taken }) ??
+      straightestPlace(line, { size: fitted, within: half, taken })
+    return at === undefined ? [] : [{ at, end: index === 0 ? 'start' : 'end', scale }]
+  })
+}
