@@ -5,10 +5,10 @@ import { drawAttitude, attitudeCaseOf, type DrawnPlane } from '@shared/symbols/d
 import { drawItem } from '@shared/symbols/draw-item'
 import type { DisplayList, StrokeMark, TextMark } from '@shared/symbols/display-list'
 import { inkPoints } from '@shared/symbols/place-marks'
-import { textCorners } from '@shared/symbols/text-box'
 import { angleBetween, type MM } from '@shared/units'
 import { utmConvergence, utmDefinition } from '../../../reference/geodesy'
 import { aDrawnAttitude, plainFrame } from '../../../support/drawn-items'
+import { along, closestInk, inkOf, numeralsOf, strokesOf, vectorOf } from '../../../support/drawn-marks'
 
 const everyAzimuth = Array.from({ length: 360 }, (_, azimuth) => azimuth)
 
@@ -20,8 +20,7 @@ const bedding = (properties: Partial<DrawnPlane>): DrawnPlane => ({
   ...properties,
 })
 
-const strokesOf = (list: DisplayList): StrokeMark[] => list.filter((mark) => mark.mark === 'stroke')
-const numeralOf = (list: DisplayList): TextMark | undefined => list.find((mark) => mark.mark === 'text')
+const numeralOf = (list: DisplayList): TextMark | undefined => numeralsOf(list)[0]
 
 /** First and last point of a stroke. */
 function endsOf(stroke: StrokeMark | undefined): [MM, MM] {
@@ -33,13 +32,6 @@ function endsOf(stroke: StrokeMark | undefined): [MM, MM] {
 
 /** Azimuth of a vector on the drawing, degrees clockwise from its up. */
 const azimuthOf = ([x, y]: MM): number => ((Math.atan2(x, y) * 180) / Math.PI + 360) % 360
-
-/** The unit vector of a drawing azimuth. */
-const vectorOf = (azimuth: number): MM => [
-  Math.sin((azimuth * Math.PI) / 180),
-  Math.cos((azimuth * Math.PI) / 180),
-]
-const along = ([x, y]: MM, [dx, dy]: MM): number => x * dx + y * dy
 
 describe('a bedding symbol', () => {
   it('runs along strike with its tick down dip, all round the compass', () => {
@@ -151,6 +143,67 @@ describe('the cases of an attitude', () => {
   })
 })
 
+describe('a bed that undulates', () => {
+  it('has a waving strike line with the same ends and the same mark', () => {
+    for (const overturned of [false, true]) {
+      for (const strike of everyAzimuth) {
+        const straight = drawAttitude(bedding({ strike, overturned }), [0, 0], 0)
+        const waving = drawAttitude(bedding({ strike, overturned, undulating: true }), [0, 0], 0)
+        const [line, wave] = [strokesOf(straight)[0], strokesOf(waving)[0]]
+        expect(inkOf([wave as StrokeMark]).length).toBeGreaterThan(20)
+        expect(endsOf(wave).flat()).toEqual(
+          endsOf(line)
+            .flat()
+            .map((value) => expect.closeTo(value, 9)),
+        )
+        expect(strokesOf(waving).slice(1)).toEqual(strokesOf(straight).slice(1))
+      }
+    }
+  })
+
+  it('is a plain plane where its kind does not undulate', () => {
+    expect(drawAttitude(bedding({ type: 'joint', undulating: true }), [0, 0], 0)).toEqual(
+      drawAttitude(bedding({ type: 'joint' }), [0, 0], 0),
+    )
+  })
+})
+
+describe('a bed whose tops are known', () => {
+  const withTops = (plane: Partial<DrawnPlane>) =>
+    drawAttitude(bedding({ ...plane, topsKnown: true }), [0, 0], 0)
+  const ballOf = (list: DisplayList): MM => {
+    const points = inkOf(list.filter((mark) => mark.mark === 'fill'))
+    const once = points.slice(0, -2) // A closed circle comes back to its start twice.
+    return [
+      once.reduce((sum, [x]) => sum + x, 0) / once.length,
+      once.reduce((sum, [, y]) => sum + y, 0) / once.length,
+    ]
+  }
+
+  it('carries a ball at the end of its mark, down dip, all round the compass', () => {
+    for (const strike of everyAzimuth) {
+      for (const overturned of [false, true]) {
+        const list = withTops({ strike, overturned })
+        const [, mark] = strokesOf(list)
+        expect(
+          Math.hypot(endsOf(mark)[1][0] - ballOf(list)[0], endsOf(mark)[1][1] - ballOf(list)[1]),
+        ).toBeLessThan(0.02)
+        expect(along(ballOf(list), vectorOf(strike + 90))).toBeGreaterThan(1)
+      }
+    }
+  })
+
+  it('carries it on the side of the top where the bed is vertical', () => {
+    for (const strike of everyAzimuth) {
+      // Source: orientation.md section 1, facing vector: an upright bed faces down dip, an overturned one the other way.
+      const upright = ballOf(withTops({ strike, dip: 90 }))
+      const overturned = ballOf(withTops({ strike, dip: 90, overturned: true }))
+      expect(along(upright, vectorOf(strike + 90))).toBeCloseTo(1.3, 3)
+      expect(along(overturned, vectorOf(strike + 90))).toBeCloseTo(-1.3, 3)
+    }
+  })
+})
+
 describe('a unit label', () => {
   const label = {
     kind: 'unit-label' as const,
@@ -180,25 +233,3 @@ describe('a unit label', () => {
     expect(textOf('certain', false)).toBe('?')
   })
 })
-
-/** Least distance between a numeral's box and the edge of any other ink, measured at points along the ink. */
-function closestInk(list: DisplayList, numeral: TextMark): number {
-  const [lower, , upper] = textCorners(numeral)
-  const others = list.filter((mark) => mark !== numeral)
-  return Math.min(
-    ...inkPoints(others).flatMap(({ points, halfWidth }) =>
-      points.slice(1).flatMap((to, index) => {
-        const from = points[index] ?? to
-        return Array.from({ length: 21 }, (_, step) => {
-          const [x, y] = [
-            from[0] + ((to[0] - from[0]) * step) / 20,
-            from[1] + ((to[1] - from[1]) * step) / 20,
-          ]
-          const dx = Math.max(lower[0] - x, 0, x - upper[0])
-          const dy = Math.max(lower[1] - y, 0, y - upper[1])
-          return Math.hypot(dx, dy) - halfWidth
-        })
-      }),
-    ),
-  )
-}
