@@ -147,4 +147,9 @@ function boxOf(line: readonly XY[]): Box {
 
 const isSame = (a: XY, b: XY | undefined): boolean => b !== undefined && a[0] === b[0] && a[1] === b[1]
 
-const positionText = (position: FilePosition): string => position.slice(0, 2).join(', ')
+/** To a decimetre where the figures are degrees: more tells nobody where it is. */
+const positionText = (position: FilePosition): string =>
+  position
+    .slice(0, 2)
+    .map((figure) => Number(figure.toFixed(6)))
+    .join(', ')
