@@ -22,7 +22,8 @@ export function nearestOnLine(line: readonly XY[], point: XY): NearestPlace {
   return best
 }
 
-function nearestOnSegment(a: XY, b: XY, point: XY): XY {
+/** Nearest place of a segment to a point, sheet metres. Source: as above. */
+export function nearestOnSegment(a: XY, b: XY, point: XY): XY {
   const [dx, dy] = [b[0] - a[0], b[1] - a[1]]
   const square = dx * dx + dy * dy
   if (square === 0) return a

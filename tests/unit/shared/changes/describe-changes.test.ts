@@ -42,7 +42,7 @@ describe('describeChanges', () => {
         { before: contact, after: { ...contact, properties: { ...contact.properties } } as Item },
         gone(line('fault', path)),
       ]),
-    ).toBe('2 attitudes added, 1 contact changed, 1 fault removed')
+    ).toBe('placed 2 attitudes, changed 1 contact, removed 1 fault')
   })
 
   it('names a field that changed, before and after', () => {
@@ -100,5 +100,35 @@ describe('describeChanges', () => {
     const words = describeChanges([{ before, after }])
     expect(words.length).toBeLessThanOrEqual(300)
     expect(words).toContain('2 more fields')
+  })
+
+  it('tells many together, and the values of the few that changed a field', () => {
+    const shift = (item: Item): Item =>
+      line(item.kind, [[1, 1], [11, 1], ...path.slice(2)], item.properties, item.id)
+    const contacts = [line('contact', path), line('contact', path), line('contact', path)]
+    const dip = (from: number, to: number, station: string) => {
+      const before = attitude({ dip: from, station })
+      return { before, after: attitude({ dip: to, station }, [5, 5], before.id) }
+    }
+    const moved = contacts.map((before) => ({ before, after: shift(before) }))
+    expect(describeChanges([...moved, dip(35, 53, '14')])).toBe(
+      'moved 3 contacts, dip of attitude 14: 35 → 53',
+    )
+    expect(describeChanges([dip(35, 53, '14'), dip(40, 42, '15'), dip(41, 42, '16')])).toBe(
+      'changed dip of 3 attitudes',
+    )
+    const [first] = contacts
+    if (!first) throw new Error('There is no contact.')
+    const both = line('contact', [[1, 1], ...path.slice(1)], { locationConfidence: 'inferred' }, first.id)
+    expect(describeChanges([{ before: first, after: both }, dip(1, 2, '9'), gone(line('fault', path))])).toBe(
+      'moved and changed 1 contact, dip of attitude 9: 1 → 2, removed 1 fault',
+    )
+  })
+
+  it('does not take a property that an older version lacks for changed', () => {
+    const after = attitude({})
+    const { undulating: _, ...older } = { ...after.properties, undulating: undefined }
+    const before = { ...after, properties: older } as Item // As it was stored before the property existed.
+    expect(describeChanges([{ before, after }])).toBe('changed 1 attitude')
   })
 })
