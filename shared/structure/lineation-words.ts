@@ -1,5 +1,5 @@
 import type { LineationProperties } from '../items/points'
-import { describeAttitude, dipFigure } from './attitude-words'
+import { describeAttitude } from './attitude-words'
 import { azimuthFigure, compassWords } from './compass'
 
 /** What a lineation's words depend on. */
@@ -8,11 +8,6 @@ export type DescribedLineation = Pick<LineationProperties, 'type' | 'trend' | 'p
 const names: Record<LineationProperties['type'], string> = {
   lineation: 'Lineation',
   'minor-fold-axis': 'Minor fold axis',
-}
-
-/** A line as notebooks write it, `120/35`: trend and plunge; `vertical` without a trend. */
-export function formatLineation({ trend, plunge }: Pick<LineationProperties, 'trend' | 'plunge'>): string {
-  return trend === null || plunge === 90 ? 'vertical' : `${azimuthFigure(trend)}/${dipFigure(plunge)}`
 }
 
 /** A lineation in words: `Lineation, plunges 35° toward 120° (south-east), on foliation that strikes 045°, dips 40° toward

@@ -41,3 +41,24 @@ export const overturnedByDip: {
   },
   { text: '200/150', strike: 200, dip: 150, same: '020/30 overturned' },
 ]
+
+/** Rakes of lines on planes, as printed. Source: Cardozo, Computational Geosciences, ch. 4, cited in orientation.md
+ *  section 6; tolerance half a unit of the last printed digit. */
+export const printedRakes: { plane: string; trend: number; plunge: number; rake: number }[] = [
+  { plane: '120/40', trend: 265.8, plunge: 25.3, rake: 138.4 },
+  { plane: '250/60', trend: 265.8, plunge: 25.3, rake: 29.5 },
+  { plane: '300/50', trend: 74, plunge: 40.6, rake: 121.8 },
+]
+
+/** The same and others to more digits. Source: orientation.md section 6, computed there with numpy. */
+export const computedRakes: { plane: string; trend: number; plunge: number; rake: number }[] = [
+  { plane: '120/40', trend: 265.80098866, plunge: 25.250063787, rake: 138.42309611 },
+  { plane: '250/60', trend: 265.80098866, plunge: 25.250063787, rake: 29.509003103 },
+  { plane: '300/50', trend: 74, plunge: 40.605685085, rake: 121.829230204 },
+  { plane: '000/60', trend: 16.102113752, plunge: 25.658906273, rake: 30 },
+  { plane: '000/60', trend: 163.897886248, plunge: 25.658906273, rake: 150 },
+  { plane: '245/35', trend: 335, plunge: 35, rake: 90 },
+]
+
+/** Angle between a line and a plane. Source: orientation.md section 8: line 030/20 to plane 120/40 is 60 exactly. */
+export const lineToPlane = { trend: 30, plunge: 20, plane: '120/40', angle: 60 }
