@@ -29,6 +29,15 @@ export interface LineAttributes {
   side: SideSign
 }
 
+/** How the line lies beneath a decoration. */
+export interface Beneath {
+  /** The end of the line that is nearer. */
+  end: LineEnd
+  /** How far the line bows out of the decoration's own x axis, to its left and to its right: what is drawn beside the line
+   *  keeps clear by as much. */
+  bow: { left: Millimetres; right: Millimetres }
+}
+
 /** A small drawing on a line, in its own frame: x along the line, y to its left, origin on the line. */
 export interface Decoration {
   /** Room it takes along the line. */
@@ -39,8 +48,7 @@ export interface Decoration {
   bearingOver: Millimetres
   /** Whether it bends with the line beneath it, as a tooth's foot does. */
   follows?: true
-  /** @param end the end it stands near, of one that stands near the ends */
-  marks(attributes: LineAttributes, end: LineEnd): readonly Mark[]
+  marks(attributes: LineAttributes, beneath: Beneath): readonly Mark[]
 }
 
 /** A line symbol: data, in millimetres on the printed sheet. */

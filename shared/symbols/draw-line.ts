@@ -1,6 +1,6 @@
 import { measureLine, type MeasuredLine } from '../geometry/measured-line'
 import type { Millimetres, MM } from '../units'
-import type { Decoration, LineSymbol } from './definition'
+import type { Beneath, Decoration, LineSymbol } from './definition'
 import { faultDip, faultDipMarks } from './definitions/faults'
 import type { DisplayList, Mark } from './display-list'
 import { plungeMarks } from './draw-plunge'
@@ -24,7 +24,7 @@ export function drawLine(symbol: LineSymbol, points: readonly MM[], drawing: Lin
   const { ink } = symbol
   const decorated = decorations.flatMap((placed) => decorate(symbol, line, placed, drawing))
   return [
-    ...lineStrokes(symbol, line, drawing, { between, decorations: onDash.toSorted((a, b) => a - b) }),
+    ...lineStrokes(symbol, line, drawing, { between, onDash: onDash.toSorted((a, b) => a - b) }),
     ...decorated,
     ...queries.map((at) => queryMark(line.pointAt(at), ink)),
     ...plungeMarks(line, heads, { ink, width: symbol.strokes.certain.width }),
@@ -55,7 +55,16 @@ function decorate(
 ): Mark[] {
   if (!decoration) return []
   const place = placementOf(decoration, line, at)
-  return placeMarks(decoration.marks(attributes, end), ([x, y]) => place([x * scale, y * scale]))
+  const beneath = { end, bow: bowAt(line, at, decoration) }
+  return placeMarks(decoration.marks(attributes, beneath), ([x, y]) => place([x * scale, y * scale]))
+}
+
+/** How far the line bows to either side of a decoration's axis, as far as the decoration runs along it. */
+function bowAt(line: MeasuredLine, at: Millimetres, { size, bearingOver }: Decoration): Beneath['bow'] {
+  const [dx, dy] = line.directionAt(at, bearingOver)
+  const [ox, oy] = line.pointAt(at)
+  const lefts = line.slice(at - size / 2, at + size / 2).map(([x, y]) => (y - oy) * dx - (x - ox) * dy)
+  return { left: Math.max(0, ...lefts), right: Math.max(0, ...lefts.map((left) => -left)) }
 }
 
 /** From a decoration's own frame to the drawing: straight along the line's direction, or bent with the line. */

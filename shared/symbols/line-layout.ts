@@ -53,7 +53,7 @@ export function layOutLine(line: MeasuredLine, symbol: LineSymbol, drawing: Line
 
   const decorations = decorationsClearOf(dipSpan)
   if (drawing.identity === 'certain') return { heads, drawn, decorations, dipAt, queries: [] }
-  const queries = placeQueries(line, { within: drawn, taken: [...spans(decorations), ...dipSpan] })
+  const queries = placeQueries(line, { within, taken: [...spans(decorations), ...dipSpan] })
   if (queries.length > 0) return { heads, drawn, decorations, dipAt, queries }
   const alone = placeQueries(line, { within: drawn, taken: [] })
   const queried = alone.map((at) => around(at, queryRoom(line, at)))
@@ -67,12 +67,15 @@ function middlePlace(line: MeasuredLine, within: Stretch): Millimetres | undefin
   const [from, to] = within
   const size = Math.min(faultDip.size, to - from)
   const slack = (to - from - size) / 2
-  return straightPlaceNear(line, (from + to) / 2, { size, slack }) ?? straightestPlace(line, { size, within })
+  return (
+    straightPlaceNear(line, (from + to) / 2, { size, bearingOver: faultDip.bearingOver, slack }) ??
+    straightestPlace(line, { size, within })
+  )
 }
 
 function placeDecoration(
   line: MeasuredLine,
-  { size, placed }: Decoration,
+  { size, placed, bearingOver }: Decoration,
   { within, taken, dipAt }: { within: Stretch; taken: readonly Stretch[]; dipAt: Millimetres | undefined },
 ): PlacedDecoration[] {
   const [from, to] = within
@@ -82,7 +85,14 @@ function placeDecoration(
   const fitted = size * scale
   const nearest = (at: Millimetres): LineEnd => (at < (from + to) / 2 ? 'start' : 'end')
   if (!isAtEnds) {
-    const sharing = { size: fitted, interval: placed.every, within, taken, even: dipAt !== undefined }
+    const sharing = {
+      size: fitted,
+      bearingOver,
+      interval: placed.every,
+      within,
+      taken,
+      even: dipAt !== undefined,
+    }
     return placeAlong(line, sharing).map((at) => ({ at, end: nearest(at), scale }))
   }
   const inset = Math.max(fitted / 2, Math.min(placed.fromEnds, (to - from) / 4))
@@ -90,7 +100,7 @@ function placeDecoration(
   return [from + inset, to - inset].flatMap((middle, index): PlacedDecoration[] => {
     const half: Stretch = index === 0 ? [from, from + 2 * inset] : [to - 2 * inset, to]
     const at =
-      straightPlaceNear(line, middle, { size: fitted, slack: Math.max(0, slack), taken }) ??
+      straightPlaceNear(line, middle, { size: fitted, bearingOver, slack: Math.max(0, slack), taken }) ??
       straightestPlace(line, { size: fitted, within: half, taken })
     return at === undefined ? [] : [{ at, end: index === 0 ? 'start' : 'end', scale }]
   })

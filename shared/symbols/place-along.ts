@@ -7,7 +7,10 @@ export type Stretch = readonly [from: Millimetres, to: Millimetres]
 /** Most that a line may turn beneath a decoration: a sharper bend would tear it off the line. */
 export const SHARPEST_BEND: Degrees = 30
 
-/** A decoration smaller than this is judged on this much of the line: below it, the turns are those of a hand, not of the ground. */
+/** How much of the line is judged beneath a decoration, in its sizes: a little more than it covers, so that it does not
+ *  crowd a corner. */
+const JUDGED = 1.2
+/** A smaller stretch is not judged: its turns are those of a hand, not of the ground. */
 const LEAST_JUDGED: Millimetres = 1.8
 
 /** How far a repeated decoration may move from its even place, as a share of the spacing: more would bring two together. */
@@ -17,6 +20,8 @@ const MOST_MOVED = 0.35
 export interface Sharing {
   /** Room one takes along the line. */
   size: Millimetres
+  /** Stretch of line that had better be straight: as wide as the drawing reaches beside the line. `size` unless given. */
+  bearingOver?: Millimetres
   /** From one to the next, about. */
   interval: Millimetres
   /** The part of the line that is to be decorated. */
@@ -50,17 +55,37 @@ function evenedCount(wanted: number, most: number, even: boolean): number {
   return 2 * Math.max(1, Math.min(Math.round(wanted / 2), Math.floor(most / 2)))
 }
 
-/** The nearest place to `middle`, at most `slack` away, that is free and straight; undefined where there is none. */
+/** The nearest place to `middle`, at most `slack` away, that is free and straight, if possible for as far as the drawing
+ *  reaches beside the line; undefined where there is none. */
 export function straightPlaceNear(
   line: MeasuredLine,
   middle: Millimetres,
-  { size, slack, taken = [] }: Pick<Sharing, 'size' | 'taken'> & { slack: Millimetres },
+  {
+    size,
+    bearingOver = size,
+    ...near
+  }: Pick<Sharing, 'size' | 'bearingOver' | 'taken'> & { slack: Millimetres },
+): Millimetres | undefined {
+  const best = nearestStraight(line, middle, { ...near, size, straightOver: Math.max(size, bearingOver) })
+  return best ?? nearestStraight(line, middle, { ...near, size, straightOver: size })
+}
+
+function nearestStraight(
+  line: MeasuredLine,
+  middle: Millimetres,
+  {
+    size,
+    straightOver,
+    slack,
+    taken = [],
+  }: Pick<Sharing, 'size' | 'taken'> & { straightOver: Millimetres; slack: Millimetres },
 ): Millimetres | undefined {
   const step = stepFor(size)
   const first = favouredWay(line)
   for (let away = 0; away <= slack; away += step) {
     for (const place of away === 0 ? [middle] : [middle + first * away, middle - first * away]) {
-      if (!isTaken(place, size, taken) && sharpestTurn(line, place, size) <= SHARPEST_BEND) return place
+      if (!isTaken(place, size, taken) && sharpestTurn(line, place, straightOver) <= SHARPEST_BEND)
+        return place
     }
   }
   return undefined
@@ -116,7 +141,7 @@ export function isClosedLine(line: MeasuredLine): boolean {
 const SPOTS = [-0.4, -0.3, -0.2, -0.1, 0, 0.1, 0.2, 0.3, 0.4]
 
 function sharpestTurn(line: MeasuredLine, place: Millimetres, size: Millimetres): Degrees {
-  const judged = Math.max(size, LEAST_JUDGED)
+  const judged = Math.max(size * JUDGED, LEAST_JUDGED)
   const inside = (spot: Millimetres) => Math.max(judged / 8, Math.min(line.length - judged / 8, spot))
   return Math.max(...SPOTS.map((share) => line.turnAt(inside(place + share * judged), judged / 2)))
 }

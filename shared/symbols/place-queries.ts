@@ -63,7 +63,7 @@ function everyNth(places: readonly Millimetres[], wanted: number, favoured: 1 | 
   const even = Array.from({ length: wanted }, (_, index) => ((index + 0.5) * places.length) / wanted - 0.5)
   const indices = even.map((share) => {
     const isBefore = share === middle ? favoured === 1 : share < middle
-    return isBefore ? Math.ceil(share) : Math.floor(share)
+    return isBefore ? Math.ceil(share - 0.5) : Math.floor(share + 0.5)
   })
   return [...new Set(indices)].flatMap((index) => places[index] ?? [])
 }

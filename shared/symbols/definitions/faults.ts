@@ -1,6 +1,7 @@
 import type { Millimetres, MM } from '../../units'
 import {
   confidenceStrokes,
+  type Beneath,
   type Decoration,
   type LineSymbol,
   type Published,
@@ -53,7 +54,8 @@ const ballAndBar: Decoration = {
 const ballsAtEnds: Decoration = {
   ...ballAndBar,
   placed: { fromEnds: 6 },
-  marks: ({ side }, end) => ballAndBar.marks({ side: end === 'start' ? side : opposite(side) }, end),
+  marks: ({ side }, beneath) =>
+    ballAndBar.marks({ side: beneath.end === 'start' ? side : opposite(side) }, beneath),
 }
 
 const TOOTH: Millimetres = 2.3
@@ -98,9 +100,10 @@ const ARROW: Millimetres = 6.4
 const ARROW_OFFSET: Millimetres = 1.35
 const BARB: Millimetres = 2
 
-/** One half arrow beside the line. @param side +1 left of the line   @param along +1 pointing along it, −1 back */
-function halfArrow(side: SideSign, along: 1 | -1): Mark[] {
-  const y = side * ARROW_OFFSET
+/** One half arrow beside the line, clear of it however it bows.
+ *  @param side +1 left of the line   @param along +1 pointing along it, −1 back */
+function halfArrow(side: SideSign, along: 1 | -1, { bow }: Beneath): Mark[] {
+  const y = side * (ARROW_OFFSET + (side === 1 ? bow.left : bow.right))
   const tip = (along * ARROW) / 2
   return [
     {
@@ -133,7 +136,7 @@ const halfArrows = (left: 1 | -1): Decoration => ({
   size: ARROW,
   placed: { every: 60 },
   bearingOver: ARROW,
-  marks: () => [...halfArrow(1, left), ...halfArrow(-1, opposite(left))],
+  marks: (_, beneath) => [...halfArrow(1, left, beneath), ...halfArrow(-1, opposite(left), beneath)],
 })
 
 /** The arrow of a fault's dip: a thin shaft square to the line and a small solid head, on the side to which the plane dips. */

@@ -55,14 +55,17 @@ const limbArrows = (dips: 'away' | 'toward', head: 'open' | 'outlined'): Decorat
   }
 }
 
-/** Half the distance between the two legs of an overturned fold's arrow, and how far its turn reaches beyond the trace. */
+/** Half the distance between the two legs of an overturned fold's arrow; how far they reach on the side of the dip, and
+ *  beyond the trace before they turn. */
 const LEG: Millimetres = 1.15
+const LEG_REACH: Millimetres = 3.6
+const LEG_BEYOND: Millimetres = 0.7
 
 /** A U-turned arrow for a fold whose two limbs dip the same way: it turns beyond the trace and opens to the side of the
  *  dip, where an anticline's heads point away from the trace and a syncline's toward it. Source: common practice
  *  (symbolization.md section 3); the drawing is ours. */
 const turnedArrow = (dips: 'away' | 'toward'): Decoration => {
-  const tip = dips === 'away' ? REACH + 0.3 : 0.75
+  const tip = dips === 'away' ? LEG_REACH : 0.95
   return {
     size: 2 * (LEG + HEAD_HALF),
     placed: { every: 26 },
@@ -71,10 +74,10 @@ const turnedArrow = (dips: 'away' | 'toward'): Decoration => {
       {
         mark: 'stroke',
         path: [
-          ['move', -LEG, side * (REACH + 0.3)],
-          ['line', -LEG, 0],
+          ['move', -LEG, side * LEG_REACH],
+          ['line', -LEG, -side * LEG_BEYOND],
           ...halfTurn(side),
-          ['line', LEG, side * (REACH + 0.3)],
+          ['line', LEG, side * LEG_REACH],
         ],
         width: STROKE,
         ink: 'fold',
@@ -87,9 +90,10 @@ const turnedArrow = (dips: 'away' | 'toward'): Decoration => {
 /** The half circle from the left leg to the right one, beyond the trace from the stated side. */
 function halfTurn(side: SideSign): PathStep[] {
   const h = LEG * QUARTER_HANDLE
+  const y = (beyond: Millimetres) => -side * (LEG_BEYOND + beyond)
   return [
-    ['curve', -LEG, -side * h, -h, -side * LEG, 0, -side * LEG],
-    ['curve', h, -side * LEG, LEG, -side * h, LEG, 0],
+    ['curve', -LEG, y(h), -h, y(LEG), 0, y(LEG)],
+    ['curve', h, y(LEG), LEG, y(h), LEG, y(0)],
   ]
 }
 
