@@ -1,0 +1,68 @@
+import type { ItemOf, PointItem } from '../items/item'
+import { toRadians, toDegrees, type Degrees } from '../units'
+import { attitudeCaseOf } from './draw-attitude'
+
+/** How much a kind of plane says about the structure of a sheet. Source: common practice: bedding first, then what was
+ *  made later. */
+const planeRank: Record<ItemOf<'attitude'>['properties']['type'], number> = {
+  bedding: 60,
+  foliation: 45,
+  cleavage: 35,
+  joint: 25,
+}
+/** Cases that a reader looks for: they turn the reading of all that stand around them. */
+const caseRank: Record<ReturnType<typeof attitudeCaseOf>, number> = {
+  overturned: 25,
+  vertical: 15,
+  horizontal: 10,
+  inclined: 0,
+}
+const lineationRank: Record<ItemOf<'lineation'>['properties']['type'], number> = {
+  'minor-fold-axis': 50,
+  lineation: 40,
+}
+/** Named places come before plain stations, of which there are most and which say least. */
+const PLACE_RANK = 55
+const STATION_RANK = 5
+/** What a plane gains by its steepness, and by being unlike its neighbours, at most. */
+const STEEPNESS_WORTH = 8
+const DISTINCTNESS_WORTH = 22
+
+/** How much a symbol matters where there is no room for all of them; the greater number stays. Overturned and vertical
+ *  bedding come first; of two of a sort the steeper one, and the one that tells more than its neighbours do already.
+ *  Source: common practice; the numbers are ours.
+ *  @param distinctness smallest angle to the like planes nearest to it, degrees, 0–90 */
+export function importanceOf(item: PointItem, distinctness: Degrees): number {
+  switch (item.kind) {
+    case 'attitude': {
+      const { type, dip, topsKnown } = item.properties
+      const own = planeRank[type] + caseRank[attitudeCaseOf(item.properties)] + (topsKnown ? 5 : 0)
+      return own + (dip / 90) * STEEPNESS_WORTH + (distinctness / 90) * DISTINCTNESS_WORTH
+    }
+    case 'lineation':
+      return lineationRank[item.properties.type] + (item.properties.plane ? 5 : 0)
+    case 'station':
+      return item.properties.type === 'station' ? STATION_RANK : PLACE_RANK
+    case 'unit-label':
+      // Every area is labelled: a label never gives way.
+      return Infinity
+  }
+}
+
+/** Angle between two planes, degrees, 0–90: that between their poles. */
+export function planesApart(a: Plane, b: Plane): Degrees {
+  const [p, q] = [pole(a), pole(b)]
+  const cosine = Math.abs(p[0] * q[0] + p[1] * q[1] + p[2] * q[2])
+  return toDegrees(Math.acos(Math.min(1, cosine)))
+}
+
+interface Plane {
+  strike: Degrees | null
+  dip: Degrees
+}
+
+/** Unit normal of a plane: east, north, up. */
+function pole({ strike, dip }: Plane): [number, number, number] {
+  const [downDip, tilt] = [toRadians((strike ?? 0) + 90), toRadians(dip)]
+  return [Math.sin(downDip) * Math.sin(tilt), Math.cos(downDip) * Math.sin(tilt), Math.cos(tilt)]
+}
