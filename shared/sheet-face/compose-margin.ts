@@ -3,6 +3,7 @@ import { sheetProjection } from '../geometry/projection'
 import type { Item } from '../items/item'
 import type { SheetFaceProperties } from '../items/legend'
 import type { Mark } from '../symbols/display-list'
+import { marksInUse } from '../symbols/line-marks'
 import type { Millimetres, XY } from '../units'
 import { heightOf, space, stack, type Block } from './block'
 import { colophon } from './colophon'
@@ -104,7 +105,7 @@ function unprintable(marks: readonly Mark[]): MarginOutcome | undefined {
 
 function tooFull(items: readonly Item[], margin: Box): string {
   const units = unitsById(items).size
-  const symbols = entriesInUse(items).length
+  const symbols = entriesInUse(items).length + marksInUse(items).length
   return `The legend (${units} units, ${symbols} symbols) does not fit the ${margin.width.toFixed(0)} × ${margin.height.toFixed(0)} mm beside the map face even in the smallest readable type. Choose a larger page or shorten the descriptions of units.`
 }
 
@@ -149,7 +150,7 @@ function setColumns(
   extra: readonly 'statements'[],
 ): Mark[] | undefined {
   const units = [...unitsById(items).values()]
-  const entries = entriesInUse(items)
+  const symbols = { entries: entriesInUse(items), marks: marksInUse(items) }
   for (const count of columnCounts(box.width, type)) {
     const gutter = gutterFor(type)
     const width = (box.width - (count - 1) * gutter) / count
@@ -159,7 +160,7 @@ function setColumns(
         block,
       ]),
     )
-    const sections = [unitsList(units, width, type), symbolsList(entries, width, type), statements]
+    const sections = [unitsList(units, width, type), symbolsList(symbols, width, type), statements]
     const columns = fill(sections, count, box.height)
     if (columns) {
       return drawColumns(columns, { x: box.x, top: box.y + box.height, width, gutter })

@@ -1,5 +1,7 @@
 import type { Item } from '../items/item'
 import { drawEntry, legendEntries, legendEntryOf, type LegendEntry } from '../symbols/legend-entries'
+import type { DisplayList } from '../symbols/display-list'
+import { drawMark, type LineMark } from '../symbols/line-marks'
 import type { Millimetres } from '../units'
 import { paragraph, space, type Block } from './block'
 import { place } from './place'
@@ -19,27 +21,46 @@ export function entriesInUse(items: Iterable<Item>): LegendEntry[] {
 const NOTE =
   'Strikes and trends are azimuths from true north; numerals are dips and plunges in degrees below the horizontal.'
 
-/** The explanation of lines and points: every symbol on the map face, drawn by the definitions that draw it there. */
-export function symbolsList(entries: readonly LegendEntry[], width: Millimetres, type: TypeScale): Block[] {
+/** The explanation of lines and points: every symbol on the map face, and what may stand on several, drawn by the definitions
+ *  that draw it there. */
+export function symbolsList(
+  { entries, marks }: { entries: readonly LegendEntry[]; marks: readonly LineMark[] },
+  width: Millimetres,
+  type: TypeScale,
+): Block[] {
   if (entries.length === 0) return []
+  const rows: SymbolRow[] = [
+    ...entries.map((entry) => ({ title: entry.title, draw: (size: SampleSize) => drawEntry(entry, size) })),
+    ...marks.map((mark) => ({ title: mark.title, draw: (size: SampleSize) => drawMark(mark, size) })),
+  ]
   return [
     ...sectionHeading('Lines and points', width, type),
-    ...entries.flatMap((entry) => [entryRow(entry, width, type), space(0.8 * type.factor)]),
+    ...rows.flatMap((row) => [symbolRow(row, width, type), space(0.8 * type.factor)]),
     space(1.6 * type.factor),
     paragraph(NOTE, width, type.text),
   ]
 }
 
-function entryRow(entry: LegendEntry, width: Millimetres, type: TypeScale): Block {
+interface SampleSize {
+  width: Millimetres
+  height: Millimetres
+}
+
+interface SymbolRow {
+  title: string
+  draw(size: SampleSize): DisplayList
+}
+
+function symbolRow({ title, draw }: SymbolRow, width: Millimetres, type: TypeScale): Block {
   // Symbols stay at the size they have on the map; only the type around them follows the page.
   const sample = { width: 18, height: 8 * Math.min(1, type.factor) }
   const indent = sample.width + 4 * type.factor
-  const words = paragraph(entry.title, width - indent, { ...type.text, ink: 'black' })
+  const words = paragraph(title, width - indent, { ...type.text, ink: 'black' })
   const height = Math.max(sample.height, words.height)
   return {
     height,
     draw: (x, top) => [
-      ...place(drawEntry(entry, sample), x, top - (height + sample.height) / 2),
+      ...place(draw(sample), x, top - (height + sample.height) / 2),
       ...words.draw(x + indent, top - (height - words.height) / 2),
     ],
   }

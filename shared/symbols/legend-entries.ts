@@ -11,7 +11,7 @@ import type { Millimetres } from '../units'
 import type { LineSymbol } from './definition'
 import type { DisplayList, Mark } from './display-list'
 import { unitInk } from './draw-face'
-import { lineSymbolOf, lineSymbols, variantOf } from './draw-item'
+import { lineSymbolOf, lineSymbols } from './draw-item'
 import { drawLine } from './draw-line'
 import type { LegendEntry, LegendKind, PointEntry } from './legend-entry'
 import { polyline } from './paths'
@@ -24,8 +24,7 @@ export type { LegendEntry, LegendKind } from './legend-entry'
 /** An item that has a legend entry. */
 type ExplainedItem = ItemOf<LegendKind>
 
-const lineId = (symbol: LineSymbol, confidence: LocationConfidence): string =>
-  [symbol.kind, symbol.variant, confidence].filter((part) => part !== '').join('.')
+const lineId = (symbol: LineSymbol, confidence: LocationConfidence): string => `${symbol.id}.${confidence}`
 
 function lineEntry(symbol: LineSymbol, locationConfidence: LocationConfidence): LegendEntry {
   const basis = {
@@ -67,7 +66,7 @@ export const legendEntries: readonly LegendEntry[] = [
 const entriesById: ReadonlyMap<string, LegendEntry> = new Map(legendEntries.map((entry) => [entry.id, entry]))
 
 /** The entry that explains an item; undefined for unit labels, units and the sheet face, which the legend shows as swatches
- *  or not at all. Questioned identity has no entry of its own: the query in the line is the same for all. */
+ *  or not at all. What may stand on any line, as a query or a plunge, is explained by `line-marks.ts`. */
 export function legendEntryOf(item: ExplainedItem): LegendEntry
 export function legendEntryOf(item: Item): LegendEntry | undefined
 export function legendEntryOf(item: Item): LegendEntry | undefined {
@@ -106,16 +105,9 @@ export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
       locationConfidence: entry.properties.locationConfidence,
       identity: entry.properties.identity,
       attributes: { side: 1 },
-      ...(showsPlunge(entry) ? { plunge: [{ end: 'end', points: 'out', degrees: null }] } : {}),
     },
   )
 }
-
-/** The arrowhead of a plunge is explained by the trace that is located best. */
-const showsPlunge = (entry: LegendEntry): boolean =>
-  entry.kind === 'axial-trace' &&
-  entry.properties.locationConfidence === 'certain' &&
-  !variantOf(entry).startsWith('monocline')
 
 const isPointEntry = (entry: LegendEntry): entry is PointEntry => entry.group === 'points'
 

@@ -2,6 +2,7 @@ import { computed } from 'vue'
 import type { Item, ItemOf } from '@shared/items/item'
 import { groupByAge } from '@shared/legend/group-by-age'
 import { legendEntries, legendEntryOf } from '@shared/symbols/legend-entries'
+import { marksInUse } from '@shared/symbols/line-marks'
 import { useSheetStore } from '@/stores/sheet'
 
 /** Items never change in place, so what they are shown as in the legend is worked out once for each. */
@@ -18,7 +19,7 @@ export function legendRowOf(item: Item): string | undefined {
   return id
 }
 
-/** The legend of the open sheet: units under their ages, entries in use, and how many items each row stands for. */
+/** The legend of the open sheet: units under their ages, entries and marks in use, and how many items each row stands for. */
 export function useLegend() {
   const sheet = useSheetStore()
 
@@ -35,10 +36,12 @@ export function useLegend() {
   })
   const used = computed(() => legendEntries.filter((entry) => counts.value.has(entry.id)))
 
+  const marks = computed(() => (void sheet.itemsVersion, marksInUse(sheet.all())))
+
   const countOf = (row: string): number => counts.value.get(row) ?? 0
   /** Ids of the items that a row stands for. */
   const idsOf = (row: string): string[] =>
     sheet.all().flatMap((item) => (legendRowOf(item) === row ? [item.id] : []))
 
-  return { units, groups, used, countOf, idsOf }
+  return { units, groups, used, marks, countOf, idsOf }
 }
