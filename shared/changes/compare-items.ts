@@ -1,6 +1,7 @@
 import { greatestDeparture } from '../geometry/line-distance'
 import { isLineItem, itemSchema, type Item } from '../items/item'
 import type { Metres, XY } from '../units'
+import { isSame } from './same-value'
 
 /** One property of an item that two versions state differently. */
 export interface FieldChange {
@@ -25,7 +26,7 @@ export interface PlaceChange {
 export function changedFields(before: Item, after: Item): FieldChange[] {
   const [from, to] = [propertiesOf(before, after), propertiesOf(after, before)]
   return [...new Set([...Object.keys(to), ...Object.keys(from)])]
-    .filter((field) => !isEqual(from[field], to[field]))
+    .filter((field) => !isSame(from[field], to[field]))
     .map((field) => ({ field, before: from[field] ?? null, after: to[field] ?? null }))
 }
 
@@ -35,24 +36,15 @@ function propertiesOf(version: Item, other: Item): Record<string, unknown> {
   return { ...((lacks && itemSchema.safeParse(version).data) || version).properties }
 }
 
-/** Values as JSON holds them, whatever the order of their keys: databases have one of their own. */
-function isEqual(a: unknown, b: unknown): boolean {
-  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return a === b
-  const [keys, others] = [Object.keys(a), Object.keys(b)]
-  return (
-    keys.length === others.length && keys.every((key) => isEqual(Reflect.get(a, key), Reflect.get(b, key)))
-  )
-}
-
 /** How the place of an item differs between two versions; undefined where it does not. */
 export function changedPlace(before: Item, after: Item): PlaceChange | undefined {
   const [from, to] = [verticesOf(before), verticesOf(after)]
-  const vertices = from.filter((vertex, index) => !isSame(vertex, to[index])).length
+  const vertices = from.filter((vertex, index) => !isSamePlace(vertex, to[index])).length
   if (from.length === to.length && vertices === 0) return undefined
   const metres = greatestDeparture(from, to)
   if (isLineItem(after) && from.length !== to.length) return { how: 'reshaped', metres, vertices: 0 }
   const reversed =
-    isLineItem(after) && from.every((vertex, index) => isSame(vertex, to[to.length - 1 - index]))
+    isLineItem(after) && from.every((vertex, index) => isSamePlace(vertex, to[to.length - 1 - index]))
   return reversed ? { how: 'reversed', metres: 0, vertices: 0 } : { how: 'moved', metres, vertices }
 }
 
@@ -61,4 +53,4 @@ function verticesOf({ geometry }: Item): readonly XY[] {
   return geometry.type === 'Point' ? [geometry.coordinates] : geometry.coordinates
 }
 
-const isSame = (a: XY, b: XY | undefined): boolean => a[0] === b?.[0] && a[1] === b[1]
+const isSamePlace = (a: XY, b: XY | undefined): boolean => a[0] === b?.[0] && a[1] === b[1]

@@ -127,7 +127,7 @@ describe('describeChanges', () => {
 
   it('does not take a property that an older version lacks for changed', () => {
     const after = attitude({})
-    const { undulating: _, ...older } = { ...after.properties, undulating: undefined }
+    const older = Object.fromEntries(Object.entries(after.properties).filter(([key]) => key !== 'undulating'))
     const before = { ...after, properties: older } as Item // As it was stored before the property existed.
     expect(describeChanges([{ before, after }])).toBe('changed 1 attitude')
   })

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { isSame } from '@/stores/same-item'
+import { isSame } from '@shared/changes/same-value'
 
 describe('sameness of items', () => {
   it('does not depend on the order of keys, which the database changes', () => {
