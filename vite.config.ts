@@ -55,6 +55,17 @@ export default defineConfig({
       {
         resolve: { alias },
         test: {
+          name: 'visual',
+          environment: 'node',
+          include: ['tests/visual/**/*.test.ts'],
+          fileParallelism: false,
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
+        },
+      },
+      {
+        resolve: { alias },
+        test: {
           name: 'e2e',
           environment: 'node',
           include: ['tests/e2e/**/*.test.ts'],

@@ -15,6 +15,7 @@ const PROGRAMS = {
   pdfinfo: 'poppler-utils',
   pdffonts: 'poppler-utils',
   pdftoppm: 'poppler-utils',
+  pdftocairo: 'poppler-utils',
 }
 
 /** Asked to stop, we end the program that runs, and clean up. */

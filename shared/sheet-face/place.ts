@@ -18,6 +18,13 @@ function placeMark(mark: Mark, x: Millimetres, y: Millimetres, scale: number): M
       }
     case 'fill':
       return { ...mark, path: path(mark.path) }
+    case 'pattern':
+      // A pattern keeps its size, so that a large swatch shows what stands on the map.
+      return {
+        ...mark,
+        path: path(mark.path),
+        anchor: [x + mark.anchor[0] * scale, y + mark.anchor[1] * scale],
+      }
     case 'text':
       return {
         ...mark,

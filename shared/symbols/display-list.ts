@@ -39,6 +39,30 @@ export interface FillMark {
   opacity?: number
 }
 
+/** A line or a filled shape of a tile, without an ink of its own. */
+export type TileMark = Omit<StrokeMark, 'ink' | 'dash'> | Omit<FillMark, 'ink' | 'opacity'>
+
+/** The repeating cell of an area pattern, in millimetres, its origin at the lower left. */
+export interface Tile {
+  /** Names the drawing: tiles of one id are the same. */
+  id: string
+  width: Millimetres
+  height: Millimetres
+  /** Each mark once. One that reaches over the cell's edge goes on in the next cell, and so do its repeats. */
+  marks: readonly TileMark[]
+}
+
+/** An area filled with a tile, repeated in both directions; what is beneath shows between its marks. Even-odd. */
+export interface PatternMark {
+  mark: 'pattern'
+  path: Path
+  tile: Tile
+  /** The one ink of all the tile's marks. */
+  ink: Ink
+  /** Where a corner of a cell lies: with one anchor for all areas of a sheet, a pattern runs on from one to the next. */
+  anchor: MM
+}
+
 export interface TextMark {
   mark: 'text'
   text: string
@@ -66,7 +90,7 @@ export interface GroupMark {
   marks: DisplayList
 }
 
-export type Mark = StrokeMark | FillMark | TextMark | GroupMark
+export type Mark = StrokeMark | FillMark | PatternMark | TextMark | GroupMark
 
 /** What a definition turns an item and its sheet into: plain numbers in page millimetres, x right, y up. It can be
  *  cached, compared, posted to a worker and drawn by every surface. Marks are drawn in order. */

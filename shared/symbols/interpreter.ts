@@ -1,9 +1,10 @@
 import type { Degrees } from '../units'
 import { cutDashes } from './dashes'
-import type { DisplayList, Mark, Path, TextMark } from './display-list'
+import type { DisplayList, Mark, Path, PatternMark, TextMark } from './display-list'
 import { inkColour } from './ink'
 import { mapPath } from './paths'
 import { baselineStart } from './text-box'
+import { marksOverCells } from './tile'
 
 /** How a path is painted. Lengths are in the surface's unit, colours `#rrggbb`. */
 export type Paint =
@@ -29,10 +30,27 @@ export interface TextRun {
   halo?: { width: number; colour: string }
 }
 
-/** What draws. A surface is told finished things in its own unit: no dashes, no ink names, no anchors, no attributes.
- *  (Pattern tiles will be its fifth verb, when there are patterns.) */
+/** A tile as a surface repeats it, in the surface's unit and axes. */
+export interface Tiling {
+  /** Names the drawing of the cell: one name, size and colour, one picture. */
+  name: string
+  colour: string
+  /** Size of a cell, and from one to the next. */
+  width: number
+  height: number
+  /** A cell's corner of smallest x and y. */
+  x: number
+  y: number
+  /** Draws a block of cells with its corner of smallest x and y at (0, 0). Marks that reach into it from outside are drawn
+   *  too, each once: a surface cuts the block at its edges, and copies of it meet without a seam. */
+  draw(to: Pick<Surface, 'path'>, columns?: number, rows?: number): void
+}
+
+/** What draws. A surface is told finished things in its own unit: no dashes, no ink names, no anchors, no attributes. */
 export interface Surface {
   path(path: Path, paint: Paint): void
+  /** Fills a path (even-odd) with a repeated cell. */
+  tile(path: Path, tiling: Tiling): void
   text(run: TextRun): void
   /** Limits what follows to a path (even-odd), until the end of the group it stands in. */
   clip(path: Path): void
@@ -78,6 +96,9 @@ function replayMark(mark: Mark, surface: Surface, transform: Transform): void {
         opacity: mark.opacity ?? 1,
       })
       return
+    case 'pattern':
+      surface.tile(placed(mark.path, transform), tilingOf(mark, transform))
+      return
     case 'text':
       surface.text(textRun(mark, transform))
       return
@@ -92,6 +113,32 @@ function replayMark(mark: Mark, surface: Surface, transform: Transform): void {
 function placed(path: Path, { scale, x, y, flipY }: Transform): Path {
   const down = flipY ? -scale : scale
   return mapPath(path, (point) => [x + point[0] * scale, y + point[1] * down])
+}
+
+function tilingOf({ tile, ink, anchor }: PatternMark, transform: Transform): Tiling {
+  const { scale, flipY } = transform
+  const [width, height] = [tile.width * scale, tile.height * scale]
+  const colour = inkColour(ink)
+  const x = transform.x + anchor[0] * scale
+  const y = transform.y + anchor[1] * (flipY ? -scale : scale)
+  return {
+    name: tile.id,
+    colour,
+    width,
+    height,
+    x,
+    y: flipY ? y - height : y,
+    draw(to, columns = 1, rows = 1) {
+      const block = { scale, x: 0, y: flipY ? rows * height : 0, flipY }
+      for (const mark of marksOverCells(tile, columns, rows)) {
+        const paint: Paint =
+          mark.mark === 'stroke'
+            ? { paint: 'stroke', width: mark.width * scale, colour, cap: mark.cap ?? 'butt' }
+            : { paint: 'fill', colour, opacity: 1 }
+        to.path(placed(mark.path, block), paint)
+      }
+    },
+  }
 }
 
 function textRun(mark: TextMark, { scale, x, y, flipY }: Transform): TextRun {

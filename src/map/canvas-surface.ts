@@ -1,19 +1,15 @@
-import type { Path } from '@shared/symbols/display-list'
-import type { Paint, Surface, TextRun } from '@shared/symbols/interpreter'
-
-/** What a canvas context and a Path2D have in common. */
-export type PathTarget = Pick<CanvasPath, 'moveTo' | 'lineTo' | 'bezierCurveTo' | 'closePath'>
+import type { Surface, TextRun } from '@shared/symbols/interpreter'
+import { canvasPaths, tracePath } from './canvas-paths'
+import { fillTiled } from './fill-tiled'
 
 /** A surface that draws on a canvas at once. Paths and text come in the canvas's own unit, y downward. */
 export function canvasSurface(context: CanvasRenderingContext2D): Surface {
   return {
-    path(path, paint) {
+    ...canvasPaths(context),
+    tile(path, tiling) {
       context.beginPath()
       tracePath(path, context)
-      applyPaint(context, paint)
-      if (paint.paint === 'stroke') context.stroke()
-      else context.fill('evenodd')
-      context.globalAlpha = 1
+      fillTiled(context, tiling)
     },
     text: (run) => drawText(context, run),
     clip(path) {
@@ -27,29 +23,6 @@ export function canvasSurface(context: CanvasRenderingContext2D): Surface {
       context.restore()
     },
   }
-}
-
-/** Adds a path's steps to a context or a Path2D. */
-export function tracePath(path: Path, target: PathTarget): void {
-  for (const step of path) {
-    if (step[0] === 'line') target.lineTo(step[1], step[2])
-    else if (step[0] === 'move') target.moveTo(step[1], step[2])
-    else if (step[0] === 'close') target.closePath()
-    else target.bezierCurveTo(step[1], step[2], step[3], step[4], step[5], step[6])
-  }
-}
-
-/** Sets how the next stroke or fill looks. */
-export function applyPaint(context: CanvasRenderingContext2D, paint: Paint): void {
-  if (paint.paint === 'fill') {
-    context.fillStyle = paint.colour
-    context.globalAlpha = paint.opacity
-    return
-  }
-  context.strokeStyle = paint.colour
-  context.lineWidth = paint.width
-  context.lineCap = paint.cap
-  context.lineJoin = 'round'
 }
 
 /** Writes a run of Lato from the left end of its base line. */

@@ -1,11 +1,14 @@
 import type { DisplayList } from '@shared/symbols/display-list'
-import { replay, type Paint, type Surface, type TextRun } from '@shared/symbols/interpreter'
+import { replay, type Paint, type Surface, type TextRun, type Tiling } from '@shared/symbols/interpreter'
 import type { Metres, XY } from '@shared/units'
-import { applyPaint, drawText, tracePath } from './canvas-surface'
+import { applyPaint, tracePath } from './canvas-paths'
+import { drawText } from './canvas-surface'
+import { fillTiled } from './fill-tiled'
 import { toPx, type ViewFrame } from './view-frame'
 
 type Step =
   | { step: 'paint'; path: Path2D; paint: Paint }
+  | { step: 'tile'; path: Path2D; tiling: Tiling }
   | { step: 'text'; run: TextRun }
   | { step: 'clip'; path: Path2D }
   | { step: 'save' }
@@ -22,7 +25,7 @@ export interface Drawing {
 }
 
 /** Thinnest stroke on screen: a finer one turns grey and patchy. */
-const LEAST_WIDTH_PX = 0.8
+export const LEAST_WIDTH_PX = 0.8
 
 /** Makes a display list ready for the canvas. */
 export function makeDrawing(list: DisplayList, at: { origin: XY; mmPerMetre: number }): Drawing {
@@ -41,6 +44,7 @@ function recordingSurface(): Surface & { steps: Step[] } {
   return {
     steps,
     path: (path, paint) => steps.push({ step: 'paint', path: built(path), paint }),
+    tile: (path, tiling) => steps.push({ step: 'tile', path: built(path), tiling }),
     text: (run) => steps.push({ step: 'text', run }),
     clip: (path) => steps.push({ step: 'clip', path: built(path) }),
     group(_name, draw) {
@@ -53,11 +57,17 @@ function recordingSurface(): Surface & { steps: Step[] } {
 
 /** Draws it where its origin falls in the view.
  *  @param pxPerMm size of the list's millimetre on screen, px
- *  @param ratio device pixels per px */
+ *  @param ratio device pixels per px
+ *  @param patternPxPerMm size of a pattern's millimetre, px, where patterns do not shrink and grow with the ground */
 export function drawDrawing(
   context: CanvasRenderingContext2D,
   drawing: Drawing,
-  { view, pxPerMm, ratio }: { view: ViewFrame; pxPerMm: number; ratio: number },
+  {
+    view,
+    pxPerMm,
+    ratio,
+    patternPxPerMm,
+  }: { view: ViewFrame; pxPerMm: number; ratio: number; patternPxPerMm?: number },
 ): void {
   const [x, y] = toPx(view, drawing.origin)
   const scale = pxPerMm * ratio
@@ -73,6 +83,9 @@ export function drawDrawing(
           context.fill(step.path, 'evenodd')
           context.globalAlpha = 1
         }
+        break
+      case 'tile':
+        fillTiled(context, step.tiling, step.path, patternPxPerMm && patternPxPerMm * ratio)
         break
       case 'text':
         // Letters would stand on their heads in a frame with y up.

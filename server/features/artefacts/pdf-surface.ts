@@ -1,6 +1,7 @@
 import type { Path } from '@shared/symbols/display-list'
 import type { Paint, Surface, TextRun, Transform } from '@shared/symbols/interpreter'
 import type { Millimetres } from '@shared/units'
+import { pdfTiles } from './pdf-tiles'
 
 /** PDF's unit: 72 points to the inch. */
 export const POINTS_PER_MM = 72 / 25.4
@@ -18,11 +19,19 @@ export const fontName = (weight: TextRun['weight']): string => `lato-${weight}`
 
 /** A surface that draws on the current page of a PDF document, as vectors. */
 export function pdfSurface(document: PDFKit.PDFDocument): Surface {
+  const patternOf = pdfTiles(document)
   return {
     path(path, paint) {
       if (path.length === 0) return
       tracePath(document, path)
       paintPath(document, paint)
+    },
+    tile(path, tiling) {
+      if (path.length === 0) return
+      // Path and paint must not be parted, so the colour comes before both.
+      document.fillColor([patternOf(tiling), tiling.colour])
+      tracePath(document, path)
+      document.fill('even-odd')
     },
     text(run) {
       document.save()

@@ -1,6 +1,6 @@
 import type { Box } from '../../geometry/box'
 import type { DisplayList, Path } from '../display-list'
-import { replay, type Paint, type Surface, type TextRun } from '../interpreter'
+import { replay, type Paint, type Surface, type TextRun, type Tiling } from '../interpreter'
 
 /** A display list as the text of one SVG image, to be set inline or kept as a file. Its size is in true millimetres.
  *  @param box the part of the list's plane to show, millimetres, y up */
@@ -17,11 +17,18 @@ export function toSvg(list: DisplayList, box: Box): string {
 /** A surface that writes SVG elements. */
 function svgSurface(): Surface & { parts: string[] } {
   const parts: string[] = []
+  const defined = new Set<string>()
   let clips = 0
   return {
     parts,
     path: (path, paint) => {
       parts.push(`<path d="${pathData(path)}" ${paintAttributes(paint)}/>`)
+    },
+    tile(path, tiling) {
+      const id = `tile-${hash(tilingName(tiling))}`
+      if (!defined.has(id)) parts.push(patternElement(id, tiling))
+      defined.add(id)
+      parts.push(`<path d="${pathData(path)}" fill="url(#${id})" fill-rule="evenodd"/>`)
     },
     text: (run) => {
       parts.push(textElement(run))
@@ -60,6 +67,21 @@ const paintAttributes = (paint: Paint): string =>
       `stroke-linecap="${paint.cap}" stroke-linejoin="round"`
     : `fill="${paint.colour}" fill-rule="evenodd"` +
       (paint.opacity === 1 ? '' : ` fill-opacity="${short(paint.opacity)}"`)
+
+/** A tiling's whole look in words: tilings of one name are drawn alike. */
+const tilingName = ({ name, colour, width, height, x, y }: Tiling): string =>
+  [name, colour, ...[width, height, x, y].map(short)].join(' ')
+
+function patternElement(id: string, tiling: Tiling): string {
+  const { x, y, width, height } = tiling
+  const cell = svgSurface()
+  tiling.draw(cell)
+  const [left, top, wide, high] = [x, y, width, height].map(short)
+  return (
+    `<pattern id="${id}" patternUnits="userSpaceOnUse" x="${left}" y="${top}" width="${wide}" height="${high}">` +
+    `${cell.parts.join('')}</pattern>`
+  )
+}
 
 function textElement(run: TextRun): string {
   const turn = run.turn === 0 ? '' : ` transform="rotate(${short(run.turn)} ${short(run.x)} ${short(run.y)})"`

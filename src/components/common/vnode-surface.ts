@@ -1,14 +1,23 @@
 import { h, type VNode } from 'vue'
-import type { Paint, Surface, TextRun } from '@shared/symbols/interpreter'
+import type { Paint, Surface, TextRun, Tiling } from '@shared/symbols/interpreter'
 import { pathData } from '@shared/symbols/surfaces/svg'
 
 /** A surface that makes SVG elements as Vue nodes, so that a drawing needs no markup set as text.
- *  @param colourOf what a colour is shown as; itself for a true picture, `currentColor` for a plain one */
-export function vnodeSurface(colourOf: (colour: string) => string): Surface & { nodes: VNode[] } {
+ *  @param colourOf what a colour is shown as; itself for a true picture, `currentColor` for a plain one
+ *  @param id a name that no other drawing of the page has: its tiles are called by it */
+export function vnodeSurface(colourOf: (colour: string) => string, id: string): Surface & { nodes: VNode[] } {
+  let tiles = 0
   const surface = {
     nodes: [] as VNode[],
     path: (path: Parameters<Surface['path']>[0], paint: Paint) => {
       surface.nodes.push(h('path', { d: pathData(path), ...paintAttributes(paint, colourOf) }))
+    },
+    tile: (path: Parameters<Surface['path']>[0], tiling: Tiling) => {
+      const tile = `${id}-${tiles++}`
+      surface.nodes.push(
+        patternNode(tile, tiling, colourOf),
+        h('path', { d: pathData(path), fill: `url(#${tile})`, 'fill-rule': 'evenodd' }),
+      )
     },
     text: (run: TextRun) => {
       surface.nodes.push(h('text', textAttributes(run, colourOf), run.text))
@@ -18,6 +27,13 @@ export function vnodeSurface(colourOf: (colour: string) => string): Surface & { 
     group: (_name: string, draw: () => void) => draw(),
   }
   return surface
+}
+
+function patternNode(id: string, tiling: Tiling, colourOf: (colour: string) => string): VNode {
+  const { x, y, width, height } = tiling
+  const cell = vnodeSurface(colourOf, id)
+  tiling.draw(cell)
+  return h('pattern', { id, patternUnits: 'userSpaceOnUse', x, y, width, height }, cell.nodes)
 }
 
 const paintAttributes = (paint: Paint, colourOf: (colour: string) => string) =>
