@@ -18,11 +18,18 @@ export function formatAttitude(plane: Plane, convention: AttitudeConvention): st
   return plane.overturned ? `${figures} overturned` : figures
 }
 
-/** A plane in words: `Strikes 045°, dips 40° toward 135° (south-east), overturned`. */
-export function describeAttitude(plane: Plane): string {
-  if (plane.strike === null || plane.dip === 0) return 'Horizontal'
+/** What else is seen of a plane. */
+export interface PlaneTraits {
+  undulating?: boolean
+  topsKnown?: boolean
+}
+
+/** A plane in words: `Strikes 045°, dips 40° toward 135° (south-east), overturned, tops known`. */
+export function describeAttitude(plane: Plane & PlaneTraits): string {
+  const traits = `${plane.undulating ? ', undulating' : ''}${plane.topsKnown ? ', tops known' : ''}`
+  if (plane.strike === null || plane.dip === 0) return `Horizontal${traits}`
   const strike = `Strikes ${azimuthFigure(plane.strike)}°`
-  const overturned = plane.overturned ? ', overturned' : ''
+  const overturned = `${plane.overturned ? ', overturned' : ''}${traits}`
   if (plane.dip === 90) return `${strike}, vertical${overturned}`
   const toward = dipDirectionOf(plane.strike)
   const dip = `dips ${bareFigure(plane.dip)}° toward ${azimuthFigure(toward)}° (${compassWords(toward)})`

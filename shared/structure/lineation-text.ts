@@ -1,5 +1,6 @@
 import { angleBetween, normalizeAzimuth, type Azimuth, type Degrees } from '../units'
 import { normalizeAttitudeText } from './attitude-spelling'
+import { parseAzimuth } from './azimuth-text'
 import { angleToLine, compassAzimuth, quadrantFigure } from './compass'
 import { formatLine, lineAtRake, type Line } from './line-on-plane'
 import type { Plane } from './plane'
@@ -68,12 +69,8 @@ function readLine(trendText: string, plunge: Degrees): LineationReading {
 
 function readTrend(text: string): Azimuth | Refused {
   if (/^-?\d/.test(text)) return Number(text)
-  const quadrant = /^([NS])\s*(\d+(?:\.\d+)?)\s*([EW])$/.exec(text)
-  if (!quadrant) return compassAzimuth(text) ?? refused(`“${text}” is not a compass direction.`)
-  const turn = Number(quadrant[2])
-  if (turn > 90) return refused(`The trend ${text} does not read: in quadrants the angle runs from 0 to 90.`)
-  const fromNorth = quadrant[3] === 'E' ? turn : -turn
-  return normalizeAzimuth(quadrant[1] === 'N' ? fromNorth : 180 - fromNorth)
+  const parsed = parseAzimuth(text)
+  return parsed.outcome === 'refused' ? parsed : parsed.azimuth
 }
 
 /** A line from separate fields, checked exactly as text is.

@@ -119,14 +119,16 @@ const lineationEntries: PointEntry[] = lineations.flatMap(({ type, title }) => {
   ]
 })
 
+const SAMPLE_AZIMUTH = 60
+
 const placeId = (type: string): string => (type === 'station' ? 'station' : `station.${type}`)
 
-const placeEntries: PointEntry[] = places.map(({ type, title, azimuth }) => ({
+const placeEntries: PointEntry[] = places.map(({ type, title }) => ({
   id: placeId(type),
   kind: 'station',
   group: 'points',
   title,
-  properties: stationPropertiesSchema.parse({ type, ...(azimuth ? { azimuth: 60 } : {}) }),
+  properties: stationPropertiesSchema.parse({ type }),
 }))
 
 /** Every entry of a point, in the order of the palette. */
@@ -152,6 +154,7 @@ export function drawPointEntry(entry: PointEntry): DisplayList {
     case 'lineation':
       return drawLineation(entry.properties, [0, 0], 0)
     case 'station':
-      return drawPlace(entry.properties, [0, 0], 0)
+      // Its azimuth is only the sample's: a place that is drawn with this entry does not have one yet.
+      return drawPlace({ ...entry.properties, azimuth: SAMPLE_AZIMUTH }, [0, 0], 0)
   }
 }

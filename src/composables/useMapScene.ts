@@ -68,7 +68,7 @@ export function useMapScene(map: SheetMap): void {
     })
   })
   watch(
-    () => workplace.pendingAttitudePlace,
+    () => workplace.pendingReadingPlace,
     (place) => map.setMarks({ place }),
     { immediate: true },
   )

@@ -67,7 +67,7 @@ export function useSheetEditor(map: SheetMap) {
       return outcome.outcome === 'done' ? null : outcome.errors.map((error) => error.detail).join(' ')
     },
     pen,
-    askAttitude: (at) => (workplace.pendingAttitudePlace = at),
+    askReading: (at) => (workplace.pendingReadingPlace = at),
     say: (sentence) => (workplace.hint = sentence),
     isSnapping: () => workplace.snapping,
     readOnly: () => sheet.readOnly,

@@ -18,8 +18,8 @@ export interface EditorHost extends EditorView {
   /** Hands a finished change to the one door; answers null, or why it was refused. */
   commit(draft: ChangeDraft): string | null
   pen(): Pen | null
-  /** A place was chosen for an attitude; its reading is asked for elsewhere. */
-  askAttitude(at: XY): void
+  /** A place was chosen for an attitude or a lineation; its reading is asked for elsewhere. */
+  askReading(at: XY): void
   /** One plain sentence to the person. */
   say(sentence: string): void
   isSnapping(): boolean

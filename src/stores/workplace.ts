@@ -36,7 +36,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   /** Symbols above 100 %: grow with the sheet (print size), or stay as at 100 % (screen size). */
   const symbolSize = ref<'print' | 'screen'>('print')
   /** A place was clicked for an attitude; the reading is asked for beside the map. */
-  const pendingAttitudePlace = shallowRef<XY | null>(null)
+  const pendingReadingPlace = shallowRef<XY | null>(null)
   /** Pointer on the sheet, sheet metres; null outside. */
   const cursor = shallowRef<XY | null>(null)
   /** Unit under the pointer. */
@@ -52,7 +52,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   function choose(next: Tool): void {
     tool.value = next
     if (next !== 'draw') drawWith.value = null
-    pendingAttitudePlace.value = null
+    pendingReadingPlace.value = null
   }
 
   /** Picks what to draw with, or puts the pen down where the same is picked again. */
@@ -60,7 +60,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     if (!pen || isSamePen(pen, drawWith.value)) return choose('select')
     drawWith.value = lastPen.value = pen
     tool.value = 'draw'
-    pendingAttitudePlace.value = null
+    pendingReadingPlace.value = null
     selected.value = []
   }
 
@@ -128,7 +128,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     hiddenEntries,
     snapping,
     symbolSize,
-    pendingAttitudePlace,
+    pendingReadingPlace,
     cursor,
     unitHere,
     percent,

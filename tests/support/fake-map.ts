@@ -70,7 +70,7 @@ export function aWorkbench(items: readonly Item[] = [], pen: Pen | null = null) 
       return null
     },
     pen: () => bench.pen,
-    askAttitude: (place) => void bench.places.push(place),
+    askReading: (place) => void bench.places.push(place),
     say: (sentence) => void bench.said.push(sentence),
     isSnapping: () => bench.snapping,
     readOnly: () => bench.readOnly,

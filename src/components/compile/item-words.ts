@@ -54,9 +54,8 @@ function unitLabelTitle(unit: UnitProperties | undefined, identity: string): str
 function attitudeTitle({ properties }: ItemOf<'attitude'>): string {
   const type = capital(properties.type)
   const words = describeAttitude(properties)
-  return words === 'Horizontal'
-    ? `${type}, horizontal`
-    : `${type} ${words.charAt(0).toLowerCase()}${words.slice(1)}`
+  const separator = words.startsWith('Horizontal') ? ', ' : ' '
+  return `${type}${separator}${words.charAt(0).toLowerCase()}${words.slice(1)}`
 }
 
 function placeTitle(item: ItemOf<'station'>): string {

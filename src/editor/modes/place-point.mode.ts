@@ -7,7 +7,7 @@ import type { PointerInput } from '../input'
 import type { MapPort } from '../map-port'
 import { QuietMode } from './mode'
 
-/** Places points: one click, or one typed place, each. An attitude's reading is asked for before it becomes an item. */
+/** Places points: one click, or one typed place, each. The reading of an attitude or a lineation is asked for before it becomes an item. */
 export class PlacePointMode extends QuietMode {
   constructor(
     private readonly map: MapPort,
@@ -19,7 +19,7 @@ export class PlacePointMode extends QuietMode {
 
   begin(): void {
     this.map.cursor('crosshair')
-    const next = this.pen.kind === 'attitude' ? ' Its reading is asked for beside the map.' : ''
+    const next = this.hasReading() ? ' Its reading is asked for beside the map.' : ''
     this.host.say(`${this.pen.title}: click its place, or type it below.${next}`)
   }
 
@@ -42,15 +42,20 @@ export class PlacePointMode extends QuietMode {
     return true
   }
 
-  /** Attitudes belong to stations: only points attract them, never a line's vertex. */
+  /** Whether the pen's items are known by a reading. */
+  private hasReading(): boolean {
+    return this.pen.kind === 'attitude' || this.pen.kind === 'lineation'
+  }
+
+  /** Readings belong to stations: only points attract them, never a line's vertex. */
   private station(at: XY): XY | null {
-    if (!this.host.isSnapping() || this.pen.kind !== 'attitude') return null
+    if (!this.host.isSnapping() || !this.hasReading()) return null
     const snapped = snap(this.map, at, { to: 'points' })
     return snapped.to === 'point' ? snapped.at : null
   }
 
   private place(at: XY): void {
-    if (this.pen.kind === 'attitude') return this.host.askAttitude(at)
+    if (this.hasReading()) return this.host.askReading(at)
     const answer = placePoint({ id: this.host.newId(), pen: this.pen, at })
     if (answer.outcome === 'refused') return this.host.say(answer.reason)
     const reason = this.host.commit(answer.draft)

@@ -128,7 +128,7 @@ describe('a new reading', () => {
   it('can be given in separate fields', async () => {
     const { sheet, entry } = mountNew()
     await entry.get('button.link.light').trigger('click')
-    const [strike, dip] = entry.findAll('.attitude-fields input')
+    const [strike, dip] = entry.findAll('.figure-fields input')
     await strike?.setValue('200')
     await dip?.setValue('35')
     await entry.get('input[type=checkbox]').setValue(true)

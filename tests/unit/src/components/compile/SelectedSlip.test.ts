@@ -125,12 +125,12 @@ describe('a place clicked for an attitude', () => {
   it('is asked for its reading, belongs to the station there, and is asked no more once taken', async () => {
     const station = aPoint('station', [286_000, 5_280_000], { name: '214' })
     const { sheet, workplace, slip } = await select([station, aSheetFace()], [])
-    workplace.pendingAttitudePlace = [286_000, 5_280_000]
+    workplace.pendingReadingPlace = [286_000, 5_280_000]
     await flushPromises()
     expect(slip.get('.facts').text()).toContain('station 214')
     await slip.get('input.reading').setValue('045/40')
     await slip.get('form').trigger('submit')
     expect(sheet.ofKind('attitude')[0]?.properties).toMatchObject({ strike: 45, dip: 40, station: '214' })
-    expect(workplace.pendingAttitudePlace).toBeNull()
+    expect(workplace.pendingReadingPlace).toBeNull()
   })
 })

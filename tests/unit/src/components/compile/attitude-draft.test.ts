@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { draftOf, fieldsOf, parseDeclination, readDraft, textOf } from '@/components/compile/attitude-draft'
+import { draftOf, fieldsOf, readDraft, textOf } from '@/components/compile/attitude-draft'
+import { parseDeclination } from '@/components/compile/north-draft'
 
 const draft = (text: string, more: Partial<Parameters<typeof readDraft>[0]> = {}) => ({
   text,
@@ -138,7 +139,7 @@ describe('separate fields', () => {
   })
 
   it('stand for a horizontal bed with a dip of 0 alone', () => {
-    expect(fieldsOf('horizontal', 'strike-dip')).toEqual({ azimuth: '', dip: '0' })
-    expect(textOf({ azimuth: '', dip: '0' })).toBe('0')
+    expect(fieldsOf('horizontal', 'strike-dip')).toEqual(['', '0'])
+    expect(textOf(['', '0'])).toBe('0')
   })
 })
