@@ -13,10 +13,13 @@ export interface Marks {
   sketch: Sketch | null
   /** A place that waits for its attitude. */
   place: XY | null
+  /** Versions of items laid over the sheet to be compared: `before` in slate, `after` in oxide. */
+  compared: readonly { item: LineItem | PointItem; ink: 'before' | 'after' }[]
 }
 
 const SLATE = inkColour('selection')
 const PAPER = inkColour('paper')
+const COMPARED = { before: SLATE, after: inkColour('fold') } as const
 const FULL_TURN = 2 * Math.PI
 
 /** Draws selection, hover and sketch over the sheet. Sizes are screen pixels: these are signs to a person, not symbols.
@@ -36,8 +39,30 @@ export function paintMarks(
     emphasize(context, view, item, { alpha: 0.28, halo: 8, isSelected: false, symbolPx })
   for (const item of marks.selected)
     emphasize(context, view, item, { alpha: 0.2, halo: 8, isSelected: true, symbolPx })
+  for (const { item, ink } of marks.compared) overlay(context, view, item, COMPARED[ink])
+  context.strokeStyle = SLATE
   if (marks.place) ring(context, toPx(view, marks.place), 9, 2)
   if (marks.sketch) paintSketch(context, view, marks.sketch)
+}
+
+/** A version of an item in one ink, on a paper casing that lifts it off the sheet. */
+function overlay(
+  context: CanvasRenderingContext2D,
+  view: ViewFrame,
+  item: LineItem | PointItem,
+  colour: string,
+): void {
+  for (const [style, width] of [
+    [PAPER, 5.5],
+    [colour, 2.5],
+  ] as const) {
+    context.strokeStyle = style
+    if (isLineItem(item)) {
+      trace(context, view, item.geometry.coordinates)
+      context.lineWidth = width
+      context.stroke()
+    } else ring(context, toPx(view, item.geometry.coordinates), 8, width)
+  }
 }
 
 interface Emphasis {

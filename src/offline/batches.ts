@@ -1,4 +1,5 @@
 import { composeEdits, editedId, toChanges, type ChangeSet, type Edit } from '@shared/changes/change-set'
+import { isSame } from '@shared/changes/same-value'
 
 /** Edits that wait to be sent as one change set. Once it has a `request` it is frozen: key and body were stored before
  *  the first sending, and every retry sends the same ones. */
@@ -60,17 +61,32 @@ export function advanceBase(
   })
 }
 
-/** Puts unsent batches on top of a revision, whatever was changed before it: somebody decided so. */
-export const rebase = (batches: readonly Batch[], revision: number): Batch[] =>
-  batches.map((batch) => (batch.request ? batch : { ...batch, base: revision }))
+/** What becomes of an item that two people changed: `before` as it is now, `after` as it was decided to be. */
+export type Decision = Edit
 
-/** Batches without the edits of some items; empty batches go. Frozen ones are left alone. */
-export function dropItems(batches: readonly Batch[], ids: ReadonlySet<string>): Batch[] {
-  return batches
-    .map((batch) =>
-      batch.request ? batch : { ...batch, edits: batch.edits.filter((edit) => !ids.has(editedId(edit))) },
-    )
-    .filter((batch) => batch.edits.length > 0)
+/** The refused first batch with what was decided on its items in conflict, put on top of a revision. What later batches
+ *  did to those items is part of the decision already. A later batch follows to the revision, unless somebody else
+ *  changed another of its items: that conflict has not been seen yet.
+ *  @param foreign ids of items that others changed */
+export function decideItems(
+  batches: readonly Batch[],
+  {
+    revision,
+    decisions,
+    foreign,
+  }: { revision: number; decisions: ReadonlyMap<string, Decision>; foreign: ReadonlySet<string> },
+): Batch[] {
+  const [first, ...rest] = batches.map((batch) => ({
+    ...batch,
+    edits: batch.edits.filter((edit) => !decisions.has(editedId(edit))),
+  }))
+  if (!first) return []
+  const decided = [...decisions.values()].filter(({ before, after }) => !isSame(before, after))
+  const settled = { ...first, base: revision, edits: [...first.edits, ...decided] }
+  const later = rest.map((batch) =>
+    batch.edits.some((edit) => foreign.has(editedId(edit))) ? batch : { ...batch, base: revision },
+  )
+  return [settled, ...later].filter((batch) => batch.edits.length > 0)
 }
 
 /** All ids that batches touch. */

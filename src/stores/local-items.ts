@@ -12,6 +12,11 @@ export class LocalItems {
     return this.shown.get(id)
   }
 
+  /** As the server has it, without the changes that wait. */
+  confirmedItem(id: string): Item | undefined {
+    return this.confirmed.get(id)
+  }
+
   all(): Item[] {
     return [...this.shown.values()]
   }

@@ -6,8 +6,7 @@ import {
   addEdits,
   advanceBase,
   countWaiting,
-  dropItems,
-  rebase,
+  decideItems,
   thawFirst,
   touchedIds,
   type Batch,
@@ -137,13 +136,15 @@ export class SheetExchange {
     this.follow()
   }
 
-  /** Settles a conflict. `theirs` drops this page's changes to the items in conflict; `mine` keeps them and sends them
-   *  on top of what the others did, as a new entry. */
-  async settle(choice: 'theirs' | 'mine', ids: readonly string[]): Promise<void> {
+  /** Settles a conflict: each of its items becomes what was decided, on top of what the others did, as a new entry.
+   *  Nothing is sent of an item that was decided to be as the others left it. */
+  async settle(decided: ReadonlyMap<string, Item | null>): Promise<void> {
     const touched = touchedIds(this.batches)
-    await this.keep(
-      choice === 'theirs' ? dropItems(this.batches, new Set(ids)) : rebase(this.batches, this.revision),
+    const decisions = new Map(
+      [...decided].map(([id, after]) => [id, { before: this.items.confirmedItem(id) ?? null, after }]),
     )
+    const foreign = new Set(this.foreignEntries.keys())
+    await this.keep(decideItems(this.batches, { revision: this.revision, decisions, foreign }))
     this.show(touched)
     this.retry()
   }

@@ -217,10 +217,20 @@ export const useSheetStore = defineStore('sheet', () => {
     return item ? changedSinceSentence(item, now?.exchange.foreignEntries.get(id) ?? []) : ''
   }
 
-  /** Settles a conflict. `theirs` drops this page's changes to the items in conflict; `mine` keeps them and sends them
-   *  on top of what the others did, as a new entry. */
-  const settleConflict = async (choice: 'theirs' | 'mine', ids: readonly string[]): Promise<void> =>
-    now?.exchange.settle(choice, ids)
+  /** An item as the server has it, without the changes of this page that wait. */
+  const confirmed = (id: string): Item | undefined => now?.exchange.items.confirmedItem(id)
+
+  /** Settles a conflict: each of its items becomes what was decided, on top of what the others did, as a new entry. */
+  async function settleConflict(decided: ReadonlyMap<string, Item | null>): Promise<CommitOutcome> {
+    const edits = [...decided].map(([id, after]) => ({ before: get(id) ?? null, after }))
+    const checked = checkEdits(
+      edits.filter(({ before, after }) => before ?? after),
+      get,
+    )
+    if (checked.outcome === 'refused') return checked
+    await now?.exchange.settle(decided)
+    return { outcome: 'done' }
+  }
 
   /** Gives up everything that waits, after a refusal that no retry can change. */
   async function discardWaiting(): Promise<void> {
@@ -257,6 +267,7 @@ export const useSheetStore = defineStore('sheet', () => {
     readOnly,
     mayEdit,
     get,
+    confirmed,
     all,
     ofKind,
     open,

@@ -3,10 +3,9 @@ import {
   addEdits,
   advanceBase,
   countWaiting,
-  dropItems,
+  decideItems,
   freezeFirst,
   messageOf,
-  rebase,
   thawFirst,
 } from '@/offline/batches'
 import { aLine } from '../../../support/sheet-items'
@@ -68,17 +67,40 @@ describe('batches of unsent edits', () => {
     const behind = advanceBase(batches, { ...to9, foreign: new Set([contact.id]) })
     expect(behind[0]?.base).toBe(7)
     expect(advanceBase(behind, { from: 9, to: 10, foreign: new Set() })[0]?.base).toBe(7)
-    expect(rebase(behind, 10)[0]?.base).toBe(10)
   })
 
   it('leaves the base of a frozen batch alone', () => {
     const frozen = freezeFirst(addEdits([], move), 'key')
     expect(advanceBase(frozen, { from: 7, to: 9, foreign: new Set() })).toEqual(frozen)
-    expect(rebase(frozen, 9)).toEqual(frozen)
   })
 
-  it('drops the edits of items that were given up, and a batch that has none left', () => {
-    expect(dropItems(addEdits([], move), new Set([contact.id]))).toEqual([])
+  it('drops the edits of items decided to be as the others left them, and a batch that has none left', () => {
+    const decisions = new Map([[contact.id, { before: contact, after: contact }]])
+    expect(decideItems(addEdits([], move), { revision: 9, decisions, foreign: new Set() })).toEqual([])
+  })
+
+  it('puts a decision in the place of all that waits for its item, on top of the revision', () => {
+    const renamed = { ...moved, properties: { ...moved.properties, name: 'Skua' } }
+    const behind = addEdits(freezeFirst(addEdits([], move), 'key'), {
+      ...move,
+      edits: [{ before: moved, after: renamed }],
+    })
+    const decisions = new Map([[contact.id, { before: contact, after: renamed }]])
+    const decided = decideItems(thawFirst(behind), { revision: 9, decisions, foreign: new Set([contact.id]) })
+    expect(decided).toEqual([
+      { base: 9, edits: [{ before: contact, after: renamed }], labels: [move.label], request: null },
+    ])
+  })
+
+  it('leaves a later batch behind whose other conflict nobody has seen yet', () => {
+    const other = { ...contact, id: '00000000-0000-4000-8000-00000000ffff' }
+    const drewOther = { ...drew, edits: [{ before: null, after: other }] }
+    const both = thawFirst(addEdits(freezeFirst(addEdits([], move), 'key'), drewOther))
+    const decisions = new Map([[contact.id, { before: contact, after: moved }]])
+    const basesWith = (foreign: string[]) =>
+      decideItems(both, { revision: 9, decisions, foreign: new Set(foreign) }).map(({ base }) => base)
+    expect(basesWith([contact.id])).toEqual([9, 9])
+    expect(basesWith([contact.id, other.id])).toEqual([9, 7])
   })
 
   it('counts equal gestures and keeps the message within what the ledger takes', () => {

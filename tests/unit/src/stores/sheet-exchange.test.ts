@@ -224,7 +224,7 @@ describe('other people’s changes', () => {
 
   it('stand when theirs is chosen, and nothing is sent', async () => {
     const { exchange, id } = await inConflict()
-    await exchange.settle('theirs', [id])
+    await exchange.settle(new Map([[id, exchange.items.confirmedItem(id) ?? null]]))
     await settle()
     expect(noteOf(exchange.items.get(id))).toBe('theirs')
     expect(exchange.saved).toEqual({ state: 'saved', revision: 8, waiting: 0 })
@@ -233,11 +233,20 @@ describe('other people’s changes', () => {
 
   it('are followed by the own version as a new entry when mine is chosen', async () => {
     const { exchange, id } = await inConflict()
-    await exchange.settle('mine', [id])
+    await exchange.settle(new Map([[id, exchange.items.get(id) ?? null]]))
     await settle()
     expect(ledger.received[1]?.body.base).toBe(8)
     expect(ledger.received[1]?.key).not.toBe(ledger.received[0]?.key)
     expect(noteOf(ledger.items.get(id))).toBe('mine')
+    expect(exchange.saved).toEqual({ state: 'saved', revision: 9, waiting: 0 })
+  })
+
+  it('are joined with the own ones where a combination is decided', async () => {
+    const { exchange, id } = await inConflict()
+    const theirs = ledger.items.get(id) as ItemOf<'contact'>
+    await exchange.settle(new Map([[id, { ...theirs, properties: { ...theirs.properties, name: 'Skua' } }]]))
+    await settle()
+    expect(ledger.items.get(id)?.properties).toMatchObject({ note: 'theirs', name: 'Skua' })
     expect(exchange.saved).toEqual({ state: 'saved', revision: 9, waiting: 0 })
   })
 

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { Problem } from '@shared/api/problems'
-import { conflictsOf, differencesOf } from '@/components/compile/conflicts'
+import type { Item } from '@shared/items/item'
+import { combine, conflictsOf, rowsOf } from '@/components/compile/conflicts'
 import { aLine, aPoint } from '../../../../support/sheet-items'
 
 const problem = (slug: string, items: unknown[]): Problem => ({
@@ -14,34 +15,60 @@ const problem = (slug: string, items: unknown[]): Problem => ({
 })
 const base = aPoint('attitude', [286_000, 5_280_000], { strike: 45, dip: 40 })
 const withDip = (dip: number) => ({ ...base, properties: { ...base.properties, dip } })
+const line = aLine('contact', [[0, 0], [100, 0], [200, 0]], {}) // prettier-ignore
+const bent: Item = { ...line, geometry: { ...line.geometry, coordinates: [[0, 0], [100, 5], [200, 0]] } } // prettier-ignore
+const named: Item = { ...line, properties: { ...line.properties, name: 'Skua' } }
 
 describe('a conflict', () => {
-  it('names each field with what both sides have', () => {
-    const conflict = { id: base.id, base, theirs: withDip(53), yours: withDip(48) }
-    expect(conflictsOf(problem('item-conflict', [conflict])).map(differencesOf)).toEqual([
-      [{ what: 'dip', theirs: '53', yours: '48' }],
-    ])
-  })
-
-  it('says what each did to the line, apart from other fields', () => {
-    const line = aLine('contact', [[0, 0], [100, 0], [200, 0]], {}) // prettier-ignore
-    const theirs = { ...line, geometry: { ...line.geometry, coordinates: [[0, 0], [100, 5], [200, 0]] as [number, number][] } } // prettier-ignore
-    const yours = { ...line, properties: { ...line.properties, name: 'Skua' } }
-    expect(differencesOf({ id: line.id, base: line, theirs, yours })).toEqual([
-      { what: 'line', theirs: 'moved 1 vertex of contact', yours: 'as it was' },
-      { what: 'name', theirs: 'none', yours: 'Skua' },
-    ])
-  })
-
-  it('says that one side removed the item', () => {
-    expect(differencesOf({ id: base.id, base, theirs: null, yours: withDip(48) })).toEqual([
-      { what: 'item', theirs: 'removed 1 attitude', yours: 'dip of attitude: 40 → 48' },
+  it('takes both sides as they are now, not as they were when it was refused', () => {
+    const sides = { theirs: () => withDip(53), mine: () => withDip(48) }
+    const stale = [{ id: base.id, base, theirs: withDip(50), yours: withDip(41) }]
+    const [conflict] = conflictsOf(problem('item-conflict', stale), sides)
+    expect(conflict && rowsOf(conflict)).toEqual([
+      { field: { property: 'dip' }, what: 'dip', theirs: '53', mine: '48' },
     ])
   })
 
   it('is none for another problem', () => {
-    expect(conflictsOf(problem('wrong-state', [{ id: base.id, base, theirs: null, yours: null }]))).toEqual(
-      [],
-    )
+    const sides = { theirs: () => undefined, mine: () => base }
+    expect(conflictsOf(problem('wrong-state', [{ id: base.id, base }]), sides)).toEqual([])
+  })
+
+  it('says what each did to the line, apart from other fields, and who alone changed what', () => {
+    expect(rowsOf({ id: line.id, base: line, theirs: bent, mine: named })).toEqual([
+      {
+        field: 'geometry',
+        what: 'line',
+        theirs: 'moved 1 vertex of contact',
+        mine: 'as it was',
+        changedBy: 'theirs',
+      },
+      { field: { property: 'name' }, what: 'name', theirs: 'none', mine: 'Skua', changedBy: 'mine' },
+    ])
+  })
+
+  it('says that one side removed the item', () => {
+    expect(rowsOf({ id: base.id, base, theirs: null, mine: withDip(48) })).toEqual([
+      { field: 'item', what: 'item', theirs: 'removed 1 attitude', mine: 'dip of attitude: 40 → 48' },
+    ])
+  })
+})
+
+describe('the combination', () => {
+  const conflict = { id: line.id, base: line, theirs: bent, mine: named }
+
+  it('has every row from the side that was chosen', () => {
+    expect(combine(conflict, (row) => row.changedBy ?? 'mine')).toEqual({
+      ...named,
+      geometry: bent.geometry,
+    })
+    expect(combine(conflict, () => 'mine')).toEqual(named)
+    expect(combine(conflict, () => 'theirs')).toEqual(bent)
+  })
+
+  it('removes the item, or keeps it, as a whole', () => {
+    const removed = { id: line.id, base: line, theirs: null, mine: named }
+    expect(combine(removed, () => 'theirs')).toBeNull()
+    expect(combine(removed, () => 'mine')).toEqual(named)
   })
 })
