@@ -81,7 +81,7 @@ export function positionFault(position: FilePosition): string | undefined {
   if (Math.abs(lon) <= 90 && Math.abs(lat) <= 180) {
     return `A latitude of ${lat}° is beyond 90°: longitude and latitude seem to be exchanged.`
   }
-  return `These are not degrees: ${positionText(position)}; the file seems to be in a projected system.`
+  return `These are not degrees: ${positionText(position)}; the file seems to be in a projected system. Save it in WGS 84.`
 }
 
 const noLength = (value: string, reason: string): Placed<never> => ({

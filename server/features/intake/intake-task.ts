@@ -4,13 +4,20 @@ import type { Mapping } from '@shared/intake/mapping'
 import type { IntakePreview } from '@shared/api/intake'
 import { applyMapping, countByKind, type Applied } from '@shared/intake/apply'
 import { summarizeColumns } from '@shared/intake/columns'
-import { positionFault, sheetGround } from '@shared/intake/place'
+import { sheetGround } from '@shared/intake/place'
 import { toPreview } from '@shared/intake/preview'
 import { proposeMapping } from '@shared/intake/propose'
-import { hasLines, hasPoints, type FilePosition, type IntakeRecord } from '@shared/intake/records'
+import { hasLines, hasPoints } from '@shared/intake/records'
 import type { XY } from '@shared/units'
 import { readFieldFile } from './readers/read-file'
-import type { AsksCrs, FileCrs, FileRead, Unreadable } from './readers/read-outcome'
+import { findPlaces, type Places } from './places'
+import {
+  unreadable,
+  type AsksCrs,
+  type FileCrs,
+  type FileRead,
+  type Unreadable,
+} from './readers/read-outcome'
 
 /** A field file as a task is given it. */
 export interface TaskFile {
@@ -40,7 +47,7 @@ export interface FileSummary {
   lines: number
   others: number
   columns: IntakeColumn[]
-  extent: [west: number, south: number, east: number, north: number] | null
+  extent: Places['extent']
   notes: string[]
   proposal: Mapping
   proposalNotes: ProposalNote[]
@@ -59,7 +66,7 @@ export function runTask(task: IntakeTask): TaskAnswers[IntakeTask['task']] {
   const { bytes, name, crs } = task.file
   const read = readFieldFile(bytes, name, crs)
   if (read.outcome !== 'read') return read
-  if (task.task === 'read') return { outcome: 'summary', summary: summarize(read) }
+  if (task.task === 'read') return readOf(read)
   const from = crs ? `EPSG:${crs.srid}, by way of WGS 84,` : undefined
   const ground = sheetGround(task.sheet.crs, task.sheet.neatline, from)
   const applied = applyMapping(read.records, name, { mapping: task.mapping, ground, newId: randomUUID })
@@ -68,7 +75,16 @@ export function runTask(task: IntakeTask): TaskAnswers[IntakeTask['task']] {
     : { outcome: 'applied', applied, byKind: countByKind(applied.items) }
 }
 
-function summarize({ reader, records, notes }: FileRead): FileSummary {
+/** A file whose every position is impossible is in another system, or broken: nothing could ever be taken in. */
+function readOf(read: FileRead): TaskAnswers['read'] {
+  const places = findPlaces(read.records)
+  if (places.extent === null && places.faulty > 0) {
+    return unreadable(`No position in it is a longitude and latitude in degrees. ${places.example}`)
+  }
+  return { outcome: 'summary', summary: summarize(read, places) }
+}
+
+function summarize({ reader, records, notes }: FileRead, places: Places): FileSummary {
   const columns = summarizeColumns(records)
   const points = records.filter(hasPoints).length
   const lines = records.filter(hasLines).length
@@ -81,43 +97,14 @@ function summarize({ reader, records, notes }: FileRead): FileSummary {
     lines,
     others,
     columns,
-    ...extentAndNotes(records, notes),
+    extent: places.extent,
+    notes: [...notes, ...placeNotes(places)],
     proposal: mapping,
     proposalNotes,
   }
 }
 
-/** Extent of what lies in degrees; positions that do not are counted and said. */
-function extentAndNotes(
-  records: readonly IntakeRecord[],
-  notes: readonly string[],
-): Pick<FileSummary, 'extent' | 'notes'> {
-  const extent: NonNullable<FileSummary['extent']> = [Infinity, Infinity, -Infinity, -Infinity]
-  let faulty = 0
-  let example = ''
-  for (const position of positionsOf(records)) {
-    const fault = positionFault(position)
-    if (fault) {
-      faulty += 1
-      example ||= fault
-    } else widen(extent, position)
-  }
-  const remark = faulty === 0 ? [] : [`${faulty} positions are not in degrees. ${example}`]
-  return { extent: Number.isFinite(extent[0]) ? extent : null, notes: [...notes, ...remark] }
-}
-
-function* positionsOf(records: readonly IntakeRecord[]): Generator<FilePosition> {
-  for (const { parts } of records) {
-    for (const part of parts) {
-      if (part.form === 'point') yield part.position
-      else if (part.form === 'line') yield* part.positions
-    }
-  }
-}
-
-function widen(extent: NonNullable<FileSummary['extent']>, [lon = NaN, lat = NaN]: FilePosition): void {
-  extent[0] = Math.min(extent[0], lon)
-  extent[1] = Math.min(extent[1], lat)
-  extent[2] = Math.max(extent[2], lon)
-  extent[3] = Math.max(extent[3], lat)
+function placeNotes({ faulty, example }: Places): string[] {
+  if (faulty === 0) return []
+  return [`${faulty} ${faulty === 1 ? 'position is' : 'positions are'} not in degrees. ${example}`]
 }
