@@ -11,6 +11,7 @@ type Visitor = DemoPerson | 'reader'
 
 /** Every page, with something that is there once it is complete. */
 const places: { who: Visitor; path: string; shows: string }[] = [
+  { who: 'reader', path: '/', shows: 'Catalogue' },
   { who: 'reader', path: '/catalogue', shows: 'Catalogue' },
   { who: 'reader', path: '/sign-in', shows: 'Sign in' },
   { who: 'reader', path: '/problems/item-conflict', shows: 'Someone else changed the same items' },
