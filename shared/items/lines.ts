@@ -36,8 +36,8 @@ export const faultPropertiesSchema = z
   })
   .refine((fault) => fault.type !== 'rotational' || fault.dip === null, {
     message:
-      'A rotational fault has no dip of its own here: its downthrown side changes along it, so a dip toward that side would ' +
-      'say two things. Clear the dip.',
+      'A rotational fault takes no dip: its downthrown side changes along it, so that a dip toward that side would say two ' +
+      'things. Clear the dip first.',
     path: ['dip'],
   })
 export type FaultProperties = z.infer<typeof faultPropertiesSchema>

@@ -1,6 +1,5 @@
-import { foldWords, type FoldForm } from '../items/lines'
 import type { AttitudeConvention } from '../items/points'
-import type { Azimuth, Degrees } from '../units'
+import type { Degrees } from '../units'
 import { azimuthFigure, compassWords } from './compass'
 import { azimuthFor, dipDirectionOf, type Plane } from './plane'
 
@@ -34,16 +33,6 @@ export function describeAttitude(plane: Plane & PlaneTraits): string {
   const toward = dipDirectionOf(plane.strike)
   const dip = `dips ${bareFigure(plane.dip)}° toward ${azimuthFigure(toward)}° (${compassWords(toward)})`
   return `${strike}, ${dip}${overturned}`
-}
-
-/** A fold and its axis in words: `Anticline, plunging 21° toward 028°`; the form alone where no plunge is stated. */
-export function describeAxis(form: FoldForm, plunge: Degrees | null, trend: Azimuth | null): string {
-  const words = foldWords[form]
-  const name = words.charAt(0).toUpperCase() + words.slice(1)
-  if (plunge === null || trend === null) return name
-  if (plunge === 0) return `${name}, axis horizontal, trending ${azimuthFigure(trend)}°`
-  if (plunge === 90) return `${name}, axis vertical`
-  return `${name}, plunging ${bareFigure(plunge)}° toward ${azimuthFigure(trend)}°`
 }
 
 const bareFigure = (value: Degrees): string => String(Math.round(value * 10) / 10)

@@ -8,7 +8,10 @@ import { CAUTION } from '@shared/sheet-face/caution'
 import { unitsById } from '@shared/sheet-face/compose-face'
 import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import type { EditionStatement } from '@shared/sheet-face/edition-statement'
-import { describeAttitude, describeAxis } from '@shared/structure/attitude-words'
+import { describeAttitude } from '@shared/structure/attitude-words'
+import { describeFault } from '@shared/structure/fault-words'
+import { describeFold } from '@shared/structure/fold-words'
+import { sideWords, type ConvergenceAt } from '@shared/structure/line-side'
 import { describeLineation } from '@shared/structure/lineation-words'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
 import type { LonLat, XY } from '@shared/units'
@@ -31,7 +34,7 @@ type UnitOf = (id: string | null) => UnitProperties | undefined
 /** A sheet's data as GeoJSON (RFC 7946): WGS 84 longitude and latitude, every line and point with its properties and what
  *  it is in words, every unit area, and beside the features the sheet, the edition, the legend and the caution. */
 export async function sheetGeoJson(data: SheetData): Promise<string> {
-  const { toLonLat } = sheetProjection(data.sheet.crs.proj4)
+  const { toLonLat, convergenceAt } = sheetProjection(data.sheet.crs.proj4)
   const place = (xy: XY): LonLat => roundLonLat(toLonLat(xy))
   const units = unitsById(data.items)
   const unitOf: UnitOf = (id) => (id === null ? undefined : units.get(id))
@@ -39,7 +42,7 @@ export async function sheetGeoJson(data: SheetData): Promise<string> {
     ...data.faces.map((face, index) => () => faceFeature(face, index, place, unitOf)),
     ...data.items
       .filter((item) => item.geometry !== null)
-      .map((item) => () => itemFeature(item, place, unitOf)),
+      .map((item) => () => itemFeature(item, { place, convergenceAt }, unitOf)),
   ]
   const written: string[] = []
   for (const [index, feature] of features.entries()) {
@@ -69,13 +72,19 @@ function members({ sheet, items, edition }: SheetData, units: ReadonlyMap<string
       releasedAt: edition.released?.at ?? null,
       approvedBy: edition.released?.approvedBy ?? null,
     },
-    directions: 'Strikes and trends are degrees clockwise from true north, strikes by the right-hand rule.',
+    directions:
+      'Strikes and trends are degrees clockwise from true north, strikes by the right-hand rule. The side of a fault or ' +
+      'fold is left or right of its line, seen along its coordinates.',
     legend: [...units].map(([id, unit]) => ({ id, ...unit })).toSorted((a, b) => a.rank - b.rank),
     caution: CAUTION,
   }
 }
 
-function itemFeature(item: Item, place: (xy: XY) => LonLat, unitOf: UnitOf): object {
+function itemFeature(
+  item: Item,
+  { place, convergenceAt }: { place: (xy: XY) => LonLat; convergenceAt: ConvergenceAt },
+  unitOf: UnitOf,
+): object {
   const unit = item.kind === 'unit-label' ? unitOf(item.properties.unit) : undefined
   return {
     type: 'Feature',
@@ -83,7 +92,7 @@ function itemFeature(item: Item, place: (xy: XY) => LonLat, unitOf: UnitOf): obj
     geometry: toLonLatGeometry(item, place),
     properties: {
       kind: item.kind,
-      words: wordsOf(item, unit),
+      words: wordsOf(item, unit, convergenceAt),
       ...item.properties,
       ...(item.kind === 'unit-label' ? { unitLabel: unit?.label ?? null, unitName: unit?.name ?? null } : {}),
     },
@@ -98,15 +107,19 @@ function toLonLatGeometry({ geometry }: Item, place: (xy: XY) => LonLat): object
 }
 
 /** What an item is, as one would say it. */
-function wordsOf(item: Item, unit: UnitProperties | undefined): string {
+function wordsOf(item: Item, unit: UnitProperties | undefined, convergenceAt: ConvergenceAt): string {
   switch (item.kind) {
     case 'attitude':
       return describeAttitude(item.properties)
     case 'lineation':
       return describeLineation(item.properties)
     case 'axial-trace': {
-      const { form, plunge, trend } = item.properties
-      return describeAxis(form, plunge, trend)
+      const side = sideWords(item.geometry.coordinates, item.properties.side, convergenceAt)
+      return describeFold(item.properties, side)
+    }
+    case 'fault': {
+      const words = describeFault(item.properties, item.geometry.coordinates, convergenceAt)
+      return `${words}, ${item.properties.locationConfidence}`
     }
     case 'unit-label':
       return unit ? `${unit.name} (${unit.label})` : 'Unit label without a unit'

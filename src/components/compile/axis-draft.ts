@@ -1,11 +1,14 @@
 import type { ItemOf } from '@shared/items/item'
+import { doublyPlunging, type DoublyPlunging } from '@shared/items/lines'
 import { plungeAgainstTrace, traceTrends } from '@shared/structure/axial-trace'
 import { azimuthFigure } from '@shared/structure/compass'
 import { drawItem } from '@shared/symbols/draw-item'
 import type { DisplayList } from '@shared/symbols/display-list'
+import { drawMark, lineMarks } from '@shared/symbols/line-marks'
 import { boundsOf } from '@shared/symbols/place-marks'
 import type { Box } from '@shared/sheet-face/page-layout'
 import { normalizeAzimuth, type Azimuth, type Degrees, type XY } from '@shared/units'
+import type { SampleOption } from '@/components/common/location-samples'
 
 type AxialTrace = ItemOf<'axial-trace'>
 type ConvergenceAt = (xy: XY) => Degrees
@@ -13,12 +16,13 @@ type ConvergenceAt = (xy: XY) => Degrees
 /** A number as typed, or why it is none. */
 export type Typed = { outcome: 'number'; value: Degrees } | { outcome: 'refused'; reason: string }
 
-/** A plunge as typed: degrees below horizontal, 0–90. */
-export function parsePlunge(text: string): Typed {
+/** A plunge or dip as typed: degrees below horizontal, 0–90.
+ *  @param what it is, to begin a sentence: `A plunge` */
+export function parseInclination(text: string, what: string): Typed {
   const value = parseDegrees(text)
   return value !== undefined && value >= 0 && value <= 90
     ? { outcome: 'number', value }
-    : { outcome: 'refused', reason: 'A plunge is measured down from the horizontal: 0 to 90 degrees.' }
+    : { outcome: 'refused', reason: `${what} is measured down from the horizontal: 0 to 90 degrees.` }
 }
 
 /** A trend as typed: azimuth from true north, 0–360, that runs along the trace toward one of its ends. */
@@ -37,6 +41,25 @@ function parseDegrees(text: string): Degrees | undefined {
   const match = /^(\d{1,3}(?:[.,]\d+)?)\s*°?$/.exec(text.trim())
   return match?.[1] === undefined ? undefined : Number(match[1].replace(',', '.'))
 }
+
+const DOUBLY_MARKS: Record<DoublyPlunging, string> = {
+  no: 'mark.plunge',
+  outward: 'mark.plunge-outward',
+  inward: 'mark.plunge-inward',
+}
+const DOUBLY_TITLES: Record<DoublyPlunging, string> = {
+  no: 'Plunging one way, or not stated',
+  outward: 'Plunging both ways from a culmination',
+  inward: 'Plunging both ways into a depression',
+}
+const SAMPLE = { width: 15, height: 6 }
+
+/** The ways an axis may go down along its trace, as drawn samples. */
+export const doublyOptions: readonly SampleOption<DoublyPlunging>[] = doublyPlunging.map((value) => {
+  const mark = lineMarks.find(({ id }) => id === DOUBLY_MARKS[value])
+  const list = mark ? drawMark(mark, SAMPLE).filter(({ mark: kind }) => kind !== 'text') : []
+  return { value, title: DOUBLY_TITLES[value], list, box: { x: 0, y: 0, ...SAMPLE } }
+})
 
 /** One of the two ways an axis may plunge along its trace. */
 export interface TrendProposal {
@@ -86,6 +109,8 @@ function picture(
     identity: 'certain',
     plunge: Math.max(1, plunge),
     trend,
+    doubly: 'no',
+    otherPlunge: null,
   } as const
   return drawItem({ ...item, properties }, { origin, mmPerMetre, convergenceAt }).filter(
     (mark) => mark.mark !== 'text',

@@ -1,13 +1,15 @@
-import { gridAzimuth, gridLength } from '@shared/geometry/bearings'
+import { gridLength } from '@shared/geometry/bearings'
 import type { Item, ItemOf, LineItem } from '@shared/items/item'
-import type { FaultProperties } from '@shared/items/lines'
 import type { UnitProperties } from '@shared/items/legend'
-import { describeAttitude, describeAxis } from '@shared/structure/attitude-words'
-import { azimuthFigure, compassWords } from '@shared/structure/compass'
+import { describeAttitude } from '@shared/structure/attitude-words'
+import { azimuthFigure } from '@shared/structure/compass'
+import { describeFault } from '@shared/structure/fault-words'
+import { describeFold } from '@shared/structure/fold-words'
+import { sideWords } from '@shared/structure/line-side'
 import { describeLineation } from '@shared/structure/lineation-words'
 import { placeSymbolOf } from '@shared/symbols/draw-place'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
-import { normalizeAzimuth, type Azimuth, type Degrees, type Metres, type XY } from '@shared/units'
+import type { Degrees, Metres, XY } from '@shared/units'
 
 /** What the words of an item need beside it. */
 export interface WordsContext {
@@ -23,11 +25,9 @@ export function itemTitle(item: Item, context: WordsContext): string {
     case 'other-line':
       return questioned(item, legendEntryOf(item).title)
     case 'fault':
-      return questioned(item, faultTitle(item, context))
-    case 'axial-trace': {
-      const { form, plunge, trend } = item.properties
-      return questioned(item, describeAxis(form, plunge, trend))
-    }
+      return questioned(item, located(item, faultTitle(item, context)))
+    case 'axial-trace':
+      return questioned(item, located(item, foldTitle(item, context)))
     case 'attitude':
       return attitudeTitle(item)
     case 'lineation':
@@ -67,41 +67,17 @@ function placeTitle(item: ItemOf<'station'>): string {
 
 const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)
 
-const faultNames: Record<FaultProperties['type'], string> = {
-  unspecified: 'Fault',
-  normal: 'Normal fault',
-  reverse: 'Reverse fault',
-  thrust: 'Thrust',
-  'left-lateral': 'Left-lateral fault',
-  'right-lateral': 'Right-lateral fault',
-  rotational: 'Rotational fault',
+const located = (item: LineItem, title: string): string => {
+  const { locationConfidence } = item.properties
+  return locationConfidence === 'certain' ? title : `${title}, ${locationConfidence}`
 }
 
-/** What the decorated side of a fault is, where its type has one. */
-export const sideMeanings: Partial<Record<FaultProperties['type'], string>> = {
-  normal: 'down to the',
-  reverse: 'upper plate to the',
-  thrust: 'upper plate to the',
+function faultTitle({ properties, geometry }: ItemOf<'fault'>, { convergenceAt }: WordsContext): string {
+  return describeFault(properties, geometry.coordinates, convergenceAt)
 }
 
-function faultTitle(item: ItemOf<'fault'>, context: WordsContext): string {
-  const { type, locationConfidence } = item.properties
-  const meaning = sideMeanings[type]
-  const side = meaning ? `, ${meaning} ${compassWords(sideAzimuth(item, context))}` : ''
-  const location = locationConfidence === 'certain' ? '' : `, ${locationConfidence}`
-  return `${faultNames[type]}${side}${location}`
-}
-
-/** Azimuth from true north toward the decorated side of a fault, square to the line from its one end to the other. */
-export function sideAzimuth(
-  item: ItemOf<'fault'>,
-  { convergenceAt }: Pick<WordsContext, 'convergenceAt'>,
-): Azimuth {
-  const line = item.geometry.coordinates
-  const [first, last] = [line[0], line.at(-1)]
-  if (!first || !last) return 0
-  const along = gridAzimuth(first, last) + convergenceAt(first)
-  return normalizeAzimuth(along + (item.properties.side === 'right' ? 90 : -90))
+function foldTitle({ properties, geometry }: ItemOf<'axial-trace'>, { convergenceAt }: WordsContext): string {
+  return describeFold(properties, sideWords(geometry.coordinates, properties.side, convergenceAt))
 }
 
 /** The first facts beneath the title: proper name, length, station. */

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { describeAttitude, describeAxis, formatAttitude } from '@shared/structure/attitude-words'
+import { describeAttitude, formatAttitude } from '@shared/structure/attitude-words'
 import type { Plane } from '@shared/structure/plane'
 
 const plane = (strike: number | null, dip: number, overturned = false): Plane => ({ strike, dip, overturned })
@@ -39,16 +39,5 @@ describe('an attitude in words', () => {
       const nearest = names[Math.round(dipDirection / 45) % 8]
       expect(describeAttitude(plane((dipDirection + 270) % 360, 30))).toContain(`(${nearest})`)
     }
-  })
-})
-
-describe('an axis in words', () => {
-  it('says which way it plunges', () =>
-    expect(describeAxis('anticline', 21, 28)).toBe('Anticline, plunging 21° toward 028°'))
-
-  it('says what is known when there is no plunge', () => {
-    expect(describeAxis('overturned-syncline', null, null)).toBe('Overturned syncline')
-    expect(describeAxis('synform', 0, 28)).toBe('Synform, axis horizontal, trending 028°')
-    expect(describeAxis('syncline', 90, 28)).toBe('Syncline, axis vertical')
   })
 })

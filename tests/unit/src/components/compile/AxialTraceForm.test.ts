@@ -2,6 +2,7 @@ import { mount } from '@vue/test-utils'
 import { createPinia, setActivePinia } from 'pinia'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import type { ItemOf } from '@shared/items/item'
+import { foldForms } from '@shared/items/lines'
 import AxialTraceForm from '@/components/compile/AxialTraceForm.vue'
 import { useSheetFake } from '../../../../support/open-sheet-fake'
 import { aLine } from '../../../../support/sheet-items'
@@ -111,8 +112,63 @@ describe('the plunge of an axial trace', () => {
 describe('the form', () => {
   it('is chosen among drawn samples', async () => {
     const { form, now } = open()
-    expect(form.get('[aria-label="Form of the fold"]').findAll('svg')).toHaveLength(5)
+    expect(form.get('[aria-label="Form of the fold"]').findAll('svg')).toHaveLength(foldForms.length)
     await form.get('input[value=syncline]').setValue(true)
     expect(now().properties.form).toBe('syncline')
+  })
+})
+
+describe('the side of a fold', () => {
+  it('is asked only of overturned folds and monoclines', async () => {
+    const item = trace()
+    const { form, now, refresh } = open(item)
+    expect(form.text()).not.toContain('Side')
+    await form.get('input[value=overturned-syncline]').setValue(true)
+    await refresh()
+    // The trace runs north-east, so that its right side is the south-east.
+    expect(form.text()).toContain('Limbs dip to the south-east (133°)')
+    await form.get('button').trigger('click')
+    expect(now().properties.side).toBe('left')
+    await refresh()
+    expect(form.text()).toContain('Limbs dip to the north-west (313°)')
+    await form.get('input[value=monocline-anticlinal-bend]').setValue(true)
+    await refresh()
+    expect(form.text()).toContain('Steep limb dips to the north-west (313°)')
+  })
+})
+
+describe('an axis that goes down both ways', () => {
+  const plunging = () => {
+    const item = trace()
+    return { ...item, properties: { ...item.properties, plunge: 21, trend: 43 } }
+  }
+
+  it('takes the plunge of its other half, toward the opposite trend', async () => {
+    const { form, now, refresh, type } = open(plunging())
+    await form.get('input[value=outward]').setValue(true)
+    await refresh()
+    await type('Toward 223°', '12')
+    expect(now().properties).toMatchObject({ doubly: 'outward', plunge: 21, trend: 43, otherPlunge: 12 })
+  })
+
+  it('forgets the other half when it goes down one way again, or the first plunge goes', async () => {
+    const item = plunging()
+    const both = { ...item, properties: { ...item.properties, doubly: 'inward' as const, otherPlunge: 12 } }
+    const first = open(both)
+    await first.form.get('input[value=no]').setValue(true)
+    expect(first.now().properties).toMatchObject({ doubly: 'no', otherPlunge: null, plunge: 21 })
+    const second = open(both)
+    await second.type('Plunge', '')
+    expect(second.now().properties).toMatchObject({ doubly: 'inward', plunge: null, otherPlunge: null })
+  })
+
+  it('refuses, in words, a second plunge before the first has its trend', async () => {
+    const { sheet, form, type, refresh } = open()
+    await form.get('input[value=inward]').setValue(true)
+    await refresh()
+    await type('Plunge', '21')
+    await type('Other half', '12')
+    expect(form.get('[role=alert]').text()).toContain('State the first plunge')
+    expect(sheet.committed).toHaveLength(1)
   })
 })
