@@ -58,7 +58,7 @@ function createApi(services: Services, { checkAnswers = false }: AppOptions): Ro
   mountAccounts(api, accounts, services.links, passport)
   mountAdministration(api, services.administration)
   mountSheets(api, services.sheets)
-  mountLedger(api, services.ledger, services.history)
+  mountLedger(api, services)
   mountFaces(api, services.faces)
   mountIntake(api, services.intake)
   mountReview(api, services.review)
@@ -111,7 +111,7 @@ function serveClient(folder: string) {
   page.use('/assets', assets, () => {
     throw problem('not-found', 'There is no such file.')
   })
-  page.get('/*path', (request, response, next) => {
+  page.get('/{*path}', (request, response, next) => {
     if (!request.accepts('html')) throw problem('not-found', 'There is nothing at this address.')
     response.set('Cache-Control', 'no-cache')
     response.sendFile('index.html', { root: folder }, (fault) => fault && next(fault))

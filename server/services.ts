@@ -13,8 +13,11 @@ import { ReleaseService } from './features/editions/release.service'
 import { FacesService } from './features/faces/faces.service'
 import { HealthService } from './features/health/health.service'
 import { IntakeService } from './features/intake/intake.service'
+import { ComparisonService } from './features/ledger/comparison.service'
 import { HistoryService } from './features/ledger/history.service'
 import { LedgerService } from './features/ledger/ledger.service'
+import { NamedRevisionsService } from './features/ledger/named-revisions.service'
+import { RestoreService } from './features/ledger/restore.service'
 import { handleReleases } from './features/review/review.jobs'
 import { ReviewService } from './features/review/review.service'
 import { SheetsService } from './features/sheets/sheets.service'
@@ -86,6 +89,9 @@ function createRooms(config: Config, dataSource: DataSource, log: Logger) {
     sheets,
     ledger,
     history,
+    names: new NamedRevisionsService(dataSource),
+    comparisons: new ComparisonService(dataSource, editions),
+    restores: new RestoreService(dataSource, ledger),
     faces,
     editions,
     intake: new IntakeService(dataSource, storage, ledger, sheets),

@@ -7,6 +7,7 @@ import { FaceBuildRow } from '../features/faces/face-build.entity'
 import { FaceRow } from '../features/faces/face.entity'
 import { IntakeRow } from '../features/intake/intake.entity'
 import { ItemVersionRow } from '../features/ledger/item-version.entity'
+import { NamedRevisionRow } from '../features/ledger/named-revision.entity'
 import { RevisionRow } from '../features/ledger/revision.entity'
 import { SubmissionRow } from '../features/review/submission.entity'
 import { SheetRow } from '../features/sheets/sheet.entity'
@@ -23,6 +24,7 @@ export const entities = [
   SheetRow,
   RevisionRow,
   ItemVersionRow,
+  NamedRevisionRow,
   FaceBuildRow,
   FaceRow,
   IntakeRow,

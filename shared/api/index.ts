@@ -1,5 +1,6 @@
 import * as accounts from './accounts'
 import * as catalogue from './catalogue'
+import * as comparisons from './comparisons'
 import type { Endpoint } from './endpoint'
 import * as events from './events'
 import * as faces from './faces'
@@ -8,10 +9,25 @@ import * as intake from './intake'
 import * as jobs from './jobs'
 import * as ledger from './ledger'
 import * as openapi from './openapi'
+import * as restores from './restores'
 import * as review from './review'
 import * as sheets from './sheets'
 
-const rooms = [health, accounts, sheets, ledger, faces, intake, review, jobs, events, catalogue, openapi]
+const rooms = [
+  health,
+  accounts,
+  sheets,
+  ledger,
+  comparisons,
+  restores,
+  faces,
+  intake,
+  review,
+  jobs,
+  events,
+  catalogue,
+  openapi,
+]
 
 const isEndpoint = (value: unknown): value is Endpoint =>
   typeof value === 'object' && value !== null && 'method' in value && 'path' in value && 'access' in value

@@ -40,6 +40,21 @@ export const problems = {
     title: 'Someone else changed the same items',
     todo: 'Compare both versions and choose.',
   },
+  'later-changes': {
+    status: 409,
+    title: 'Later changes would be undone',
+    todo: 'Look at the changes named here; go back further only if they may be undone too.',
+  },
+  'nothing-to-restore': {
+    status: 409,
+    title: 'Nothing would change',
+    todo: 'The sheet is already as it would be.',
+  },
+  'name-taken': {
+    status: 409,
+    title: 'This name is taken',
+    todo: 'Choose another name, or take it off the other revision first.',
+  },
   'wrong-state': {
     status: 409,
     title: 'The sheet is not in the state this needs',
@@ -80,6 +95,11 @@ export const problems = {
     status: 422,
     title: 'No record can be taken in',
     todo: 'Look at the reasons given, correct the mapping or the file.',
+  },
+  'cannot-restore': {
+    status: 422,
+    title: 'The sheet cannot go back like this',
+    todo: 'Change what is named here first, or restore less.',
   },
   'cannot-print': {
     status: 422,

@@ -22,14 +22,19 @@ export const pageSchema = z.strictObject({
 })
 export type Page = z.infer<typeof pageSchema>
 
+/** How an entry came about: with the sheet, by hand, from a field file, or by going back to an earlier state. */
+export const entryKinds = ['creation', 'edit', 'intake', 'restore'] as const
+
 export const ledgerEntrySchema = z
   .strictObject({
     revision: z.number().int(),
-    kind: z.enum(['creation', 'edit', 'intake']),
+    kind: z.enum(entryKinds),
     author: personSchema,
     at: timestamp,
     /** What the author wrote, or what changed in words. */
     message: z.string(),
+    /** What changed, in words made from the versions: "moved 3 contacts, dip of attitude 14: 35 → 53". */
+    what: z.string(),
     /** Items put and removed. */
     changed: z.number().int(),
   })

@@ -21,7 +21,7 @@ export interface PlaceChange {
   vertices: number
 }
 
-/** Properties that differ between two versions of one item, in the order of its schema. A version from before a property
+/** Properties that differ between two versions of one item, in the order of the later one. A version from before a property
  *  existed has its default, as wherever it is read. */
 export function changedFields(before: Item, after: Item): FieldChange[] {
   const [from, to] = [propertiesOf(before, after), propertiesOf(after, before)]

@@ -78,6 +78,7 @@ export class FakeLedger {
       author: people[who],
       at: '2026-12-01T09:00:00.000Z',
       message: body.message,
+      what: 'drew 1 contact',
       changed: body.changes.length,
     }
     this.entries.push(entry)

@@ -41,6 +41,19 @@ export async function findEdition(
   return row
 }
 
+/** The revision that an edition was made of, whatever its state. */
+export async function findEditionRevision(
+  em: EntityManager,
+  sheetId: string,
+  edition: number,
+): Promise<number | undefined> {
+  const [row] = await em.query<{ revision: number }[]>(
+    'SELECT revision FROM edition WHERE sheet_id = $1 AND number = $2',
+    [sheetId, edition],
+  )
+  return row?.revision
+}
+
 /** The latest edition of a sheet, whatever its state. */
 export async function findLatestEdition(
   em: EntityManager,

@@ -5,6 +5,7 @@ import { problem } from '../../platform/problem'
 import type { Storage } from '../../platform/storage'
 import {
   findEdition,
+  findEditionRevision,
   findLatestEdition,
   getStorageKey,
   selectEditions,
@@ -43,6 +44,11 @@ export class EditionsService {
     }
     const key = await getStorageKey(this.dataSource.manager, sheetNumber, edition, artefact.name)
     return { artefact, open: () => this.storage.open(key) }
+  }
+
+  /** Revision that an edition of a sheet was made of; undefined where there is no such edition. */
+  async findRevision(em: EntityManager, sheetId: string, edition: number): Promise<number | undefined> {
+    return findEditionRevision(em, sheetId, edition)
   }
 
   /** Number and revision of the latest edition of a sheet; undefined before the first. */

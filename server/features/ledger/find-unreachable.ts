@@ -2,6 +2,7 @@ import { findOutOfReach } from '@shared/geometry/system-reach'
 import { sheetProjection } from '@shared/geometry/projection'
 import type { Item } from '@shared/items/item'
 import type { XY } from '@shared/units'
+import { boundsOf, verticesOf, type Bounds } from './bounds'
 
 /** An item with a place that the sheet's projected system is not made for. */
 export interface Unreachable {
@@ -17,29 +18,17 @@ export function findUnreachable(items: readonly Item[], definition: string): Unr
   const projection = sheetProjection(definition)
   const isBeyond = (xy: XY): boolean =>
     findOutOfReach({ xy, lonLat: projection.toLonLat(xy) }, projection, definition) !== undefined
-  const isClear = (places: readonly XY[]): boolean => !cornersOf(places).some(isBeyond)
-  if (isClear(items.flatMap((item) => cornersOf(placesOf(item))))) return []
+  const isClear = (some: readonly Item[]): boolean => !cornersOf(boundsOf(some)).some(isBeyond)
+  if (isClear(items)) return []
   return items.flatMap((item) => {
-    const places = placesOf(item)
-    const at = isClear(places) ? undefined : places.find(isBeyond)
+    const at = isClear([item]) ? undefined : verticesOf(item).find(isBeyond)
     return at ? [{ id: item.id, at }] : []
   })
 }
 
-function placesOf({ geometry }: Item): readonly XY[] {
-  if (geometry === null) return []
-  return geometry.type === 'Point' ? [geometry.coordinates] : geometry.coordinates
-}
-
-function cornersOf(places: readonly XY[]): XY[] {
-  if (places.length === 0) return []
-  let [west, south, east, north] = [Infinity, Infinity, -Infinity, -Infinity]
-  for (const [x, y] of places) {
-    west = Math.min(west, x)
-    south = Math.min(south, y)
-    east = Math.max(east, x)
-    north = Math.max(north, y)
-  }
+function cornersOf(bounds: Bounds | undefined): XY[] {
+  if (!bounds) return []
+  const [west, south, east, north] = bounds
   return [
     [west, south],
     [east, south],

@@ -1,21 +1,18 @@
-import { isDeepStrictEqual } from 'node:util'
 import type { DataSource, EntityManager } from 'typeorm'
 import type { z } from 'zod'
 import type { Person } from '@shared/api/common'
-import type { itemVersionSchema } from '@shared/api/ledger'
+import type { itemVersionSchema, LedgerRow } from '@shared/api/ledger'
 import type { LedgerEntry } from '@shared/api/sheets'
 import type { Edit } from '@shared/changes/change-set'
 import type { Item } from '@shared/items/item'
 import { problem } from '../../platform/problem'
+import { selectEditsOf, selectTouchedIds } from './comparison.queries'
+import { selectAuthors, selectEntries, selectEntriesOf } from './entries.queries'
 import { selectVersions } from './history.queries'
-import {
-  latestRevision,
-  selectAuthors,
-  selectEntries,
-  selectEntriesOf,
-  selectItemsAt,
-  selectTouchedIds,
-} from './ledger.queries'
+import { requireReached } from './ledger-rules'
+import { latestRevision, selectItemsAt } from './ledger.queries'
+import { selectPage, type Listing } from './listing.queries'
+import { selectNamedRevisions } from './named-revisions.queries'
 
 /** What has changed on a sheet since a revision. */
 export interface ChangesSince {
@@ -49,7 +46,7 @@ export class HistoryService {
     const em = this.dataSource.manager
     const revision = await latestRevision(em, sheetId)
     requireReached(since, revision, 'since')
-    const touched = await selectTouchedIds(em, sheetId, since, revision)
+    const touched = await selectTouchedIds(em, { sheetId, from: since, to: revision })
     const put = await selectItemsAt(em, sheetId, revision, touched)
     const held = new Set(put.map((item) => item.id))
     const entries = await selectEntries(em, sheetId, { above: since, below: revision + 1 })
@@ -58,12 +55,8 @@ export class HistoryService {
 
   /** What differs between two revisions: items before and after, ordered by id. An item changed and changed back does not. */
   async differences(em: EntityManager, sheetId: string, from: number, to: number): Promise<Edit[]> {
-    const touched = await selectTouchedIds(em, sheetId, from, to)
-    const before = new Map((await selectItemsAt(em, sheetId, from, touched)).map((item) => [item.id, item]))
-    const after = new Map((await selectItemsAt(em, sheetId, to, touched)).map((item) => [item.id, item]))
-    return touched
-      .map((id): Edit => ({ before: before.get(id) ?? null, after: after.get(id) ?? null }))
-      .filter((edit) => !isDeepStrictEqual(edit.before, edit.after))
+    const span = { sheetId, from, to }
+    return selectEditsOf(em, span, await selectTouchedIds(em, span))
   }
 
   /** Everyone who wrote an entry after one revision and up to another, by name. */
@@ -79,11 +72,19 @@ export class HistoryService {
   /** A page of entries, newest first; `next` is what to ask for as `before`, null on the last page. */
   async listEntries(
     sheetId: string,
-    { before, limit }: { before?: number | undefined; limit: number },
-  ): Promise<{ entries: LedgerEntry[]; next: number | null }> {
-    const entries = await selectEntries(this.dataSource.manager, sheetId, { below: before, limit })
-    const last = entries.at(-1)
-    return { entries, next: last && last.revision > 1 ? last.revision : null }
+    listing: Listing,
+  ): Promise<{ entries: LedgerRow[]; next: number | null }> {
+    const em = this.dataSource.manager
+    const entries = await selectPage(em, sheetId, listing)
+    const revisions = entries.map((entry) => entry.revision)
+    const names = new Map(
+      (await selectNamedRevisions(em, sheetId, revisions)).map((named) => [named.revision, named]),
+    )
+    const last = entries.length === listing.limit ? entries.at(-1) : undefined
+    return {
+      entries: entries.map((entry) => ({ ...entry, name: names.get(entry.revision) ?? null })),
+      next: last && last.revision > 1 ? last.revision : null,
+    }
   }
 
   /** Every version of one item, newest first. */
@@ -98,10 +99,4 @@ export class HistoryService {
       return entry ? [{ ...version, entry }] : []
     })
   }
-}
-
-function requireReached(revision: number, latest: number, field: string): void {
-  if (revision <= latest) return
-  const detail = `The sheet is at revision ${latest}; revision ${revision} does not exist yet.`
-  throw problem('invalid-input', detail, { errors: [{ pointer: `/${field}`, detail }] })
 }

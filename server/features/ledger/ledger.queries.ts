@@ -1,7 +1,8 @@
 import type { EntityManager } from 'typeorm'
 import type { Person } from '@shared/api/common'
-import type { LedgerEntry, SheetState } from '@shared/api/sheets'
+import type { SheetState } from '@shared/api/sheets'
 import type { Item } from '@shared/items/item'
+import { personColumn } from './entries.queries'
 import { itemColumns, toItem, type ItemRow } from './item-row'
 
 /** A sheet whose row is locked until the transaction ends: nobody else can write to its ledger. */
@@ -25,50 +26,23 @@ export async function lockSheet(em: EntityManager, sheetId: string): Promise<Loc
   return row
 }
 
+/** Number of a sheet and the PROJ definition of its system. */
+export async function getSheetFrame(
+  em: EntityManager,
+  sheetId: string,
+): Promise<{ number: string; proj4: string }> {
+  const [row] = await em.query<{ number: string; proj4: string }[]>(
+    'SELECT number, proj4text AS proj4 FROM sheet JOIN spatial_ref_sys USING (srid) WHERE id = $1',
+    [sheetId],
+  )
+  if (!row) throw new RangeError(`There is no sheet ${sheetId}.`)
+  return row
+}
+
 export async function latestRevision(em: EntityManager, sheetId: string): Promise<number> {
   const [row] = await em.query<{ revision: number }[]>('SELECT revision FROM sheet WHERE id = $1', [sheetId])
   if (!row) throw new RangeError(`There is no sheet ${sheetId}.`)
   return row.revision
-}
-
-export interface NewEntry {
-  kind: LedgerEntry['kind']
-  authorId: string
-  message: string
-  changed: number
-  /** Now, unless given. */
-  at?: Date | undefined
-  call?: { key: string; bodyDigest: string; altered: string[] } | undefined
-}
-
-/** Writes the entry and moves the sheet to its number. */
-export async function insertEntry(
-  em: EntityManager,
-  sheet: LockedSheet,
-  number: number,
-  entry: NewEntry,
-  touchesFaces: boolean,
-): Promise<void> {
-  await em.query(
-    `INSERT INTO revision (sheet_id, number, kind, author_id, at, message, changed, change_key, body_digest, altered)
-     VALUES ($1, $2, $3, $4, coalesce($5, now()), $6, $7, $8, $9, $10)`,
-    [
-      sheet.id,
-      number,
-      entry.kind,
-      entry.authorId,
-      entry.at ?? null,
-      entry.message,
-      entry.changed,
-      entry.call?.key ?? null,
-      entry.call?.bodyDigest ?? null,
-      entry.call?.altered ?? [],
-    ],
-  )
-  await em.query(
-    `UPDATE sheet SET revision = $2, linework_revision = CASE WHEN $3 THEN $2 ELSE linework_revision END WHERE id = $1`,
-    [sheet.id, number, touchesFaces],
-  )
 }
 
 /** Ends the current versions of items: from this revision on they no longer hold. */
@@ -175,113 +149,5 @@ export async function countLabelsOfUnits(
        AND properties->>'unit' = ANY($2::text[]) AND item_id <> ALL($3::uuid[])
      GROUP BY 1`,
     [sheetId, units, except],
-  )
-}
-
-/** Ids that have a version begun or ended after one revision and up to another. */
-export async function selectTouchedIds(
-  em: EntityManager,
-  sheetId: string,
-  from: number,
-  to: number,
-): Promise<string[]> {
-  const rows = await em.query<{ id: string }[]>(
-    `SELECT item_id AS id FROM item_version WHERE sheet_id = $1 AND since > $2 AND since <= $3
-     UNION SELECT item_id FROM item_version WHERE sheet_id = $1 AND until > $2 AND until <= $3
-     ORDER BY id`,
-    [sheetId, from, to],
-  )
-  return rows.map((row) => row.id)
-}
-
-const personColumn = `json_build_object('id', account.id, 'name', account.name, 'initials', account.initials)`
-
-/** Columns that make a LedgerEntry from `revision` joined to `account`. */
-const entryColumns = `revision.number AS revision, revision.kind, ${personColumn} AS author, revision.at,
-  revision.message, revision.changed`
-
-type EntryRow = Omit<LedgerEntry, 'at'> & { at: Date }
-
-const toEntry = ({ revision, kind, author, at, message, changed }: EntryRow): LedgerEntry => ({
-  revision,
-  kind,
-  author,
-  at: at.toISOString(),
-  message,
-  changed,
-})
-
-/** Ledger entries, newest first: numbers above `above` and below `below`, at most `limit`. */
-export async function selectEntries(
-  em: EntityManager,
-  sheetId: string,
-  { above = 0, below, limit }: { above?: number; below?: number | undefined; limit?: number },
-): Promise<LedgerEntry[]> {
-  const rows = await em.query<EntryRow[]>(
-    `SELECT ${entryColumns} FROM revision JOIN account ON account.id = revision.author_id
-     WHERE sheet_id = $1 AND number > $2 AND number < coalesce($3::integer, 2147483647)
-     ORDER BY number DESC LIMIT $4`,
-    [sheetId, above, below ?? null, limit ?? null],
-  )
-  return rows.map(toEntry)
-}
-
-/** The entries with these numbers, by number. */
-export async function selectEntriesOf(
-  em: EntityManager,
-  sheetId: string,
-  numbers: number[],
-): Promise<Map<number, LedgerEntry>> {
-  const rows = await em.query<EntryRow[]>(
-    `SELECT ${entryColumns} FROM revision JOIN account ON account.id = revision.author_id
-     WHERE sheet_id = $1 AND number = ANY($2::integer[])`,
-    [sheetId, numbers],
-  )
-  return new Map(rows.map((row) => [row.revision, toEntry(row)]))
-}
-
-/** The newest entry of each sheet, by sheet id. */
-export async function selectLastEntries(
-  em: EntityManager,
-  sheetIds: string[],
-): Promise<Map<string, LedgerEntry>> {
-  const rows = await em.query<(EntryRow & { sheetId: string })[]>(
-    `SELECT sheet.id AS "sheetId", ${entryColumns} FROM sheet
-     JOIN revision ON revision.sheet_id = sheet.id AND revision.number = sheet.revision
-     JOIN account ON account.id = revision.author_id
-     WHERE sheet.id = ANY($1::uuid[])`,
-    [sheetIds],
-  )
-  return new Map(rows.map((row) => [row.sheetId, toEntry(row)]))
-}
-
-/** The entry that a call with this key wrote, if there was one. */
-export async function findEntryByKey(
-  em: EntityManager,
-  sheetId: string,
-  authorId: string,
-  key: string,
-): Promise<{ entry: LedgerEntry; bodyDigest: string; altered: string[] } | undefined> {
-  const [row] = await em.query<(EntryRow & { bodyDigest: string; altered: string[] })[]>(
-    `SELECT ${entryColumns}, body_digest AS "bodyDigest", altered
-     FROM revision JOIN account ON account.id = revision.author_id
-     WHERE sheet_id = $1 AND author_id = $2 AND change_key = $3`,
-    [sheetId, authorId, key],
-  )
-  return row && { entry: toEntry(row), bodyDigest: row.bodyDigest, altered: row.altered }
-}
-
-/** Everyone who wrote an entry after one revision and up to another, by name. */
-export async function selectAuthors(
-  em: EntityManager,
-  sheetId: string,
-  from: number,
-  to: number,
-): Promise<Person[]> {
-  return em.query(
-    `SELECT account.id, account.name, account.initials FROM account
-     WHERE id IN (SELECT author_id FROM revision WHERE sheet_id = $1 AND number > $2 AND number <= $3)
-     ORDER BY account.name, account.id`,
-    [sheetId, from, to],
   )
 }

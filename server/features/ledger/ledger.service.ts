@@ -1,7 +1,5 @@
 import { createHash } from 'node:crypto'
 import type { DataSource, EntityManager } from 'typeorm'
-import type { Role } from '@shared/api/accounts'
-import type { Person } from '@shared/api/common'
 import type { Provenance } from '@shared/api/ledger'
 import type { LedgerEntry } from '@shared/api/sheets'
 import type { Change, ChangeSet, Edit } from '@shared/changes/change-set'
@@ -10,40 +8,25 @@ import type { Item, ItemKind } from '@shared/items/item'
 import { snapItem } from '@shared/items/snap-item'
 import { announce } from '../../platform/announce'
 import { problem } from '../../platform/problem'
+import { boundsOf } from './bounds'
+import { changedId, findFaults, type SheetRows } from './check-changes'
+import { findEntryByKey, insertEntry, selectEntries } from './entries.queries'
 import {
-  changedId,
-  findConflicts,
-  findFaults,
-  isEditorsItem,
-  type Conflict,
-  type SheetRows,
-} from './check-changes'
-import { findUnreachable } from './find-unreachable'
-import {
-  closeVersions,
-  countLabelsOfUnits,
-  findEntryByKey,
-  findLatestVersions,
-  insertEntry,
-  insertVersions,
-  lockSheet,
-  selectCurrentItems,
-  selectEntries,
-  selectItemsAt,
-  type LockedSheet,
-} from './ledger.queries'
+  loadRows,
+  requireDrafting,
+  requireEditorForLegend,
+  requireNoConflict,
+  requireReached,
+  requireWithinSystem,
+  type Author,
+} from './ledger-rules'
+import { closeVersions, insertVersions, lockSheet, selectItemsAt, type LockedSheet } from './ledger.queries'
 
 export interface PostedRevision {
   revision: number
   entry: LedgerEntry
   /** Items stored otherwise than sent. */
   altered: Item[]
-}
-
-/** Who changes a sheet, and as what. */
-export interface Author {
-  person: Person
-  roles: readonly Role[]
 }
 
 /** An entry that the server writes: an intake, a creation, the demo. */
@@ -53,6 +36,16 @@ export interface ServerEntry {
   message?: string
   /** Now, unless given. */
   at?: Date
+  /** The call that asked for it, if one did. */
+  call?: Call
+}
+
+/** What a call that writes an entry is known again by. */
+export interface Call {
+  key: string
+  bodyDigest: string
+  /** Items stored otherwise than sent. */
+  altered: string[]
 }
 
 /** Kinds whose changes make faces stale. */
@@ -64,21 +57,33 @@ export class LedgerService {
 
   /** Takes in a change set: all or nothing, one entry. The same key with the same body gets the first answer again. */
   async post(sheetId: string, author: Author, key: string, changeSet: ChangeSet): Promise<PostedRevision> {
-    const bodyDigest = createHash('sha256').update(JSON.stringify(changeSet)).digest('hex')
-    return this.dataSource.transaction(async (em) => {
-      const sheet = await lockSheet(em, sheetId)
-      const known = await findEntryByKey(em, sheetId, author.person.id, key)
-      if (known) return this.repeatAnswer(em, sheetId, known, bodyDigest)
-      requireDrafting(sheet)
+    return this.once(sheetId, author, { key, body: changeSet }, async (em, sheet, call) => {
       const { changes, altered } = snapChanges(changeSet.changes)
       const rows = await this.check(em, sheet, author, { ...changeSet, changes })
       const edits = changes.map((change) => toEdit(change, rows))
       const entry = await this.append(em, sheet, author.person.id, edits, {
         kind: 'edit',
         message: changeSet.message,
-        call: { key, bodyDigest, altered: altered.map((item) => item.id) },
+        call: { ...call, altered: altered.map((item) => item.id) },
       })
       return { revision: entry.revision, entry, altered }
+    })
+  }
+
+  /** Runs what writes one entry of a drafting sheet, its row locked; or answers as the first call with this key did. */
+  async once(
+    sheetId: string,
+    author: Author,
+    { key, body }: { key: string; body: unknown },
+    write: (em: EntityManager, sheet: LockedSheet, call: Call) => Promise<PostedRevision>,
+  ): Promise<PostedRevision> {
+    const bodyDigest = createHash('sha256').update(JSON.stringify(body)).digest('hex')
+    return this.dataSource.transaction(async (em) => {
+      const sheet = await lockSheet(em, sheetId)
+      const known = await findEntryByKey(em, sheetId, author.person.id, key)
+      if (known) return this.repeatAnswer(em, sheetId, known, bodyDigest)
+      requireDrafting(sheet)
+      return write(em, sheet, { key, bodyDigest, altered: [] })
     })
   }
 
@@ -114,21 +119,28 @@ export class LedgerService {
     sheet: LockedSheet,
     authorId: string,
     edits: readonly Edit[],
-    entry: ServerEntry & {
-      call?: { key: string; bodyDigest: string; altered: string[] }
-      provenances?: ReadonlyMap<string, Provenance | null>
-    },
+    entry: ServerEntry & { provenances?: ReadonlyMap<string, Provenance | null> },
   ): Promise<LedgerEntry> {
     const revision = sheet.revision + 1
     const touched = edits.flatMap(({ before, after }) => [before, after]).filter((item) => item !== null)
     const touchesFaces = touched.some((item) => faceKinds.includes(item.kind))
-    const message = entry.message || describeChanges(edits)
+    const what = describeChanges(edits)
     const { kind, at, call } = entry
     await insertEntry(
       em,
       sheet,
       revision,
-      { kind, authorId, message, changed: edits.length, at, call },
+      {
+        kind,
+        authorId,
+        message: entry.message || what,
+        what,
+        changed: edits.length,
+        kinds: [...new Set(touched.map((item) => item.kind))],
+        extent: boundsOf(touched),
+        at,
+        call,
+      },
       touchesFaces,
     )
     const ended = edits.flatMap(({ before }) => (before ? [before.id] : []))
@@ -150,10 +162,7 @@ export class LedgerService {
     author: Author,
     { base, changes }: Pick<ChangeSet, 'base' | 'changes'>,
   ): Promise<SheetRows> {
-    if (base > sheet.revision) {
-      const detail = `The sheet is at revision ${sheet.revision}; revision ${base} does not exist yet.`
-      throw problem('invalid-input', detail, { errors: [{ pointer: '/base', detail }] })
-    }
+    requireReached(base, sheet.revision, 'base')
     requireWithinSystem(sheet, changes)
     const rows = await loadRows(em, sheet.id, changes)
     requireEditorForLegend(author, changes, rows)
@@ -186,14 +195,6 @@ export class LedgerService {
   }
 }
 
-function requireDrafting(sheet: LockedSheet): void {
-  if (sheet.state === 'drafting') return
-  throw problem(
-    'wrong-state',
-    `Sheet ${sheet.number} is ${sheet.state}: it cannot be changed until it is back in drafting.`,
-  )
-}
-
 /** Changes with their coordinates on the grid, and the items that this altered. */
 function snapChanges(changes: readonly Change[]): { changes: Change[]; altered: Item[] } {
   const altered: Item[] = []
@@ -211,76 +212,10 @@ function snapChanges(changes: readonly Change[]): { changes: Change[]; altered: 
   return { changes: snapped, altered }
 }
 
-/** A place beyond the region of the sheet's system would be drawn, measured and printed wrong. */
-function requireWithinSystem(sheet: LockedSheet, changes: readonly Change[]): void {
-  const items = changes.flatMap((change) => (change.op === 'put' ? [change.item] : []))
-  const beyond = findUnreachable(items, sheet.proj4)
-  if (beyond.length === 0) return
-  const errors = beyond.slice(0, 100).map(({ id, at }) => ({
-    pointer: `/changes/${changes.findIndex((change) => changedId(change) === id)}/item/geometry/coordinates`,
-    detail: `The place ${at[0]} ${at[1]} lies outside the region that the sheet’s coordinate system (EPSG:${sheet.srid}) is made for.`,
-    item: id,
-  }))
-  throw problem('invalid-input', errors[0]?.detail ?? '', { errors })
-}
-
 function snapOrThrow(item: Item): Item {
   const snapped = snapItem(item)
   if (!snapped) throw new RangeError(`Item ${item.id} is a line without length.`)
   return snapped
-}
-
-async function loadRows(em: EntityManager, sheetId: string, changes: readonly Change[]): Promise<SheetRows> {
-  const ids = changes.map(changedId)
-  const latest = await findLatestVersions(em, ids)
-  const units = await selectCurrentItems(em, sheetId, 'unit')
-  const [sheetFace] = await selectCurrentItems(em, sheetId, 'sheet-face')
-  const removed = changes.flatMap((change) => (change.op === 'remove' ? [change.id] : []))
-  const counts = await countLabelsOfUnits(em, sheetId, removed, ids)
-  return {
-    sheetId,
-    latest,
-    unitIds: new Set(units.map((unit) => unit.id)),
-    sheetFaceId: sheetFace?.id,
-    labelsOfUnits: new Map(counts.map(({ unit, labels }) => [unit, labels])),
-  }
-}
-
-/** Legend and sheet face are the editor's. */
-function requireEditorForLegend({ roles }: Author, changes: readonly Change[], { latest }: SheetRows): void {
-  if (roles.includes('editor')) return
-  const item = changes
-    .map((change) => (change.op === 'put' ? change.item : latest.get(change.id)?.item))
-    .find((item) => item !== undefined && isEditorsItem(item))
-  if (!item) return
-  const what = item.kind === 'unit' ? `the unit ${item.properties.label} of the legend` : 'the sheet face'
-  throw problem('not-allowed', `Only an editor of this sheet changes ${what}.`)
-}
-
-async function requireNoConflict(
-  em: EntityManager,
-  sheetId: string,
-  author: Author,
-  base: number,
-  changes: readonly Change[],
-  rows: SheetRows,
-): Promise<void> {
-  const found = findConflicts(changes, base, rows)
-  if (found.length === 0) return
-  const ids = found.map(({ id }) => id)
-  const bases = new Map((await selectItemsAt(em, sheetId, base, ids)).map((item) => [item.id, item]))
-  const conflicts = found.map((conflict): Conflict => ({ ...conflict, base: bases.get(conflict.id) ?? null }))
-  const names = new Set(
-    ids.map((id) => {
-      const other = rows.latest.get(id)?.author
-      return !other || other.id === author.person.id ? 'You, elsewhere,' : other.name
-    }),
-  )
-  throw problem(
-    'item-conflict',
-    `${[...names].join(' and ')} changed ${ids.length === 1 ? 'the same item' : `${ids.length} of the same items`} after revision ${base}. Nothing of yours was stored.`,
-    { items: conflicts },
-  )
 }
 
 function toEdit(change: Change, { latest }: SheetRows): Edit {

@@ -1,5 +1,6 @@
 import { Check, Column, Entity, ForeignKey, Index, PrimaryColumn } from 'typeorm'
 import type { LedgerEntry } from '@shared/api/sheets'
+import type { ItemKind } from '@shared/items/item'
 import { Account } from '../accounts/account.entity'
 import { SheetRow } from '../sheets/sheet.entity'
 
@@ -9,6 +10,8 @@ import { SheetRow } from '../sheets/sheet.entity'
   unique: true,
   where: 'change_key IS NOT NULL',
 })
+@Index('revision_of_author', ['sheetId', 'authorId', 'number'])
+@Index('revision_extent', ['extent'], { spatial: true })
 @Check('revision_number_positive', '"number" > 0')
 @Check('revision_key_with_digest', '(change_key IS NULL) = (body_digest IS NULL)')
 export class RevisionRow {
@@ -47,4 +50,16 @@ export class RevisionRow {
   /** Items that were stored otherwise than sent, so that a repeated call gets the same answer. */
   @Column({ name: 'altered', type: 'uuid', array: true, default: () => `'{}'` })
   altered: string[]
+
+  /** What changed, in words made from the versions. */
+  @Column({ name: 'what', type: 'text', default: '' })
+  what: string
+
+  /** Kinds of the items that changed. */
+  @Column({ name: 'kinds', type: 'text', array: true, default: () => `'{}'` })
+  kinds: ItemKind[]
+
+  /** Rectangle around what changed, as it is and as it was; null for changes of the legend or the sheet face alone. */
+  @Column({ name: 'extent', type: 'geometry', spatialFeatureType: 'Geometry', srid: 0, nullable: true })
+  extent: unknown
 }

@@ -7,7 +7,7 @@ import { sheetArea } from '@shared/sheets/sheet-area'
 import type { LonLat, XY } from '@shared/units'
 import { problem } from '../../platform/problem'
 import type { LedgerService } from '../ledger/ledger.service'
-import { selectLastEntries } from '../ledger/ledger.queries'
+import { selectLastEntries } from '../ledger/entries.queries'
 import { readCrs } from './crs'
 import {
   findCrs,

@@ -19,6 +19,7 @@ describe('sentences', () => {
       author: { id: contact.id, name: 'Tove Orr', initials: 'TO' },
       at: '2026-12-01T09:05:00.000Z',
       message: '',
+      what: 'drew 1 contact',
       changed: 1,
     }
     expect(changedSinceSentence(contact, [entry])).toMatch(

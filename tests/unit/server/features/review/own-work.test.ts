@@ -9,6 +9,7 @@ const entry = (revision: number, author: string): LedgerEntry => ({
   author: person(author),
   at: '2026-12-01T10:00:00.000Z',
   message: `moved contact ${revision}`,
+  what: 'drew 1 contact',
   changed: 1,
 })
 const submission = { submittedBy: person('Orr'), revision: 9 }

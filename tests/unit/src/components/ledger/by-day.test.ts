@@ -8,6 +8,7 @@ const entry = (revision: number, at: string): LedgerEntry => ({
   author: { id: '00000000-0000-4000-8000-000000000001', name: 'Rosa Kelp', initials: 'RK' },
   at,
   message: '',
+  what: 'drew 1 contact',
   changed: 1,
 })
 

@@ -1,0 +1,115 @@
+import type { EntityManager } from 'typeorm'
+import type { Role } from '@shared/api/accounts'
+import type { Person } from '@shared/api/common'
+import type { Change } from '@shared/changes/change-set'
+import { problem } from '../../platform/problem'
+import { changedId, findConflicts, isEditorsItem, type Conflict, type SheetRows } from './check-changes'
+import { findUnreachable } from './find-unreachable'
+import {
+  countLabelsOfUnits,
+  findLatestVersions,
+  selectCurrentItems,
+  selectItemsAt,
+  type LockedSheet,
+} from './ledger.queries'
+
+/** Who changes a sheet, and as what. */
+export interface Author {
+  person: Person
+  roles: readonly Role[]
+}
+
+/** A sheet that is submitted, approved or being released stays as it is. */
+export function requireDrafting(sheet: LockedSheet): void {
+  if (sheet.state === 'drafting') return
+  throw problem(
+    'wrong-state',
+    `Sheet ${sheet.number} is ${sheet.state}: it cannot be changed until it is back in drafting.`,
+  )
+}
+
+/** A place beyond the region of the sheet's system would be drawn, measured and printed wrong. */
+export function requireWithinSystem(sheet: LockedSheet, changes: readonly Change[]): void {
+  const items = changes.flatMap((change) => (change.op === 'put' ? [change.item] : []))
+  const beyond = findUnreachable(items, sheet.proj4)
+  if (beyond.length === 0) return
+  const errors = beyond.slice(0, 100).map(({ id, at }) => ({
+    pointer: `/changes/${changes.findIndex((change) => changedId(change) === id)}/item/geometry/coordinates`,
+    detail: `The place ${at[0]} ${at[1]} lies outside the region that the sheet’s coordinate system (EPSG:${sheet.srid}) is made for.`,
+    item: id,
+  }))
+  throw problem('invalid-input', errors[0]?.detail ?? '', { errors })
+}
+
+/** The rows of the sheet that changes meet. */
+export async function loadRows(
+  em: EntityManager,
+  sheetId: string,
+  changes: readonly Change[],
+): Promise<SheetRows> {
+  const ids = changes.map(changedId)
+  const latest = await findLatestVersions(em, ids)
+  const units = await selectCurrentItems(em, sheetId, 'unit')
+  const [sheetFace] = await selectCurrentItems(em, sheetId, 'sheet-face')
+  const removed = changes.flatMap((change) => (change.op === 'remove' ? [change.id] : []))
+  const counts = await countLabelsOfUnits(em, sheetId, removed, ids)
+  return {
+    sheetId,
+    latest,
+    unitIds: new Set(units.map((unit) => unit.id)),
+    sheetFaceId: sheetFace?.id,
+    labelsOfUnits: new Map(counts.map(({ unit, labels }) => [unit, labels])),
+  }
+}
+
+/** Legend and sheet face are the editor's. */
+export function requireEditorForLegend(
+  { roles }: Author,
+  changes: readonly Change[],
+  { latest }: SheetRows,
+): void {
+  if (roles.includes('editor')) return
+  const item = changes
+    .map((change) => (change.op === 'put' ? change.item : latest.get(change.id)?.item))
+    .find((item) => item !== undefined && isEditorsItem(item))
+  if (!item) return
+  const what = item.kind === 'unit' ? `the unit ${item.properties.label} of the legend` : 'the sheet face'
+  throw problem('not-allowed', `Only an editor of this sheet changes ${what}.`)
+}
+
+/** Items that someone else changed since the base are not overwritten: all sides are shown instead. */
+export async function requireNoConflict(
+  em: EntityManager,
+  sheetId: string,
+  author: Author,
+  base: number,
+  changes: readonly Change[],
+  rows: SheetRows,
+): Promise<void> {
+  const found = findConflicts(changes, base, rows)
+  if (found.length === 0) return
+  const ids = found.map(({ id }) => id)
+  const bases = new Map((await selectItemsAt(em, sheetId, base, ids)).map((item) => [item.id, item]))
+  const conflicts = found.map((conflict): Conflict => ({ ...conflict, base: bases.get(conflict.id) ?? null }))
+  const names = new Set(
+    ids.map((id) => {
+      const other = rows.latest.get(id)?.author
+      return !other || other.id === author.person.id ? 'You, elsewhere,' : other.name
+    }),
+  )
+  throw problem(
+    'item-conflict',
+    `${[...names].join(' and ')} changed ${ids.length === 1 ? 'the same item' : `${ids.length} of the same items`} after revision ${base}. Nothing of yours was stored.`,
+    { items: conflicts },
+  )
+}
+
+/** A field of the request that cannot be used, in a sentence. */
+export const invalidField = (field: string, detail: string) =>
+  problem('invalid-input', detail, { errors: [{ pointer: `/${field}`, detail }] })
+
+/** Refuses a revision from the future, naming the field that asked for it. */
+export function requireReached(revision: number, latest: number, field: string): void {
+  if (revision <= latest) return
+  throw invalidField(field, `The sheet is at revision ${latest}; revision ${revision} does not exist yet.`)
+}
