@@ -47,3 +47,15 @@ export function symbolPxPerMm(share: number, above: 'print' | 'screen'): number 
   const shown = Math.max(readable, above === 'screen' ? Math.min(1, share) : share)
   return PRINT_PX_PER_MM * shown
 }
+
+/** How large the ground is shown beside its symbols: 1 where both are as in print, less where the ground is the smaller.
+ *  @returns also the size of a symbol millimetre, px */
+export function relativeScale(
+  view: Pick<ViewFrame, 'pxPerMetre'>,
+  scaleDenominator: number,
+  above: 'print' | 'screen',
+): { scale: number; symbolPx: number } {
+  const share = printShare(view.pxPerMetre, scaleDenominator)
+  const symbolPx = symbolPxPerMm(share, above)
+  return { scale: (share * PRINT_PX_PER_MM) / symbolPx, symbolPx }
+}

@@ -1,7 +1,7 @@
 import { chromium, type Browser, type Page } from 'playwright-core'
 
 /** Debian's Chromium without a window; nothing of it calls the outside. */
-export const launchBrowser = (): Promise<Browser> =>
+export const launchBrowser = (more: readonly string[] = []): Promise<Browser> =>
   chromium.launch({
     executablePath: process.env['SHEETWRIGHT_CHROMIUM'] ?? '/usr/bin/chromium',
     args: [
@@ -12,6 +12,7 @@ export const launchBrowser = (): Promise<Browser> =>
       '--disable-background-networking',
       '--disable-component-update',
       '--disable-sync',
+      ...more,
     ],
   })
 

@@ -1,0 +1,57 @@
+import { isLineItem, type LineItem, type PointItem } from '@shared/items/item'
+import type { Drawing } from './drawing'
+
+/** Bands that a line's drawings are kept for: the one in view, and those that one zooms to and fro between. */
+const MOST_BANDS = 4
+
+type Placed = LineItem | PointItem
+
+/** Drawings of items, kept as long as the item is the same object. Those of lines depend on the zoom, by bands; those of
+ *  points do not. */
+export class KeptDrawings {
+  private lines = new WeakMap<Placed, Map<number, Drawing>>()
+  private points = new WeakMap<Placed, Drawing>()
+
+  /** The drawing for a band, made where there is none yet. */
+  of(item: Placed, band: number, make: () => Drawing): Drawing {
+    const known = this.known(item, band)
+    if (known) return known
+    const made = make()
+    if (isLineItem(item)) this.keep(item, band, made)
+    else this.points.set(item, made)
+    return made
+  }
+
+  /** Whatever drawing there is, of the nearest band: it will do while the view moves. */
+  nearest(item: Placed, band: number): Drawing | undefined {
+    if (!isLineItem(item)) return this.points.get(item)
+    const bands = this.lines.get(item)
+    if (!bands) return undefined
+    let best: number | undefined
+    for (const each of bands.keys()) {
+      if (best === undefined || Math.abs(each - band) < Math.abs(best - band)) best = each
+    }
+    return best === undefined ? undefined : bands.get(best)
+  }
+
+  forget(): void {
+    this.lines = new WeakMap()
+    this.points = new WeakMap()
+  }
+
+  /** Letters of units have changed. */
+  forgetPoints(): void {
+    this.points = new WeakMap()
+  }
+
+  private known(item: Placed, band: number): Drawing | undefined {
+    return isLineItem(item) ? this.lines.get(item)?.get(band) : this.points.get(item)
+  }
+
+  private keep(item: Placed, band: number, drawing: Drawing): void {
+    const bands = this.lines.get(item) ?? new Map<number, Drawing>()
+    this.lines.set(item, bands.set(band, drawing))
+    const [oldest] = bands.keys()
+    if (bands.size > MOST_BANDS && oldest !== undefined) bands.delete(oldest)
+  }
+}
