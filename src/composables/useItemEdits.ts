@@ -1,7 +1,7 @@
 import type { Edit } from '@shared/changes/change-set'
 import { describeChanges } from '@shared/changes/describe-changes'
 import type { Item, ItemOf } from '@shared/items/item'
-import { isSame } from '@/stores/same-item'
+import { isSame } from '@shared/changes/same-value'
 import { useSheetStore } from '@/stores/sheet'
 
 /** Why an edit was refused: sentences by JSON pointer into the item (`/properties/dip`), '' for the whole. Undefined

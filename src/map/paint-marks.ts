@@ -1,5 +1,6 @@
 import { isLineItem, type LineItem, type PointItem } from '@shared/items/item'
 import { inkColour } from '@shared/symbols/ink'
+import { palettes } from '@/theme/tokens'
 import type { XY } from '@shared/units'
 import type { Sketch } from './sketch'
 import { toPx, type ViewFrame } from './view-frame'
@@ -14,11 +15,15 @@ export interface Marks {
   /** A place that waits for its attitude. */
   place: XY | null
   /** Versions of items laid over the sheet to be compared: `before` in slate, `after` in oxide. */
+  /** What others have selected, with their initials. */
+  others: readonly { items: readonly (LineItem | PointItem)[]; initials: string }[]
   compared: readonly { item: LineItem | PointItem; ink: 'before' | 'after' }[]
 }
 
 const SLATE = inkColour('selection')
 const PAPER = inkColour('paper')
+/** Paper stays paper in every theme, and so does the ink of other people on it. */
+const MOSS = palettes.light.moss
 const COMPARED = { before: SLATE, after: inkColour('fold') } as const
 const FULL_TURN = 2 * Math.PI
 
@@ -39,10 +44,33 @@ export function paintMarks(
     emphasize(context, view, item, { alpha: 0.28, halo: 8, isSelected: false, symbolPx })
   for (const item of marks.selected)
     emphasize(context, view, item, { alpha: 0.2, halo: 8, isSelected: true, symbolPx })
+  for (const { items, initials } of marks.others)
+    for (const item of items) claim(context, view, item, { initials, symbolPx })
   for (const { item, ink } of marks.compared) overlay(context, view, item, COMPARED[ink])
   context.strokeStyle = SLATE
   if (marks.place) ring(context, toPx(view, marks.place), 9, 2)
   if (marks.sketch) paintSketch(context, view, marks.sketch)
+}
+
+/** An item that somebody else has selected: cased in moss, with their initials. */
+function claim(
+  context: CanvasRenderingContext2D,
+  view: ViewFrame,
+  item: LineItem | PointItem,
+  { initials, symbolPx }: { initials: string; symbolPx: number },
+): void {
+  context.strokeStyle = MOSS
+  context.globalAlpha = 0.45
+  if (isLineItem(item)) {
+    trace(context, view, item.geometry.coordinates)
+    context.lineWidth = 7
+    context.stroke()
+  } else ring(context, toPx(view, item.geometry.coordinates), 4.6 * symbolPx, 2.5)
+  context.globalAlpha = 1
+  const at = isLineItem(item)
+    ? item.geometry.coordinates[Math.floor(item.geometry.coordinates.length / 2)]
+    : item.geometry.coordinates
+  if (at) paintLabel(context, toPx(view, at), initials, MOSS)
 }
 
 /** A version of an item in one ink, on a paper casing that lifts it off the sheet. */
@@ -184,14 +212,19 @@ function paintSnap(
   context.stroke()
 }
 
-function paintLabel(context: CanvasRenderingContext2D, [x, y]: [number, number], text: string): void {
+function paintLabel(
+  context: CanvasRenderingContext2D,
+  [x, y]: [number, number],
+  text: string,
+  colour: string = SLATE,
+): void {
   context.font = '700 12.5px Lato, sans-serif'
   context.textAlign = 'left'
   context.textBaseline = 'alphabetic'
   context.lineWidth = 4
   context.strokeStyle = PAPER
   context.strokeText(text, x + 12, y - 10)
-  context.fillStyle = SLATE
+  context.fillStyle = colour
   context.fillText(text, x + 12, y - 10)
   context.strokeStyle = SLATE
 }

@@ -6,6 +6,7 @@ import type { Face } from '@shared/api/faces'
 import type { Job } from '@shared/api/jobs'
 import type { LedgerEntry, Sheet } from '@shared/api/sheets'
 import { editedId, type Edit } from '@shared/changes/change-set'
+import { isSame } from '@shared/changes/same-value'
 import { sheetProjection, type SheetProjection } from '@shared/geometry/projection'
 import type { Item, ItemKind, ItemOf } from '@shared/items/item'
 import { openEventStream, type EventStream } from '@/api/event-stream'
@@ -14,7 +15,7 @@ import { openOutbox } from '@/offline/outbox'
 import { checkEdits, type EditError } from './check-edits'
 import { facesKeeper } from './faces-keeper'
 import { History, type Step } from './history'
-import { isSame } from './same-item'
+import { usePresenceStore } from './presence'
 import { useSessionStore } from './session'
 import { SheetExchange, type Saved } from './sheet-exchange'
 import { deliver, readChanges, readFaces, readSheet, readSheetOnly } from './sheet-server'
@@ -47,6 +48,7 @@ const refusal = (detail: string) => ({
  *  Vue's reactivity; read `itemsVersion` to follow them. */
 export const useSheetStore = defineStore('sheet', () => {
   const session = useSessionStore()
+  const presence = usePresenceStore()
   const sheet = shallowRef<Sheet | null>(null)
   const projection = shallowRef<SheetProjection | null>(null)
   const itemsVersion = ref(0)
@@ -145,6 +147,7 @@ export const useSheetStore = defineStore('sheet', () => {
     now?.keeper.close()
     now = null
     history.clear()
+    presence.clear()
     sheet.value = projection.value = null
     faces.value = []
     facesRevision.value = null
@@ -164,6 +167,7 @@ export const useSheetStore = defineStore('sheet', () => {
 
   async function hear(push: Push, exchange: SheetExchange): Promise<void> {
     if (push.event === 'revision') return exchange.hear(push.revision)
+    if (push.event === 'presence') return presence.hear(push.person, push.presence, Date.now())
     if (push.event === 'job') {
       jobs.value = [push.job, ...jobs.value.filter((job) => job.id !== push.job.id)]
       return

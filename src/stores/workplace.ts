@@ -2,6 +2,8 @@ import { defineStore } from 'pinia'
 import { computed, ref, shallowRef } from 'vue'
 import type { LegendEntry } from '@shared/symbols/legend-entries'
 import type { XY } from '@shared/units'
+import { useSessionStore } from './session'
+import { useSymbolSize } from './symbol-size'
 
 /** Instruments of the workplace; `draw` draws with what is picked in the legend margin. */
 export type Tool = 'select' | 'draw' | 'vertices' | 'measure'
@@ -11,12 +13,17 @@ export type DrawWith = LegendEntry | { unit: string }
 
 export const isUnitPen = (pen: DrawWith): pen is { unit: string } => 'unit' in pen
 
-/** Where to move the view: to some items, to the whole page, or to a place at a percentage of print size. */
+/** Where to move the view: to some items, to the whole page, to a place at a percentage of print size, or to a piece of
+ *  ground, sheet metres. */
 export type ViewRequest =
-  { to: 'items'; ids: readonly string[] } | { to: 'page' } | { to: 'place'; at: XY; percent: number }
+  | { to: 'items'; ids: readonly string[] }
+  | { to: 'page' }
+  | { to: 'place'; at: XY; percent: number }
+  | { to: 'ground'; box: { min: XY; max: XY } }
 
 /** What is going on in the workplace just now: instrument, pen, selection, what is hovered. Nothing here is stored. */
 export const useWorkplaceStore = defineStore('workplace', () => {
+  const session = useSessionStore()
   const tool = ref<Tool>('select')
   const drawWith = shallowRef<DrawWith | null>(null)
   const selected = shallowRef<readonly string[]>([])
@@ -34,7 +41,9 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   const lastPen = shallowRef<DrawWith | null>(null)
   const snapping = ref(true)
   /** Symbols above 100 %: grow with the sheet (print size), or stay as at 100 % (screen size). */
-  const symbolSize = ref<'print' | 'screen'>('print')
+  const symbolSize = useSymbolSize(() => session.account?.id)
+  /** Legend rows of which some symbols give way to others at this zoom, and how many. */
+  const thinned = shallowRef<ReadonlyMap<string, number>>(new Map())
   /** A place was clicked for an attitude; the reading is asked for beside the map. */
   const pendingReadingPlace = shallowRef<XY | null>(null)
   /** Pointer on the sheet, sheet metres; null outside. */
@@ -110,6 +119,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     hovered.value = []
     hoveredEntry.value = mapRow.value = null
     hiddenEntries.value = new Set()
+    thinned.value = new Map()
     viewRequest.value = null
     cursor.value = null
     unitHere.value = null
@@ -128,6 +138,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     hiddenEntries,
     snapping,
     symbolSize,
+    thinned,
     pendingReadingPlace,
     cursor,
     unitHere,

@@ -1,5 +1,7 @@
 import type { Router } from 'express'
-import { listenToSheet, type Push } from '@shared/api/events'
+import type { DataSource } from 'typeorm'
+import { listenToSheet, tellPresence, type Push } from '@shared/api/events'
+import { announce } from '../../platform/announce'
 import type { AccessFinder } from '../../platform/http/access'
 import { serve } from '../../platform/http/serve'
 import type { Jobs } from '../../platform/jobs'
@@ -8,13 +10,17 @@ import type { AccountsService } from '../accounts/accounts.service'
 import type { SheetsService } from '../sheets/sheets.service'
 
 export interface EventsRoom {
+  dataSource: DataSource
   events: SheetEvents
   sheets: SheetsService
   jobs: Jobs
   accounts: AccountsService & AccessFinder
 }
 
-export function mountEvents(router: Router, { events, sheets, jobs, accounts }: EventsRoom): void {
+export function mountEvents(
+  router: Router,
+  { dataSource, events, sheets, jobs, accounts }: EventsRoom,
+): void {
   serve(router, listenToSheet, ({ sheet, account, response }) =>
     events.listen({
       sheet: sheet.number,
@@ -37,4 +43,12 @@ export function mountEvents(router: Router, { events, sheets, jobs, accounts }: 
       },
     }),
   )
+  serve(router, tellPresence, async ({ sheet, account: { id, name, initials }, body }) => {
+    await announce(dataSource.manager, sheet.number, {
+      event: 'presence',
+      person: { id, name, initials },
+      presence: body,
+    })
+    return null
+  })
 }

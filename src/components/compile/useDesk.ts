@@ -1,9 +1,11 @@
 import { effectScope, watch, type Ref } from 'vue'
 import type { XY } from '@shared/units'
 import { useMapScene } from '@/composables/useMapScene'
+import { usePresence } from '@/composables/usePresence'
 import { useSheetEditor } from '@/composables/useSheetEditor'
 import type { Editor } from '@/editor/editor'
-import { SheetMap, type MapPointer, type PageBoxes } from '@/map/sheet-map'
+import { SheetMap, type MapPointer, type PageBoxes, type ViewFrame } from '@/map/sheet-map'
+import { fromPx } from '@/map/view-frame'
 import { useSheetStore } from '@/stores/sheet'
 import { useWorkplaceStore } from '@/stores/workplace'
 
@@ -28,6 +30,7 @@ export function useDesk() {
   function open(elements: DeskElements): DeskParts {
     if (!sheet.sheet || !sheet.projection) throw new TypeError('The desk needs an open sheet.')
     let editor: Editor | undefined
+    let seen: ViewFrame | undefined
     const map = new SheetMap({
       target: elements.target,
       sheet: sheet.sheet,
@@ -46,7 +49,10 @@ export function useDesk() {
         },
         release: (pointer: MapPointer) => editor?.release(pointer),
         leave,
-        frame: (_view, boxes) => lay(elements, boxes),
+        frame(view, boxes) {
+          seen = view
+          lay(elements, boxes)
+        },
         rest() {
           workplace.percent = map.percent()
           workplace.viewRests += 1
@@ -57,6 +63,7 @@ export function useDesk() {
     scope.run(() => {
       useMapScene(map)
       editor = useSheetEditor(map)
+      usePresence(() => (seen ? extentOf(seen) : null))
       watch(
         () => sheet.sheet?.number,
         () => map.showPage(false),
@@ -89,6 +96,13 @@ export function useDesk() {
   }
 
   return { open }
+}
+
+/** What of the sheet is in view, sheet metres: west, south, east, north. */
+function extentOf(view: ViewFrame): [number, number, number, number] {
+  const [west, south] = fromPx(view, [0, view.height])
+  const [east, north] = fromPx(view, [view.width, 0])
+  return [west, south, east, north]
 }
 
 /** Styles are set directly: this runs in every frame of a pan, and must stay with the canvas to the pixel. */

@@ -1,7 +1,7 @@
 import { computed, reactive, ref, watch } from 'vue'
 import type { Item } from '@shared/items/item'
 import type { Refusal } from '@/composables/useItemEdits'
-import { isSame } from '@/stores/same-item'
+import { isSame } from '@shared/changes/same-value'
 import { useSheetStore } from '@/stores/sheet'
 import { useUnfinishedStore } from '@/stores/unfinished'
 import type { NorthDraft } from './north-draft'

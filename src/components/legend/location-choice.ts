@@ -1,7 +1,7 @@
 import type { LocationConfidence } from '@shared/items/confidence'
 import { locationConfidences } from '@shared/items/confidence'
 import { legendEntries, type LegendEntry } from '@shared/symbols/legend-entries'
-import { isSame } from '@/stores/same-item'
+import { isSame } from '@shared/changes/same-value'
 
 /** How well located what an entry draws is; null for points. */
 export function locationOf(entry: LegendEntry): LocationConfidence | null {

@@ -101,3 +101,30 @@ describe('an announcement', () => {
     await expect(push(sheet.number, { event: 'job', job })).rejects.toThrow(RangeError)
   })
 })
+
+describe('presence', () => {
+  const page = '00000000-0000-4000-8000-0000000000aa'
+  const seen = { page, extent: [284_000, 5_278_000, 286_000, 5_280_000], items: [] }
+
+  it('is told to everyone on the sheet with the name of who is there, and kept nowhere', async () => {
+    const stream = await listenTo(sheet.number)
+    await stream.heard('"drafting"')
+    const answer = await compiler.post(`/api/sheets/${sheet.number}/presence`).send(seen)
+    expect(answer.status).toBe(204)
+    await stream.heard(`"initials":"RK"},"presence":${JSON.stringify(seen)}`)
+    stream.close()
+    const later = await listenTo(sheet.number)
+    await later.heard('"drafting"')
+    expect(later.text()).not.toContain(page)
+    later.close()
+  })
+
+  it.each([
+    ['a page that has no id', { ...seen, page: 'mine' }],
+    ['a place that is no number', { ...seen, extent: [0, 0, 'x', 1] }],
+    ['more items than anyone has at hand', { ...seen, items: Array.from({ length: 21 }, () => page) }],
+  ])('is refused with %s', async (_, body) => {
+    const { status } = await compiler.post(`/api/sheets/${sheet.number}/presence`).send(body)
+    expect(status).toBe(400)
+  })
+})

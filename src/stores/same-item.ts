@@ -1,1 +1,0 @@
-export { isSame } from '@shared/changes/same-value'
