@@ -1,18 +1,18 @@
 import { watch } from 'vue'
-import { legendEntryOf } from '@shared/symbols/legend-entries'
 import { isLineItem, isPointItem, type Item, type LineItem, type PointItem } from '@shared/items/item'
 import type { SheetMap } from '@/map/sheet-map'
+import { useComparedStore } from '@/stores/compared'
+import { usePresenceStore } from '@/stores/presence'
 import { useSheetStore } from '@/stores/sheet'
 import { useWorkplaceStore } from '@/stores/workplace'
-
-/** Row of the legend that an item belongs to: its entry's id, or its unit's. */
-export const legendRowOf = (item: Item): string | undefined =>
-  item.kind === 'unit-label' ? item.properties.unit : legendEntryOf(item)?.id
+import { legendRowOf } from './useLegend'
 
 /** Keeps the map showing what the stores hold: items, unit areas, what is hidden, selected, hovered or asked for. */
 export function useMapScene(map: SheetMap): void {
   const sheet = useSheetStore()
   const workplace = useWorkplaceStore()
+  const compared = useComparedStore()
+  const presence = usePresenceStore()
 
   const placed = (ids: readonly string[]): (LineItem | PointItem)[] =>
     ids.flatMap((id) => {
@@ -60,6 +60,16 @@ export function useMapScene(map: SheetMap): void {
     () => map.setMarks({ selected: placed(workplace.selected) }),
     { immediate: true },
   )
+  watch(
+    [
+      () => workplace.viewRests,
+      () => sheet.itemsVersion,
+      () => workplace.symbolSize,
+      () => workplace.hiddenEntries,
+      () => workplace.selected,
+    ],
+    () => (workplace.thinned = countByRow(map.thinned())),
+  )
   watch([() => workplace.hovered, () => workplace.rowInMargin, () => sheet.itemsVersion], () => {
     const row = workplace.rowInMargin
     map.setMarks({
@@ -73,11 +83,42 @@ export function useMapScene(map: SheetMap): void {
     { immediate: true },
   )
   watch(
+    [() => presence.others, () => sheet.itemsVersion],
+    () =>
+      map.setMarks({
+        others: presence.others.map(({ person, presence: { items } }) => ({
+          items: placed(items),
+          initials: person.initials,
+        })),
+      }),
+    { immediate: true },
+  )
+  watch(
+    () => compared.inked,
+    (inked) =>
+      map.setMarks({
+        compared: inked.flatMap(({ item, ink }) =>
+          isLineItem(item) || isPointItem(item) ? [{ item, ink }] : [],
+        ),
+      }),
+    { immediate: true },
+  )
+  watch(
     () => workplace.viewRequest,
     (request) => {
       if (request?.to === 'items') map.showItems(placed(request.ids))
       else if (request?.to === 'place') map.showPlace(request.at, request.percent)
+      else if (request?.to === 'ground') map.showGround(request.box)
       else if (request?.to === 'page') map.showPage()
     },
   )
+}
+
+function countByRow(items: readonly Item[]): ReadonlyMap<string, number> {
+  const counts = new Map<string, number>()
+  for (const item of items) {
+    const row = legendRowOf(item)
+    if (row !== undefined) counts.set(row, (counts.get(row) ?? 0) + 1)
+  }
+  return counts
 }
