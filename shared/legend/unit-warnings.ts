@@ -11,12 +11,15 @@ export interface LegendUnit {
  *  stop anyone: two units may share a colour for a while. */
 export function unitWarnings(unit: LegendUnit, units: readonly LegendUnit[]): string[] {
   const others = units.filter((other) => other.id !== unit.id)
-  const { label, colour } = unit.properties
+  const { label, colour, pattern } = unit.properties
   const sameLabel = others.find((other) => other.properties.label === label)
-  const sameColour = others.find((other) => other.properties.colour === colour)
+  const sameColour = others.find(
+    ({ properties }) => properties.colour === colour && properties.pattern === pattern,
+  )
   return [
     sameLabel && `${sameLabel.properties.name} carries the label ${label} too.`,
-    sameColour && `${sameColour.properties.name} has this colour too.`,
+    sameColour &&
+      `${sameColour.properties.name} has this ${pattern === 'none' ? 'colour' : 'colour and pattern'} too.`,
     !labelReadsOn(colour) && 'The label is hard to read on this colour; choose a lighter one.',
   ].filter((warning) => typeof warning === 'string')
 }

@@ -3,12 +3,13 @@ import type { Sheet } from '../api/sheets'
 import { sheetProjection } from '../geometry/projection'
 import { kindWords, type Item } from '../items/item'
 import type { UnitProperties } from '../items/legend'
-import type { DisplayList } from '../symbols/display-list'
+import type { DisplayList, Path } from '../symbols/display-list'
 import { drawFace } from '../symbols/draw-face'
 import { drawItem } from '../symbols/draw-item'
 import { drawingOrder } from '../symbols/drawing-order'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '../symbols/frame'
 import { polyline } from '../symbols/paths'
+import { unitFills, type Printing } from '../symbols/unit-fill'
 import { drawSheetFrame, facePath } from './graticule'
 import { neatlineBounds, pageLayout } from './page-layout'
 
@@ -41,11 +42,17 @@ export function composeFace(
   sheet: GroundOfSheet,
   items: readonly Item[],
   faces: readonly Face[],
+  printing: Printing,
 ): SheetPart[] {
   const frame = printFrame(sheet)
   const clip = facePath(sheet, frame)
   const clipped = (name: string, marks: DisplayList): DisplayList => [{ mark: 'group', name, clip, marks }]
   const units = unitsById(items)
+  const fills = unitFills(
+    items.filter((item) => item.kind === 'unit'),
+    printing,
+  )
+  const anchor = toMm(frame, neatlineBounds(sheet.neatline).min)
   const unitOf = (id: string): UnitProperties | undefined => units.get(id)
   return [
     ...inParts(faces).map((some) => ({
@@ -53,7 +60,10 @@ export function composeFace(
       draw: () =>
         clipped(
           'unit areas',
-          some.flatMap((face) => faceMarks(face, frame, unitOf)),
+          some.flatMap((face) => {
+            const fill = face.unit === null ? undefined : fills.get(face.unit)
+            return fill ? drawFace(facePathOf(face, frame), fill, anchor) : []
+          }),
         ),
     })),
     ...drawingOrder.flatMap((kind) =>
@@ -73,21 +83,14 @@ export function composeFace(
 export const unitsById = (items: readonly Item[]): Map<string, UnitProperties> =>
   new Map(items.flatMap((item) => (item.kind === 'unit' ? [[item.id, item.properties] as const] : [])))
 
-function faceMarks(
-  face: Face,
-  frame: DrawingFrame,
-  unitOf: (id: string) => UnitProperties | undefined,
-): DisplayList {
-  const unit = face.unit === null ? undefined : unitOf(face.unit)
-  if (!unit) return []
-  const rings = face.rings.flatMap((ring) =>
+/** A unit's area as one path, outer ring and holes, in the frame's millimetres. */
+export const facePathOf = (face: Face, frame: DrawingFrame): Path =>
+  face.rings.flatMap((ring) =>
     polyline(
       ring.slice(0, -1).map((xy) => toMm(frame, xy)),
       true,
     ),
   )
-  return drawFace(rings, unit)
-}
 
 function inParts<T>(all: readonly T[]): T[][] {
   return Array.from({ length: Math.ceil(all.length / ITEMS_PER_PART) }, (_, index) =>

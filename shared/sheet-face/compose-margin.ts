@@ -3,6 +3,7 @@ import { sheetProjection } from '../geometry/projection'
 import type { Item } from '../items/item'
 import type { SheetFaceProperties } from '../items/legend'
 import type { Mark } from '../symbols/display-list'
+import { unitFills } from '../symbols/unit-fill'
 import { marksInUse } from '../symbols/line-marks'
 import type { Millimetres, XY } from '../units'
 import { heightOf, space, stack, type Block } from './block'
@@ -18,7 +19,7 @@ import { cautionBox, creditsBlock, projectionBlock } from './statements'
 import { entriesInUse, symbolsList } from './symbols-list'
 import { titleBlock } from './title-block'
 import { typeLadder, typeScale, type TypeScale } from './type-scale'
-import { unitsList } from './units-list'
+import { unitsList, type ListedUnit } from './units-list'
 
 /** Room below the neatline for corner figures, and the white edge at the page's foot. */
 const BELOW_FACE: Millimetres = 13
@@ -44,10 +45,12 @@ export type MarginOutcome =
   /** Nothing is left out to make things fit: the reason says what to do instead. */
   | { outcome: 'cannot-print'; reason: string }
 
-/** What a sheet prints around its map face, from its one sheet-face item. */
-export function sheetFaceOf(items: readonly Item[]): Pick<SheetFaceProperties, 'authors' | 'credit'> {
+/** What a sheet prints around its map face and in how many inks, from its one sheet-face item. */
+export function sheetFaceOf(
+  items: readonly Item[],
+): Pick<SheetFaceProperties, 'authors' | 'credit' | 'printing'> {
   const item = items.find((candidate) => candidate.kind === 'sheet-face')
-  return item?.kind === 'sheet-face' ? item.properties : { authors: '', credit: '' }
+  return item?.kind === 'sheet-face' ? item.properties : { authors: '', credit: '', printing: 'colour' }
 }
 
 /** Composes everything around the map face: title, units, explanation of symbols, scale, norths, projection, credits
@@ -143,13 +146,20 @@ function setMargin(
   )
 }
 
+/** The legend's units with their fills. */
+function listedUnits(items: readonly Item[]): ListedUnit[] {
+  const units = items.filter((item) => item.kind === 'unit')
+  const fills = unitFills(units, sheetFaceOf(items).printing)
+  return units.map(({ id, properties }) => ({ properties, fill: fills.get(id) ?? {} }))
+}
+
 function setColumns(
   { sheet, items, edition }: SheetFaceInput,
   box: Box,
   { type, fill }: Setting,
   extra: readonly 'statements'[],
 ): Mark[] | undefined {
-  const units = [...unitsById(items).values()]
+  const units = listedUnits(items)
   const symbols = { entries: entriesInUse(items), marks: marksInUse(items) }
   for (const count of columnCounts(box.width, type)) {
     const gutter = gutterFor(type)

@@ -1,7 +1,8 @@
 import type { Face } from '../api/faces'
 import type { Page } from '../api/sheets'
+import { printed } from '../symbols/one-ink'
 import { composeFace, type SheetPart } from './compose-face'
-import { composeMargin, type SheetFaceInput } from './compose-margin'
+import { composeMargin, sheetFaceOf, type SheetFaceInput } from './compose-margin'
 
 export type { SheetPart } from './compose-face'
 
@@ -16,12 +17,14 @@ export function composeSheet(input: SheetFaceInput & { faces: readonly Face[] })
   const margin = composeMargin(input)
   if (margin.outcome === 'cannot-print') return margin
   const { sheet, items, faces } = input
+  const { printing } = sheetFaceOf(items)
+  const parts: SheetPart[] = [
+    ...composeFace(sheet, items, faces, printing),
+    { words: 'legend and statements', draw: () => margin.marks },
+  ]
   return {
     outcome: 'composed',
     page: sheet.page,
-    parts: [
-      ...composeFace(sheet, items, faces),
-      { words: 'legend and statements', draw: () => margin.marks },
-    ],
+    parts: parts.map(({ words, draw }) => ({ words, draw: () => printed(draw(), printing) })),
   }
 }

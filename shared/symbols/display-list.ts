@@ -77,8 +77,10 @@ export interface TextMark {
   tracking?: Millimetres
   /** Turn of the text's base line, degrees clockwise from the page's right; numerals keep 0. */
   turn?: Degrees
-  /** Width of a paper-coloured outline beneath the text, so that it reads on any fill. */
+  /** Width of an outline beneath the text, so that it reads on any fill. */
   halo?: Millimetres
+  /** Paper unless given. */
+  haloInk?: Ink
 }
 
 /** Marks that belong together, drawn in order and, where a clip is given, only inside it (even-odd). */

@@ -153,5 +153,6 @@ function textRun(mark: TextMark, { scale, x, y, flipY }: Transform): TextRun {
     turn: mark.turn ?? 0,
     tracking: (mark.tracking ?? 0) * scale,
   }
-  return mark.halo ? { ...run, halo: { width: mark.halo * 2 * scale, colour: inkColour('paper') } } : run
+  if (!mark.halo) return run
+  return { ...run, halo: { width: mark.halo * 2 * scale, colour: inkColour(mark.haloInk ?? 'paper') } }
 }

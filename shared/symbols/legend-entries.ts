@@ -1,6 +1,5 @@
 import { locationConfidences, type LocationConfidence } from '../items/confidence'
 import type { Item, ItemOf } from '../items/item'
-import type { UnitProperties } from '../items/legend'
 import {
   axialTracePropertiesSchema,
   contactPropertiesSchema,
@@ -10,14 +9,11 @@ import {
 import type { Millimetres } from '../units'
 import type { LineSymbol } from './definition'
 import type { DisplayList, Mark } from './display-list'
-import { unitInk } from './draw-face'
 import { lineSymbolOf, lineSymbols } from './draw-item'
 import { drawLine } from './draw-line'
 import type { LegendEntry, LegendKind, PointEntry } from './legend-entry'
-import { polyline } from './paths'
 import { boundsOf, placeMarks } from './place-marks'
 import { drawPointEntry, pointEntries, pointEntryIdOf } from './point-entries'
-import { measureText } from './text-metrics'
 
 export type { LegendEntry, LegendKind } from './legend-entry'
 
@@ -117,42 +113,4 @@ function centred(marks: readonly Mark[], size: Size): Mark[] {
   const dx = size.width / 2 - (box.x + box.width / 2)
   const dy = size.height / 2 - (box.y + box.height / 2)
   return placeMarks(marks, ([x, y]) => [x + dx, y + dy])
-}
-
-/** Letters of a swatch, and the room they leave at its sides. */
-const swatchType = { size: 2.9, weight: 700, edge: 0.6 } as const
-
-/** The swatch of a unit: its colour in a hairline frame, with its letters, made smaller where they would not fit. */
-export function drawUnitSwatch(
-  unit: Pick<UnitProperties, 'label' | 'colour'>,
-  { width, height }: Size,
-): DisplayList {
-  const corners = polyline(
-    [
-      [0, 0],
-      [width, 0],
-      [width, height],
-      [0, height],
-    ],
-    true,
-  )
-  const natural = measureText(unit.label, swatchType.size, swatchType.weight)
-  const fit = Math.min(
-    1,
-    (width - 2 * swatchType.edge) / Math.max(natural, 0.1),
-    (height * 0.8) / swatchType.size,
-  )
-  return [
-    { mark: 'fill', path: corners, ink: unitInk(unit) },
-    { mark: 'stroke', path: corners, width: 0.2, ink: 'black' },
-    {
-      mark: 'text',
-      text: unit.label,
-      at: [width / 2, height / 2],
-      size: swatchType.size * fit,
-      weight: swatchType.weight,
-      ink: 'black',
-      align: 'middle',
-    },
-  ]
 }

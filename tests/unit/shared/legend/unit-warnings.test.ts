@@ -18,6 +18,18 @@ describe('warnings about a unit', () => {
     ])
   })
 
+  it('lets units share a colour that a pattern tells apart', () => {
+    const plain = unit('1', 'Dr', '#cf9d88')
+    const dotted = {
+      id: '2',
+      properties: { ...unit('2', 'Dl', '#cf9d88').properties, pattern: 'sandstone' as const },
+    }
+    expect(unitWarnings(plain, [dotted])).toEqual([])
+    expect(unitWarnings(dotted, [{ ...dotted, id: '3' }])).toContain(
+      'Unit Dl has this colour and pattern too.',
+    )
+  })
+
   it('says when the label is hard to read', () => {
     expect(unitWarnings(unit('1', 'Dr', '#5a3030'), [])).toHaveLength(1)
   })

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { locationConfidences } from '@shared/items/confidence'
 import { itemSchema } from '@shared/items/item'
 import { faultTypes, foldForms } from '@shared/items/lines'
-import { drawEntry, drawUnitSwatch, legendEntries, legendEntryOf } from '@shared/symbols/legend-entries'
+import { drawEntry, legendEntries, legendEntryOf } from '@shared/symbols/legend-entries'
 import { boundsOf } from '@shared/symbols/place-marks'
 import {
   aDrawnAttitude,
@@ -88,18 +88,5 @@ describe('the entry of an item', () => {
     expect(legendEntryOf(aDrawnAttitude({ strike: null, dip: 0 })).title).toBe('Bedding, horizontal')
     expect(legendEntryOf(aDrawnAttitude({ overturned: true })).title).toBe('Bedding, overturned')
     expect(legendEntryOf(aDrawnAttitude({ overturned: true, type: 'joint' })).title).toBe('Joint, inclined')
-  })
-})
-
-describe('a unit’s swatch', () => {
-  it('keeps long labels inside', () => {
-    for (const label of ['Q', 'Dr', 'WWWWWWWWWWWW']) {
-      const text = drawUnitSwatch({ label, colour: '#cf9d87' }, { width: 10, height: 6 }).filter(
-        (mark) => mark.mark === 'text',
-      )
-      const bounds = boundsOf(text)
-      expect(bounds?.x).toBeGreaterThan(0)
-      expect((bounds?.x ?? 0) + (bounds?.width ?? 99)).toBeLessThan(10)
-    }
   })
 })
