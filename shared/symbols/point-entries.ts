@@ -16,12 +16,12 @@ import { drawLineation, lineationCaseOf } from './draw-lineation'
 import { drawPlace } from './draw-place'
 import type { LegendPointKind, PointEntry } from './legend-entry'
 
-/** Planes shown as samples: striking north-east, so that the mark and its figure stand lower right. */
+/** Planes shown as samples: striking east-north-east, so that they lie along the row with mark and figure below. */
 const samplePlanes: Record<AttitudeCase, { strike: number | null; dip: number; overturned: boolean }> = {
-  inclined: { strike: 60, dip: 35, overturned: false },
+  inclined: { strike: 70, dip: 35, overturned: false },
   horizontal: { strike: null, dip: 0, overturned: false },
-  vertical: { strike: 60, dip: 90, overturned: false },
-  overturned: { strike: 60, dip: 75, overturned: true },
+  vertical: { strike: 70, dip: 90, overturned: false },
+  overturned: { strike: 70, dip: 75, overturned: true },
 }
 
 type Traits = Pick<AttitudeProperties, 'undulating' | 'topsKnown'>
@@ -80,9 +80,9 @@ const sampleLines: Record<LineationCase, { trend: number | null; plunge: number 
   horizontal: { trend: 70, plunge: 0 },
   vertical: { trend: null, plunge: 90 },
 }
-/** A plane that dips toward the lower right, and a line that lies on it. */
-const samplePlane = { strike: 45, dip: 40, overturned: false }
-const sampleLineOnPlane = { trend: 75, plunge: 23 }
+/** A plane that lies along the row, and a line on it. */
+const samplePlane = { strike: 75, dip: 40, overturned: false }
+const sampleLineOnPlane = { trend: 105, plunge: 23 }
 
 type DescribedLine = ItemOf<'lineation'>['properties']
 const lineationId = (line: Pick<DescribedLine, 'type' | 'trend' | 'plunge' | 'plane'>): string =>
