@@ -2,6 +2,8 @@ import type { EntityManager } from 'typeorm'
 import type { Role } from '@shared/api/accounts'
 import type { Person } from '@shared/api/common'
 import type { Change } from '@shared/changes/change-set'
+import { mergeItem } from '@shared/changes/merge-item'
+import type { Item } from '@shared/items/item'
 import { problem } from '../../platform/problem'
 import { changedId, findConflicts, isEditorsItem, type Conflict, type SheetRows } from './check-changes'
 import { findUnreachable } from './find-unreachable'
@@ -77,30 +79,53 @@ export function requireEditorForLegend(
   throw problem('not-allowed', `Only an editor of this sheet changes ${what}.`)
 }
 
-/** Items that someone else changed since the base are not overwritten: all sides are shown instead. */
-export async function requireNoConflict(
+/** Lays changes on top of what others did to the same items since the base, where they touched other parts of them
+ *  (place, or what is said of it). Where both changed the same part nothing is overwritten: all sides are shown instead.
+ *  @returns the changes as they are to be stored, and the items among them that now hold both people's work */
+export async function mergeChanges(
   em: EntityManager,
   sheetId: string,
   author: Author,
-  base: number,
-  changes: readonly Change[],
+  { base, changes }: { base: number; changes: readonly Change[] },
   rows: SheetRows,
-): Promise<void> {
+): Promise<{ changes: readonly Change[]; merged: Item[] }> {
   const found = findConflicts(changes, base, rows)
-  if (found.length === 0) return
+  if (found.length === 0) return { changes, merged: [] }
   const ids = found.map(({ id }) => id)
   const bases = new Map((await selectItemsAt(em, sheetId, base, ids)).map((item) => [item.id, item]))
-  const conflicts = found.map((conflict): Conflict => ({ ...conflict, base: bases.get(conflict.id) ?? null }))
+  const met = found.map((conflict): Conflict => ({ ...conflict, base: bases.get(conflict.id) ?? null }))
+  const merged = met.flatMap(mergedItem)
+  const mergedIds = new Set(merged.map(({ id }) => id))
+  const conflicts = met.filter(({ id }) => !mergedIds.has(id))
+  if (conflicts.length > 0) throw conflictProblem(author, base, conflicts, rows)
+  const byId = new Map(merged.map((item) => [item.id, item]))
+  return {
+    changes: changes.map((change): Change => {
+      const item = byId.get(changedId(change))
+      return item ? { op: 'put', item } : change
+    }),
+    merged,
+  }
+}
+
+function mergedItem({ base, theirs, yours }: Conflict): Item[] {
+  if (!base || !theirs || !yours) return []
+  const merge = mergeItem(base, theirs, yours)
+  return merge.outcome === 'merged' ? [merge.item] : []
+}
+
+function conflictProblem(author: Author, base: number, items: readonly Conflict[], { latest }: SheetRows) {
   const names = new Set(
-    ids.map((id) => {
-      const other = rows.latest.get(id)?.author
+    items.map(({ id }) => {
+      const other = latest.get(id)?.author
       return !other || other.id === author.person.id ? 'You, elsewhere,' : other.name
     }),
   )
-  throw problem(
+  const what = items.length === 1 ? 'the same item' : `${items.length} of the same items`
+  return problem(
     'item-conflict',
-    `${[...names].join(' and ')} changed ${ids.length === 1 ? 'the same item' : `${ids.length} of the same items`} after revision ${base}. Nothing of yours was stored.`,
-    { items: conflicts },
+    `${[...names].join(' and ')} changed ${what} after revision ${base}. Nothing of yours was stored.`,
+    { items: [...items] },
   )
 }
 

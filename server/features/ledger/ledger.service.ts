@@ -13,9 +13,9 @@ import { changedId, findFaults, type SheetRows } from './check-changes'
 import { findEntryByKey, insertEntry, selectEntries } from './entries.queries'
 import {
   loadRows,
+  mergeChanges,
   requireDrafting,
   requireEditorForLegend,
-  requireNoConflict,
   requireReached,
   requireWithinSystem,
   type Author,
@@ -58,8 +58,13 @@ export class LedgerService {
   /** Takes in a change set: all or nothing, one entry. The same key with the same body gets the first answer again. */
   async post(sheetId: string, author: Author, key: string, changeSet: ChangeSet): Promise<PostedRevision> {
     return this.once(sheetId, author, { key, body: changeSet }, async (em, sheet, call) => {
-      const { changes, altered } = snapChanges(changeSet.changes)
-      const rows = await this.check(em, sheet, author, { ...changeSet, changes })
+      const snapped = snapChanges(changeSet.changes)
+      const { rows, changes, merged } = await this.check(em, sheet, author, {
+        ...changeSet,
+        changes: snapped.changes,
+      })
+      const mergedIds = new Set(merged.map(({ id }) => id))
+      const altered = [...snapped.altered.filter(({ id }) => !mergedIds.has(id)), ...merged]
       const edits = changes.map((change) => toEdit(change, rows))
       const entry = await this.append(em, sheet, author.person.id, edits, {
         kind: 'edit',
@@ -155,13 +160,13 @@ export class LedgerService {
     return written
   }
 
-  /** Refuses what may not be; answers with the rows that the changes meet. */
+  /** Refuses what may not be; answers with the rows that the changes meet, and the changes on top of what others did. */
   private async check(
     em: EntityManager,
     sheet: LockedSheet,
     author: Author,
     { base, changes }: Pick<ChangeSet, 'base' | 'changes'>,
-  ): Promise<SheetRows> {
+  ): Promise<{ rows: SheetRows; changes: readonly Change[]; merged: Item[] }> {
     requireReached(base, sheet.revision, 'base')
     requireWithinSystem(sheet, changes)
     const rows = await loadRows(em, sheet.id, changes)
@@ -170,8 +175,7 @@ export class LedgerService {
     if (faults.length > 0) {
       throw problem('invalid-input', faults[0]?.detail ?? '', { errors: faults.slice(0, 100) })
     }
-    await requireNoConflict(em, sheet.id, author, base, changes, rows)
-    return rows
+    return { rows, ...(await mergeChanges(em, sheet.id, author, { base, changes }, rows)) }
   }
 
   private async repeatAnswer(

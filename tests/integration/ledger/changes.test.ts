@@ -161,6 +161,27 @@ describe('two people', () => {
     expect(await desk.find(other.id)).toBeUndefined()
   })
 
+  it('merge on one item too when one moves it and the other says something else of it', async () => {
+    const contact = aContact()
+    await desk.post(desk.compiler, [put(contact)])
+    await desk.post(desk.editor, [put(aContact({ locationConfidence: 'inferred' }, contact.id))], { base: 2 })
+    const moved = {
+      ...contact,
+      geometry: {
+        ...contact.geometry,
+        coordinates: contact.geometry.coordinates.map(([x, y]) => [x, y + 25]),
+      },
+    }
+    const { status, body } = await desk.post(desk.compiler, [put(moved)], { base: 2 })
+    expect(status).toBe(201)
+    const stored = await desk.find(contact.id)
+    expect(stored).toMatchObject({
+      geometry: moved.geometry,
+      properties: { locationConfidence: 'inferred' },
+    })
+    expect(body.altered).toEqual([stored])
+  })
+
   it('are told when one removed what the other changes, and the other way round', async () => {
     const [a, b] = [aContact(), aContact()]
     await desk.post(desk.compiler, [put(a), put(b)])
