@@ -1,7 +1,7 @@
 import type { LineationProperties } from '../items/points'
 import { toRadians, type Degrees, type MM } from '../units'
 import type { LineationCase, LineationSymbol } from './definition'
-import { ARROW_TIP, lineations, plungeNumeral } from './definitions/lineations'
+import { arrowEnds, lineations, plungeNumeral } from './definitions/lineations'
 import type { DisplayList, Mark } from './display-list'
 import { dipFigure, planeMarks } from './draw-attitude'
 import { numeralBeside } from './numeral'
@@ -42,6 +42,16 @@ export function drawLineation(line: DrawnLineation, at: MM, convergence: Degrees
   return [...withPlunge, ...dipFigure(plane, { at, convergence, ink: withPlunge, turns: DIP_FIGURE_TURNS })]
 }
 
+/** The two ends of a lineation's arrow about its place, millimetres: what one aims at on a map beside the place itself.
+ *  Undefined for a vertical line, which has none. */
+export function arrowOf(line: DrawnLineation, convergence: Degrees): readonly [MM, MM] | undefined {
+  const lineationCase = lineationCaseOf(line)
+  if (lineationCase === 'vertical') return undefined
+  const [from, to] = arrowEnds[lineationCase]
+  const turn = turnTo(drawnTrend(line, convergence), [0, 0])
+  return [turn(from), turn(to)]
+}
+
 const drawnTrend = (line: DrawnLineation, convergence: Degrees): Degrees =>
   lineationCaseOf(line) === 'vertical' ? 0 : (line.trend ?? 0) - convergence
 
@@ -59,6 +69,6 @@ function plungeFigure(
   if (lineationCaseOf(line) !== 'plunging') return []
   const trend = drawnTrend(line, convergence)
   const away: MM = [Math.sin(toRadians(trend)), Math.cos(toRadians(trend))]
-  const place = { from: turnTo(trend, at)(ARROW_TIP), away, ink, furthest: FURTHEST_FIGURE }
+  const place = { from: turnTo(trend, at)(arrowEnds.plunging[1]), away, ink, furthest: FURTHEST_FIGURE }
   return [numeralBeside(String(Math.round(line.plunge)), place, { ...plungeNumeral, ink: 'black' })]
 }

@@ -10,6 +10,14 @@ export interface GroundBox {
   max: XY
 }
 
+/** Distances that count as a hit, metres. */
+export interface PickReach {
+  line: Metres
+  point: Metres
+  /** Arrows that symbols of points have beside their place, and how far from it one may end. */
+  arrows?: { furthest: Metres; of(item: PointItem): readonly XY[] | undefined }
+}
+
 /** The items that have a place, by where they are. Made anew after changes: for thousands of items that is a few
  *  milliseconds, and answers stay exact. */
 export class ItemIndex {
@@ -37,16 +45,13 @@ export class ItemIndex {
     return found.sort((a, b) => a - b).flatMap((index) => this.items[index] ?? [])
   }
 
-  /** Items within reach of a place: points before lines, the nearest first, drawn on top before drawn beneath.
-   *  @param reach distances that count as a hit for lines and for points, metres */
-  pick(at: XY, reach: { line: Metres; point: Metres }): (LineItem | PointItem)[] {
-    const far = Math.max(reach.line, reach.point)
+  /** Items within reach of a place: points before lines, the nearest first, drawn on top before drawn beneath. */
+  pick(at: XY, reach: PickReach): (LineItem | PointItem)[] {
+    const far = Math.max(reach.line, reach.point, reach.arrows?.furthest ?? 0)
     const hits = this.within(boxAround(at, far)).flatMap((item, order) => {
       const point = isPointItem(item)
-      const distance = point
-        ? gridDistance(item.geometry.coordinates, at)
-        : nearestOnLine(item.geometry.coordinates, at).distance
-      return distance <= (point ? reach.point : reach.line) ? [{ item, distance, point, order }] : []
+      const distance = point ? distanceToPoint(item, at, reach) : distanceToLine(item, at, reach)
+      return distance === undefined ? [] : [{ item, distance, point, order }]
     })
     hits.sort((a, b) => Number(b.point) - Number(a.point) || a.distance - b.distance || b.order - a.order)
     return hits.map((hit) => hit.item)
@@ -65,6 +70,21 @@ export class ItemIndex {
       (item): item is PointItem => isPointItem(item) && gridDistance(item.geometry.coordinates, at) <= radius,
     )
   }
+}
+
+/** How far a point is from a place, by its own place or by the arrow that its symbol has; undefined out of reach. */
+function distanceToPoint(item: PointItem, at: XY, { point, line, arrows }: PickReach): Metres | undefined {
+  const distance = gridDistance(item.geometry.coordinates, at)
+  if (distance <= point) return distance
+  const arrow = arrows && distance <= arrows.furthest + line ? arrows.of(item) : undefined
+  if (!arrow) return undefined
+  const beside = nearestOnLine(arrow, at).distance
+  return beside <= line ? beside : undefined
+}
+
+function distanceToLine(item: LineItem, at: XY, { line }: PickReach): Metres | undefined {
+  const { distance } = nearestOnLine(item.geometry.coordinates, at)
+  return distance <= line ? distance : undefined
 }
 
 const boxAround = ([east, north]: XY, reach: Metres): GroundBox => ({

@@ -1,5 +1,6 @@
 import { facePath } from '@shared/sheet-face/graticule'
 import { isLineItem, type Item } from '@shared/items/item'
+import { SYMBOL_REACH } from '@shared/symbols/symbol-reach'
 import { tracePath } from './canvas-surface'
 import { drawDrawing, groundPxPerMm } from './drawing'
 import type { Scene } from './scene'
@@ -16,9 +17,6 @@ export interface SheetPaint {
   settle: boolean
 }
 
-/** How far a point's symbol may reach beyond its place, millimetres. */
-const SYMBOL_REACH_MM = 12
-
 /** Draws the sheet in one pass: unit areas, items, frame. Returns nothing and keeps nothing: what is kept is in the scene. */
 export function paintSheet(context: CanvasRenderingContext2D, scene: Scene, paint: SheetPaint): void {
   const { view, ratio } = paint
@@ -34,7 +32,7 @@ export function paintSheet(context: CanvasRenderingContext2D, scene: Scene, pain
       drawDrawing(context, drawing, { view, pxPerMm: groundPxPerMm(view, drawing.mmPerMetre), ratio })
     }
   }
-  for (const item of scene.index.within(groundInView(view, SYMBOL_REACH_MM * symbolPx))) {
+  for (const item of scene.index.within(groundInView(view, SYMBOL_REACH * symbolPx))) {
     if (paint.isHidden(item)) continue
     const drawing = scene.drawingOf(item, mmPerMetre, paint.settle)
     const pxPerMm = isLineItem(item) ? groundPxPerMm(view, drawing.mmPerMetre) : symbolPx

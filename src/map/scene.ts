@@ -7,6 +7,7 @@ import { isLineItem, type Item, type LineItem, type PointItem } from '@shared/it
 import type { UnitProperties } from '@shared/items/legend'
 import { drawFace } from '@shared/symbols/draw-face'
 import { drawItem } from '@shared/symbols/draw-item'
+import { arrowOf } from '@shared/symbols/draw-lineation'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '@shared/symbols/frame'
 import { polyline } from '@shared/symbols/paths'
 import type { Metres, XY } from '@shared/units'
@@ -107,6 +108,14 @@ export class Scene {
       frame,
     )
     return this.frameDrawing
+  }
+
+  /** The arrow of a lineation on the ground, at the size its symbol is shown; undefined for what has none. */
+  arrowOf(item: PointItem, metresPerMm: Metres): XY[] | undefined {
+    if (item.kind !== 'lineation') return undefined
+    const [east, north] = item.geometry.coordinates
+    const arrow = arrowOf(item.properties, this.projection.convergenceAt([east, north]))
+    return arrow?.map(([x, y]): XY => [east + x * metresPerMm, north + y * metresPerMm])
   }
 
   /** The neatline as a path to clip to, in the frame's millimetres. */

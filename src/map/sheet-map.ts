@@ -1,38 +1,32 @@
-import OlMap from 'ol/Map'
-import View from 'ol/View'
-import { defaults as defaultInteractions } from 'ol/interaction/defaults'
-import MouseWheelZoom from 'ol/interaction/MouseWheelZoom'
-import { easeOut } from 'ol/easing'
+import type OlMap from 'ol/Map'
 import type { Face } from '@shared/api/faces'
 import type { Sheet } from '@shared/api/sheets'
 import type { SheetProjection } from '@shared/geometry/projection'
 import type { Item, LineItem, PointItem } from '@shared/items/item'
+import { SYMBOL_REACH } from '@shared/symbols/symbol-reach'
 import type { Metres, XY } from '@shared/units'
 import { isInFace, isInRings } from './in-face'
-import { itemBounds, type GroundBox } from './item-index'
-import { DOCKED_WIDTH, fitPage, pageBoxes, type PageBoxes } from './page-boxes'
+import type { GroundBox } from './item-index'
+import { openOlMap } from './open-ol-map'
+import { fitPage, pageBoxes, type PageBoxes, type PageGround } from './page-boxes'
 import { paintMarks, type Marks } from './paint-marks'
 import { paintSheet } from './paint-sheet'
 import { pointerOf, PointerGestures, type GestureHandlers } from './pointer-gestures'
-import { viewProjection } from './projection'
 import { Scene } from './scene'
 import { SheetLayer, viewOf } from './sheet-layer'
-import { printShare, pxPerMetreAt, symbolPxPerMm, toPx, type ViewFrame } from './view-frame'
+import { thinningStep } from './thinning'
+import { relativeScale, toPx, type ViewFrame } from './view-frame'
+import { middle, ViewMoves } from './view-moves'
 
 export type { GroundBox, Marks, PageBoxes, ViewFrame }
 export type { MapPointer } from './pointer-gestures'
 export type { Sketch } from './sketch'
 
-/** Farthest zooms, as shares of print size. */
-const MOST_SHARE = 16
 /** How far beyond the whole page one may zoom out. */
 const BEYOND_PAGE = 2.2
 /** How near to a line, and to a point's symbol, a click counts. */
 const LINE_REACH_PX = 7
 const POINT_REACH_MM = 3.2
-const ANIMATION_MS = 160
-/** Zoom of one notch of the wheel, powers of two. */
-const WHEEL_LEVELS = 0.5
 
 export interface SheetMapHandlers extends GestureHandlers {
   leave(): void
@@ -53,13 +47,21 @@ export interface SheetMapOptions {
 export class SheetMap {
   private readonly map: OlMap
   private readonly scene: Scene
+  private readonly moves: ViewMoves
   private readonly sheetLayer: SheetLayer
   private readonly marksLayer: SheetLayer
-  private marks: Marks = { selected: [], hovered: [], areas: [], sketch: null, place: null }
+  private marks: Marks = {
+    selected: [],
+    hovered: [],
+    areas: [],
+    sketch: null,
+    place: null,
+    others: [],
+    compared: [],
+  }
   private hidden = { item: (_item: Item): boolean => false, face: (_unit: string | null): boolean => false }
   private symbols: 'print' | 'screen' = 'print'
-  private last: { view: ViewFrame; boxes: PageBoxes } | null = null
-  private moved = false
+  private last: ViewFrame | null = null
 
   constructor(private readonly options: SheetMapOptions) {
     const { sheet, projection, target } = options
@@ -68,40 +70,28 @@ export class SheetMap {
       paintSheet(context, this.scene, {
         ...request,
         symbols: this.symbols,
-        isHidden: this.hidden.item,
+        isHidden: (item, step) => this.hidden.item(item) || this.givesWay(item, step),
         isFaceHidden: this.hidden.face,
       }),
     )
-    this.marksLayer = new SheetLayer(({ context, view, ratio }) =>
-      paintMarks(context, this.marks, { view, ratio, symbolPx: this.symbolPx(view) }),
-    )
-    this.map = new OlMap({
-      target,
-      controls: [],
-      interactions: defaultInteractions({
-        altShiftDragRotate: false,
-        pinchRotate: false,
-        doubleClickZoom: false,
-        shiftDragZoom: false,
-        keyboard: false,
-        mouseWheelZoom: false,
-      }).extend([
-        new MouseWheelZoom({ maxDelta: WHEEL_LEVELS, duration: reducesMotion() ? 0 : ANIMATION_MS }),
-      ]),
-      layers: [this.sheetLayer, this.marksLayer],
-      view: new View({
-        projection: viewProjection(sheet.crs),
-        center: middle(this.scene.bounds),
-        resolution: 10,
-        minResolution: 1 / pxPerMetreAt(MOST_SHARE, sheet.scale),
-        maxResolution: this.farthestResolution(target),
-        enableRotation: false,
-        constrainResolution: false,
-        showFullExtent: true,
-      }),
+    const marks = this.paintMarks.bind(this)
+    this.marksLayer = new SheetLayer(marks)
+    this.map = openOlMap(target, sheet, [this.sheetLayer, this.marksLayer], {
+      center: middle(this.scene.bounds),
+      farthest: this.farthestResolution(target),
     })
+    this.moves = new ViewMoves(this.map, this.ground(), () => this.symbols)
     this.listen(options.handlers)
     void this.waitForLato()
+  }
+
+  private *paintMarks(request: {
+    context: CanvasRenderingContext2D
+    view: ViewFrame
+    ratio: number
+  }): Generator<undefined> {
+    const { symbolPx } = relativeScale(request.view, this.scene.sheet.scale, this.symbols)
+    paintMarks(request.context, this.marks, { ...request, symbolPx })
   }
 
   /** The page cannot be zoomed out to a stamp. */
@@ -122,19 +112,11 @@ export class SheetMap {
     viewport.addEventListener('pointerleave', () => handlers.leave())
     this.map.on('precompose', ({ frameState }) => {
       if (!frameState) return
-      const view = viewOf(frameState)
-      this.last = { view, boxes: pageBoxes(view, this.ground(), this.symbols) }
-      handlers.frame(view, this.last.boxes)
+      this.last = viewOf(frameState)
+      handlers.frame(this.last, pageBoxes(this.last, this.ground(), this.symbols))
     })
     this.map.on('moveend', () => {
-      if (this.last) handlers.rest(this.last.view)
-    })
-    this.map.on('change:size', () => {
-      // A page that was shown whole stays whole when the window changes; any other view stays where it is.
-      if (!this.moved) this.showPage(false)
-    })
-    this.map.on('movestart', () => {
-      this.moved ||= this.map.getView().getInteracting() || this.map.getView().getAnimating()
+      if (this.last) handlers.rest(this.last)
     })
   }
 
@@ -146,12 +128,8 @@ export class SheetMap {
     this.sheetLayer.touch()
   }
 
-  private ground() {
+  private ground(): PageGround {
     return { ...this.scene.bounds, scale: this.scene.sheet.scale }
-  }
-
-  private symbolPx(view: ViewFrame): number {
-    return symbolPxPerMm(printShare(view.pxPerMetre, this.scene.sheet.scale), this.symbols)
   }
 
   setItems(items: readonly Item[]): void {
@@ -176,8 +154,30 @@ export class SheetMap {
   }
 
   setMarks(change: Partial<Marks>): void {
+    const before = this.marks.selected
     this.marks = { ...this.marks, ...change }
     this.marksLayer.touch()
+    // What is selected is shown whatever crowds it.
+    const isCrowded = [...before, ...this.marks.selected].some((item) =>
+      this.scene.isThinned(item, this.step()),
+    )
+    if (change.selected && isCrowded) this.sheetLayer.touch()
+  }
+
+  /** Point symbols that are not drawn at this zoom because more important ones stand too near. */
+  thinned(): PointItem[] {
+    const step = this.step()
+    if (step === 0) return []
+    return this.scene.index.points.filter((item) => this.givesWay(item, step) && !this.hidden.item(item))
+  }
+
+  private givesWay(item: Item, step: number): boolean {
+    return this.scene.isThinned(item, step) && !this.marks.selected.some(({ id }) => id === item.id)
+  }
+
+  private step(): number {
+    const view = { pxPerMetre: 1 / this.metresPerPx() }
+    return thinningStep(relativeScale(view, this.scene.sheet.scale, this.symbols).scale)
   }
 
   setCursor(cursor: string): void {
@@ -185,21 +185,26 @@ export class SheetMap {
   }
 
   metresPerPx(): Metres {
-    return this.map.getView().getResolution() ?? 1
+    return this.moves.metresPerPx()
   }
 
-  /** Share of print size that the ground is shown at, per cent. */
   percent(): number {
-    return 100 * printShare(1 / this.metresPerPx(), this.scene.sheet.scale)
+    return this.moves.percent()
   }
 
-  /** Items at a place, the likeliest first; hidden ones are not there. */
+  /** Items at a place, the likeliest first; those that are not drawn are not there. */
   pick(at: XY): (LineItem | PointItem)[] {
     const metresPerPx = this.metresPerPx()
-    const symbolPx = symbolPxPerMm(this.percent() / 100, this.symbols)
+    const { symbolPx } = relativeScale({ pxPerMetre: 1 / metresPerPx }, this.scene.sheet.scale, this.symbols)
+    const step = this.step()
+    const metresPerMm = symbolPx * metresPerPx
+    const arrows = {
+      furthest: SYMBOL_REACH * metresPerMm,
+      of: (item: PointItem) => this.scene.arrowOf(item, metresPerMm),
+    }
     return this.scene.index
-      .pick(at, { line: LINE_REACH_PX * metresPerPx, point: POINT_REACH_MM * symbolPx * metresPerPx })
-      .filter((item) => !this.hidden.item(item))
+      .pick(at, { line: LINE_REACH_PX * metresPerPx, point: POINT_REACH_MM * metresPerMm, arrows })
+      .filter((item) => !this.hidden.item(item) && !this.givesWay(item, step))
   }
 
   linesNear(at: XY, radius: Metres): LineItem[] {
@@ -220,88 +225,44 @@ export class SheetMap {
     return isInRings([this.options.sheet.neatline], at)
   }
 
-  /** Whether the view is the one of `showPage`, to within a pixel. */
   isPageShown(): boolean {
-    const [width, height] = this.map.getSize() ?? []
-    if (!width || !height) return false
-    const fit = fitPage({ width, height }, this.ground(), this.symbols)
-    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
-    const step = this.metresPerPx()
-    const moved = Math.hypot(east - fit.center[0], north - fit.center[1]) / step
-    return moved < 1 && Math.abs(fit.pxPerMetre * step - 1) < 0.001
+    return this.moves.isPageShown()
   }
 
-  /** Shows the whole page. */
   showPage(animated = true): void {
-    const [width, height] = this.map.getSize() ?? []
-    if (!width || !height) return
-    const { center, pxPerMetre } = fitPage({ width, height }, this.ground(), this.symbols)
-    this.go(center, pxPerMetre, animated)
-    this.moved = false
+    this.moves.showPage(animated)
   }
 
-  /** Moves so that some ground fills the free part of the view, but no nearer than 200 %. */
-  showGround({ min, max }: GroundBox): void {
-    const [width = 1, height = 1] = this.map.getSize() ?? []
-    const free = { width: Math.max(120, width - DOCKED_WIDTH - 80), height: Math.max(120, height - 80) }
-    const fit = Math.min(
-      free.width / Math.max(1, max[0] - min[0]),
-      free.height / Math.max(1, max[1] - min[1]),
-    )
-    const pxPerMetre = Math.min(fit, pxPerMetreAt(2, this.scene.sheet.scale))
-    const [east, north] = middle({ min, max })
-    this.go([east + DOCKED_WIDTH / 2 / pxPerMetre, north], pxPerMetre, true)
+  showGround(ground: GroundBox): void {
+    this.moves.showGround(ground)
   }
 
   showItems(items: readonly (LineItem | PointItem)[]): void {
-    const boxes = items.map(itemBounds)
-    if (boxes.length === 0) return
-    this.showGround({
-      min: [Math.min(...boxes.map(({ min }) => min[0])), Math.min(...boxes.map(({ min }) => min[1]))],
-      max: [Math.max(...boxes.map(({ max }) => max[0])), Math.max(...boxes.map(({ max }) => max[1]))],
-    })
+    this.moves.showItems(items)
   }
 
   showPlace(at: XY, percent: number): void {
-    this.moved = true
-    this.go(at, pxPerMetreAt(percent / 100, this.scene.sheet.scale), false)
+    this.moves.showPlace(at, percent)
   }
 
-  /** Middle of the view and its scale, for an address. */
   place(): { at: XY; percent: number } {
-    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
-    return { at: [east, north], percent: this.percent() }
+    return this.moves.place()
   }
 
   /** Moves a place into the middle of the view if it is not in view. */
   bringIntoView(at: XY): void {
     if (!this.last) return
-    const { view } = this.last
-    const [x, y] = toPx(view, at)
-    if (x < 0 || y < 0 || x > view.width || y > view.height) this.go(at, view.pxPerMetre, true)
+    const [x, y] = toPx(this.last, at)
+    const isOut = x < 0 || y < 0 || x > this.last.width || y > this.last.height
+    if (isOut) this.moves.go(at, this.last.pxPerMetre, true)
   }
 
   panBy(rightPx: number, downPx: number): void {
-    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
-    const step = this.metresPerPx()
-    this.go([east + rightPx * step, north - downPx * step], 1 / step, true)
+    this.moves.panBy(rightPx, downPx)
   }
 
   zoomBy(factor: number): void {
-    const [east = 0, north = 0] = this.map.getView().getCenter() ?? []
-    this.go([east, north], factor / this.metresPerPx(), true)
-  }
-
-  private go(center: XY, pxPerMetre: number, animated: boolean): void {
-    const view = this.map.getView()
-    const resolution = 1 / pxPerMetre
-    view.cancelAnimations()
-    if (!animated || reducesMotion()) {
-      view.setCenter(center)
-      view.setResolution(resolution)
-      return
-    }
-    view.animate({ center, resolution, duration: ANIMATION_MS, easing: easeOut })
+    this.moves.zoomBy(factor)
   }
 
   close(): void {
@@ -309,7 +270,3 @@ export class SheetMap {
     this.map.dispose()
   }
 }
-
-const middle = ({ min, max }: GroundBox): XY => [(min[0] + max[0]) / 2, (min[1] + max[1]) / 2]
-
-const reducesMotion = (): boolean => window.matchMedia('(prefers-reduced-motion: reduce)').matches

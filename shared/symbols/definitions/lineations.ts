@@ -92,8 +92,18 @@ export const lineations: readonly LineationSymbol[] = [
   },
 ]
 
-/** Tip of a plunging line's arrow, in its symbol's frame: the figure stands beyond it. */
-export const ARROW_TIP: MM = [0, LENGTH]
+/** The two ends of a line's arrow, in its symbol's frame: a plunging one's tip, beyond which its figure stands, is the
+ *  second. */
+export const arrowEnds: Record<'plunging' | 'horizontal', readonly [MM, MM]> = {
+  plunging: [
+    [0, 0],
+    [0, LENGTH],
+  ],
+  horizontal: [
+    [0, -HALF],
+    [0, HALF],
+  ],
+}
 
 /** The plunge's figure: upright, beyond the arrow's head. */
 export const plungeNumeral = { size: 2.3, weight: 700, gap: 0.45 } as const

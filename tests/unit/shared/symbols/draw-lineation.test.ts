@@ -3,8 +3,8 @@ import { describe, expect, it } from 'vitest'
 import { sheetProjection } from '@shared/geometry/projection'
 import { lineationPropertiesSchema, lineationTypes, planeTypes } from '@shared/items/points'
 import { drawItem } from '@shared/symbols/draw-item'
-import { drawLineation, lineationCaseOf, type DrawnLineation } from '@shared/symbols/draw-lineation'
-import { POINT_REACH } from '@shared/symbols/point-reach'
+import { arrowOf, drawLineation, lineationCaseOf, type DrawnLineation } from '@shared/symbols/draw-lineation'
+import { SYMBOL_REACH } from '@shared/symbols/symbol-reach'
 import type { MM } from '@shared/units'
 import { utmConvergence, utmDefinition } from '../../../reference/geodesy'
 import { along, closestInk, furthestInk, inkOf, numeralsOf, vectorOf } from '../../../support/drawn-marks'
@@ -68,6 +68,23 @@ describe.each(lineationTypes)('the arrow of a %s', (type) => {
 })
 
 describe('a lineation', () => {
+  it('has its arrow where it is drawn, for whoever aims at it', () => {
+    for (const plunge of [0, 35]) {
+      for (const trend of everyAzimuth) {
+        const line = aLineation({ trend, plunge })
+        const [from, to] = arrowOf(line, 2) ?? [
+          [NaN, NaN],
+          [NaN, NaN],
+        ]
+        const toward = vectorOf(trend - 2)
+        const ahead = inkOf(drawLineation(line, [0, 0], 2)).map((point) => along(point, toward))
+        expect(along(to, toward)).toBeCloseTo(Math.max(...ahead), 9)
+        expect(along(from, toward)).toBeCloseTo(Math.min(...ahead), 9)
+      }
+    }
+    expect(arrowOf(aLineation({ trend: null, plunge: 90 }), 0)).toBeUndefined()
+  })
+
   it('judges its case by the whole degrees it prints', () => {
     expect(lineationCaseOf({ trend: 10, plunge: 0.4 })).toBe('horizontal')
     expect(lineationCaseOf({ trend: 10, plunge: 0.6 })).toBe('plunging')
@@ -119,7 +136,7 @@ describe('a lineation on a plane', () => {
       fc.property(anyLine, (line) => {
         const list = drawLineation(line, [0, 0], 0)
         for (const numeral of numeralsOf(list)) expect(closestInk(list, numeral)).toBeGreaterThan(CLEAR)
-        expect(furthestInk(list)).toBeLessThan(POINT_REACH)
+        expect(furthestInk(list)).toBeLessThan(SYMBOL_REACH)
       }),
       { numRuns: 1500, seed: 20261201 },
     )

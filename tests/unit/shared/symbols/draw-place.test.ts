@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { planeTypes, stationTypes } from '@shared/items/points'
 import { drawAttitude } from '@shared/symbols/draw-attitude'
 import { drawPlace, placeSymbolOf } from '@shared/symbols/draw-place'
-import { POINT_REACH } from '@shared/symbols/point-reach'
+import { SYMBOL_REACH } from '@shared/symbols/symbol-reach'
 import { along, closestInk, furthestInk, inkOf, numeralsOf, vectorOf } from '../../../support/drawn-marks'
 
 const everyAzimuth = Array.from({ length: 360 }, (_, azimuth) => azimuth)
@@ -57,7 +57,7 @@ describe('a plane’s symbol', () => {
         for (const dip of [0, 5, 88, 90]) {
           for (const topsKnown of [false, true]) {
             const plane = { type, strike, dip, overturned: topsKnown, undulating: topsKnown, topsKnown }
-            expect(furthestInk(drawAttitude(plane, [0, 0], 0))).toBeLessThan(POINT_REACH)
+            expect(furthestInk(drawAttitude(plane, [0, 0], 0))).toBeLessThan(SYMBOL_REACH)
           }
         }
       }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { isInFace } from '@/map/in-face'
 import { ItemIndex } from '@/map/item-index'
-import { thinLine } from '@/map/thin-line'
+import type { XY } from '@shared/units'
 import { aLine, aPoint, aUnit } from '../../../support/sheet-items'
 
 const contact = aLine(
@@ -56,6 +56,23 @@ describe('picking', () => {
     expect(slanting.pick([90, 10], { line: 5, point: 5 })).toEqual([])
   })
 
+  it('finds a point by the arrow of its symbol too, and only within the arrow', () => {
+    const lineation = aPoint('lineation', [0, 0], { trend: 90, plunge: 20 })
+    const arrows = {
+      furthest: 12,
+      of: () =>
+        [
+          [0, 0],
+          [6, 0],
+        ] as XY[],
+    }
+    const found = (at: XY) => new ItemIndex([lineation]).pick(at, { line: 1, point: 3, arrows }).length
+    expect(found([5.5, 0.8])).toBe(1)
+    expect(found([5.5, 1.2])).toBe(0)
+    expect(found([-2.5, 0])).toBe(1)
+    expect(found([-5.5, 0])).toBe(0)
+  })
+
   it('finds nothing on an empty sheet', () => {
     expect(new ItemIndex([aUnit({})]).pick([0, 0], { line: 5, point: 5 })).toEqual([])
   })
@@ -65,27 +82,6 @@ describe('what is in view', () => {
   it('comes in the order of drawing: contacts, faults, points', () => {
     const all = index.within({ min: [-10, -10], max: [200, 200] })
     expect(all.map(({ kind }) => kind)).toEqual(['contact', 'fault', 'station'])
-  })
-})
-
-describe('a line for drawing', () => {
-  it('loses vertices nearer than the step but never its ends', () => {
-    expect(
-      thinLine(
-        [
-          [0, 0],
-          [0.4, 0],
-          [0.8, 0],
-          [1.2, 0],
-          [1.3, 0],
-        ],
-        1,
-      ),
-    ).toEqual([
-      [0, 0],
-      [1.2, 0],
-      [1.3, 0],
-    ])
   })
 })
 
