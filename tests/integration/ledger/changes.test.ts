@@ -165,18 +165,19 @@ describe('two people', () => {
     const contact = aContact()
     await desk.post(desk.compiler, [put(contact)])
     await desk.post(desk.editor, [put(aContact({ locationConfidence: 'inferred' }, contact.id))], { base: 2 })
-    const moved = {
-      ...contact,
-      geometry: {
-        ...contact.geometry,
-        coordinates: contact.geometry.coordinates.map(([x, y]) => [x, y + 25]),
-      },
+    const geometry = {
+      type: 'LineString',
+      coordinates: [
+        [285_000, 5_280_025],
+        [286_000, 5_281_025],
+      ],
     }
+    const moved = { ...contact, geometry }
     const { status, body } = await desk.post(desk.compiler, [put(moved)], { base: 2 })
     expect(status).toBe(201)
     const stored = await desk.find(contact.id)
     expect(stored).toMatchObject({
-      geometry: moved.geometry,
+      geometry,
       properties: { locationConfidence: 'inferred' },
     })
     expect(body.altered).toEqual([stored])
