@@ -1,17 +1,19 @@
 import type { Face } from '../api/faces'
 import type { Sheet } from '../api/sheets'
 import { sheetProjection } from '../geometry/projection'
-import { kindWords, type Item } from '../items/item'
+import { kindWords, type Item, type ItemOf } from '../items/item'
 import type { UnitProperties } from '../items/legend'
 import type { DisplayList, Path } from '../symbols/display-list'
 import { drawFace } from '../symbols/draw-face'
 import { drawItem } from '../symbols/draw-item'
+import type { LabelStand } from '../symbols/draw-unit-label'
 import { drawingOrder } from '../symbols/drawing-order'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '../symbols/frame'
 import { polyline } from '../symbols/paths'
 import { unitFills, type Printing } from '../symbols/unit-fill'
 import { drawSheetFrame, facePath } from './graticule'
 import { neatlineBounds, pageLayout } from './page-layout'
+import { standLabels } from './stand-labels'
 
 /** A part of the page, drawn when asked for, so that a large sheet can be drawn a little at a time. */
 export interface SheetPart {
@@ -54,6 +56,7 @@ export function composeFace(
   )
   const anchor = toMm(frame, neatlineBounds(sheet.neatline).min)
   const unitOf = (id: string): UnitProperties | undefined => units.get(id)
+  const standOf = labelStands(faces, items, frame, unitOf)
   return [
     ...inParts(faces).map((some) => ({
       words: 'unit areas',
@@ -72,12 +75,27 @@ export function composeFace(
         draw: () =>
           clipped(
             kindWords[kind].many,
-            some.flatMap((item) => drawItem(item, frame, { unitOf })),
+            some.flatMap((item) => drawItem(item, frame, { unitOf, standOf })),
           ),
       })),
     ),
     { words: 'frame', draw: () => drawSheetFrame(sheet, sheetProjection(sheet.crs.proj4), frame) },
   ]
+}
+
+/** Where unit labels stand, worked out when the first of them is drawn. */
+function labelStands(
+  faces: readonly Face[],
+  items: readonly Item[],
+  frame: DrawingFrame,
+  unitOf: (id: string) => UnitProperties | undefined,
+): (label: string) => LabelStand | undefined {
+  let stands: Map<string, LabelStand> | undefined
+  return (label) => {
+    const labels = (): ItemOf<'unit-label'>[] => items.filter((item) => item.kind === 'unit-label')
+    stands ??= standLabels(faces, labels(), frame, unitOf)
+    return stands.get(label)
+  }
 }
 
 export const unitsById = (items: readonly Item[]): Map<string, UnitProperties> =>

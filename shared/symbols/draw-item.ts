@@ -1,24 +1,26 @@
 import type { Item, ItemOf, LineItem } from '../items/item'
 import type { UnitProperties } from '../items/legend'
-import type { MM } from '../units'
 import type { LineSymbol } from './definition'
 import { contacts } from './definitions/contacts'
 import { faults } from './definitions/faults'
 import { folds } from './definitions/folds'
 import { otherLines } from './definitions/other-lines'
-import { unitLabelType } from './definitions/points'
-import type { DisplayList, Mark } from './display-list'
+import type { DisplayList } from './display-list'
 import { drawAttitude } from './draw-attitude'
 import { drawLine } from './draw-line'
 import { drawLineation } from './draw-lineation'
 import { drawPlace } from './draw-place'
+import { drawUnitLabel, unitLabelText, type LabelStand } from './draw-unit-label'
 import { toMm, type DrawingFrame } from './frame'
 import type { LineDrawing } from './line-drawing'
+import { placeMarks } from './place-marks'
 import { plungeHeads } from './plunge-heads'
 
 /** What some items' drawings depend on besides themselves. */
 export interface DrawingContext {
   unitOf(id: string): UnitProperties | undefined
+  /** Where the letters of a unit label stand, if not at its place. */
+  standOf?(label: string): LabelStand | undefined
 }
 
 /** All line symbols, in the order of the palette. */
@@ -55,7 +57,11 @@ export function drawItem(item: Item, frame: DrawingFrame, context?: DrawingConte
     case 'station':
       return drawPointItem(item, frame)
     case 'unit-label':
-      return [unitLabelMark(item, toMm(frame, item.geometry.coordinates), context)]
+      return drawUnitLabel(
+        unitLabelText(item.properties, (id) => context?.unitOf(id)),
+        toMm(frame, item.geometry.coordinates),
+        context?.standOf?.(item.id),
+      )
     case 'unit':
     case 'sheet-face':
       return []
@@ -76,10 +82,15 @@ function drawPointItem(item: ItemOf<'attitude' | 'lineation' | 'station'>, frame
 }
 
 function drawLineItem(item: LineItem, frame: DrawingFrame): DisplayList {
-  const points = item.geometry.coordinates.map((place) => toMm(frame, place))
+  // Measured from the line's own first vertex, so that rounding is the same wherever the drawing begins, and moved there last.
+  const { coordinates } = item.geometry
+  const start = coordinates[0] ?? frame.origin
+  const own = { ...frame, origin: start }
+  const points = coordinates.map((place) => toMm(own, place))
+  const [dx, dy] = toMm(frame, start)
   const { locationConfidence, identity } = item.properties
   const isLeft = 'side' in item.properties && item.properties.side === 'left'
-  return drawLine(lineSymbolOf(item), points, {
+  const list = drawLine(lineSymbolOf(item), points, {
     locationConfidence,
     identity,
     attributes: { side: isLeft ? 1 : -1 },
@@ -88,23 +99,9 @@ function drawLineItem(item: LineItem, frame: DrawingFrame): DisplayList {
       : {}),
     ...(item.kind === 'fault' ? dipOf(item) : {}),
   })
+  return dx === 0 && dy === 0 ? list : placeMarks(list, ([x, y]) => [x + dx, y + dy])
 }
 
 /** A fault plane's dip, by the whole degrees that are printed; one that lies flat dips nowhere. */
 const dipOf = ({ properties: { dip } }: ItemOf<'fault'>): Pick<LineDrawing, 'dip'> =>
   dip === null || Math.round(dip) === 0 ? {} : { dip: { degrees: dip, figure: true } }
-
-function unitLabelMark(item: ItemOf<'unit-label'>, at: MM, context: DrawingContext | undefined): Mark {
-  const label = context?.unitOf(item.properties.unit)?.label
-  const doubt = item.properties.identity === 'questionable' ? '?' : ''
-  return {
-    mark: 'text',
-    text: label === undefined ? '?' : label + doubt,
-    at,
-    size: unitLabelType.size,
-    weight: unitLabelType.weight,
-    ink: 'black',
-    align: 'middle',
-    halo: unitLabelType.halo,
-  }
-}

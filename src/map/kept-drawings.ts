@@ -11,6 +11,7 @@ type Placed = LineItem | PointItem
 export class KeptDrawings {
   private lines = new WeakMap<Placed, Map<number, Drawing>>()
   private points = new WeakMap<Placed, Drawing>()
+  private labels = new WeakMap<Placed, Drawing>()
 
   /** The drawing for a band, made where there is none yet. */
   of(item: Placed, band: number, make: () => Drawing): Drawing {
@@ -18,13 +19,13 @@ export class KeptDrawings {
     if (known) return known
     const made = make()
     if (isLineItem(item)) this.keep(item, band, made)
-    else this.points.set(item, made)
+    else this.withoutBands(item).set(item, made)
     return made
   }
 
   /** Whatever drawing there is, of the nearest band: it will do while the view moves. */
   nearest(item: Placed, band: number): Drawing | undefined {
-    if (!isLineItem(item)) return this.points.get(item)
+    if (!isLineItem(item)) return this.withoutBands(item).get(item)
     const bands = this.lines.get(item)
     if (!bands) return undefined
     let best: number | undefined
@@ -37,15 +38,20 @@ export class KeptDrawings {
   forget(): void {
     this.lines = new WeakMap()
     this.points = new WeakMap()
+    this.labels = new WeakMap()
   }
 
-  /** Letters of units have changed. */
-  forgetPoints(): void {
-    this.points = new WeakMap()
+  /** Letters of units, or the room they have, have changed. */
+  forgetLabels(): void {
+    this.labels = new WeakMap()
+  }
+
+  private withoutBands(item: Placed): WeakMap<Placed, Drawing> {
+    return item.kind === 'unit-label' ? this.labels : this.points
   }
 
   private known(item: Placed, band: number): Drawing | undefined {
-    return isLineItem(item) ? this.lines.get(item)?.get(band) : this.points.get(item)
+    return isLineItem(item) ? this.lines.get(item)?.get(band) : this.withoutBands(item).get(item)
   }
 
   private keep(item: Placed, band: number, drawing: Drawing): void {

@@ -1,0 +1,136 @@
+import type { Face } from '../api/faces'
+import type { Box } from '../geometry/box'
+import { boxAround, boxesMeet, edgeMeetsBox, grown, isInRings } from '../geometry/box-edges'
+import type { ItemOf } from '../items/item'
+import type { UnitProperties } from '../items/legend'
+import { unitLabelSize, unitLabelText, type LabelStand } from '../symbols/draw-unit-label'
+import { toMm, type DrawingFrame } from '../symbols/frame'
+import type { Millimetres, MM } from '../units'
+
+type Label = ItemOf<'unit-label'>
+
+/** Air that letters keep from the edges of areas, and from other letters. */
+const AIR: Millimetres = 0.35
+/** How far letters may be moved within their area, and how far out of it. */
+const REACH = { within: 7, outside: 14 } as const
+const STEP: Millimetres = 0.8
+const DIRECTIONS = 16
+/** What a place outside the area costs beside its distance: for each boundary and each other label beneath the letters, and
+ *  for lying in no area, as off the sheet. */
+const COST = { boundary: 4, letters: 25, offSheet: 40 } as const
+
+interface Area {
+  rings: MM[][]
+  box: Box
+}
+
+/** Where the letters of units stand at print size: at the label's place where they fit into its area, else at the nearest
+ *  place in the area where they do, else outside it with a leader, where they cover least. A label in no area, as where areas
+ *  are still to be built, stays at its place.
+ *  @returns the labels that move, by id
+ *  Source: symbolization.md section 5: inside the area, else with a leader. The search is our own. */
+export function standLabels(
+  faces: readonly Face[],
+  labels: readonly Label[],
+  frame: DrawingFrame,
+  unitOf: (id: string) => UnitProperties | undefined,
+): Map<string, LabelStand> {
+  const areas = faces.map((face) => areaOf(face, frame))
+  const letters = labels.map((label) => {
+    const place = toMm(frame, label.geometry.coordinates)
+    const size = unitLabelSize(unitLabelText(label.properties, unitOf))
+    return { id: label.id, place, size, box: grown(boxAround(place, size), AIR) }
+  })
+  const moved = new Map<string, LabelStand>()
+  for (const each of letters) {
+    const area = areas.find(({ box, rings }) => isInBox(box, each.place) && isInRings(rings, each.place))
+    if (!area || fits(each.box, area)) continue
+    const taken = letters.flatMap((other) => (other === each ? [] : [other.box]))
+    const stand = within(each, area, taken) ?? outside(each, area, areas, taken)
+    each.box = grown(boxAround(shift(each.place, stand.offset), each.size), AIR)
+    moved.set(each.id, stand)
+  }
+  return moved
+}
+
+function areaOf(face: Face, frame: DrawingFrame): Area {
+  const rings = face.rings.map((ring) => ring.map((xy) => toMm(frame, xy)))
+  let [left, bottom, right, top] = [Infinity, Infinity, -Infinity, -Infinity]
+  for (const [x, y] of rings[0] ?? []) {
+    left = Math.min(left, x)
+    right = Math.max(right, x)
+    bottom = Math.min(bottom, y)
+    top = Math.max(top, y)
+  }
+  return { rings, box: { x: left, y: bottom, width: right - left, height: top - bottom } }
+}
+
+const shift = ([x, y]: MM, [dx, dy]: MM): MM => [x + dx, y + dy]
+
+const isInBox = (box: Box, [x, y]: MM): boolean =>
+  x >= box.x && x <= box.x + box.width && y >= box.y && y <= box.y + box.height
+
+/** Number of an area's edges that run through a box. */
+function edgesThrough({ rings, box: bounds }: Area, box: Box): number {
+  if (!boxesMeet(bounds, box)) return 0
+  let count = 0
+  for (const ring of rings) {
+    for (let index = 1; index < ring.length; index++) {
+      const [from, to] = [ring[index - 1], ring[index]]
+      if (from && to && edgeMeetsBox(from, to, box)) count++
+    }
+  }
+  return count
+}
+
+/** Whether letters lie in an area whole. */
+const fits = (box: Box, area: Area): boolean =>
+  isInRings(area.rings, [box.x + box.width / 2, box.y + box.height / 2]) && edgesThrough(area, box) === 0
+
+/** Ways out from a place, the nearest first; of one distance, to the right first, then round. */
+function offsets(from: Millimetres, to: Millimetres): MM[] {
+  const found: MM[] = []
+  for (let reach = from; reach <= to; reach += STEP) {
+    for (let index = 0; index < DIRECTIONS; index++) {
+      const turn = (index / DIRECTIONS) * 2 * Math.PI
+      found.push([reach * Math.cos(turn), reach * Math.sin(turn)])
+    }
+  }
+  return found
+}
+
+interface Letters {
+  place: MM
+  size: { width: Millimetres; height: Millimetres }
+}
+
+const boxAt = ({ place, size }: Letters, offset: MM): Box => grown(boxAround(shift(place, offset), size), AIR)
+
+function within(letters: Letters, area: Area, taken: readonly Box[]): LabelStand | undefined {
+  const offset = offsets(STEP, REACH.within).find((candidate) => {
+    const box = boxAt(letters, candidate)
+    return fits(box, area) && !taken.some((other) => boxesMeet(other, box))
+  })
+  return offset && { offset, leader: false }
+}
+
+/** The place outside that covers least; without any, the letters stay where they are. */
+function outside(letters: Letters, area: Area, areas: readonly Area[], taken: readonly Box[]): LabelStand {
+  const window = grown(boxAt(letters, [0, 0]), REACH.outside)
+  const nearAreas = areas.filter(({ box }) => boxesMeet(box, window))
+  const nearLetters = taken.filter((box) => boxesMeet(box, window))
+  let best: { offset: MM; cost: number } | undefined
+  for (const offset of offsets(letters.size.height * 1.5, REACH.outside)) {
+    const distance = Math.hypot(...offset)
+    if (best && distance >= best.cost) break
+    const box = boxAt(letters, offset)
+    const middle = shift(letters.place, offset)
+    if (isInRings(area.rings, middle) || edgesThrough(area, box) > 0) continue
+    const boundaries = nearAreas.filter((other) => edgesThrough(other, box) > 0).length
+    const covered = nearLetters.filter((other) => boxesMeet(other, box)).length
+    const isOff = !nearAreas.some(({ rings }) => isInRings(rings, middle))
+    const cost = distance + boundaries * COST.boundary + covered * COST.letters + (isOff ? COST.offSheet : 0)
+    if (!best || cost < best.cost) best = { offset, cost }
+  }
+  return best ? { offset: best.offset, leader: true } : { offset: [0, 0], leader: false }
+}
