@@ -1,45 +1,61 @@
 import { facePath } from '@shared/sheet-face/graticule'
-import { isLineItem, type Item } from '@shared/items/item'
+import { isLineItem, type Item, type LineItem } from '@shared/items/item'
 import { SYMBOL_REACH } from '@shared/symbols/symbol-reach'
-import { tracePath } from './canvas-surface'
+import { tracePath } from './canvas-paths'
 import { drawDrawing, groundPxPerMm } from './drawing'
+import { paintPlain } from './paint-plain'
 import type { Scene } from './scene'
-import { fromPx, printShare, symbolPxPerMm, toPx, type ViewFrame } from './view-frame'
+import { thinningStep } from './thinning'
+import { fromPx, relativeScale, toPx, type ViewFrame } from './view-frame'
+import { bandOf } from './zoom-bands'
 
 export interface SheetPaint {
   view: ViewFrame
   /** Device pixels per px. */
   ratio: number
   symbols: 'print' | 'screen'
-  isHidden(item: Item): boolean
+  /** @param step how far symbols are thinned out at this zoom */
+  isHidden(item: Item, step: number): boolean
   isFaceHidden(unit: string | null): boolean
   /** False in the middle of a zoom: drawings made for another scale will do for now. */
   settle: boolean
 }
 
-/** Draws the sheet in one pass: unit areas, items, frame. Returns nothing and keeps nothing: what is kept is in the scene. */
-export function paintSheet(context: CanvasRenderingContext2D, scene: Scene, paint: SheetPaint): void {
+/** Draws the sheet in one pass: unit areas, items, frame. It pauses after each, so that a large sheet can be drawn a little
+ *  at a time. Keeps nothing: what is kept is in the scene. */
+export function* paintSheet(
+  context: CanvasRenderingContext2D,
+  scene: Scene,
+  paint: SheetPaint,
+): Generator<undefined> {
   const { view, ratio } = paint
-  const symbolPx = symbolPxPerMm(printShare(view.pxPerMetre, scene.sheet.scale), paint.symbols)
-  const mmPerMetre = view.pxPerMetre / symbolPx
-  context.setTransform(1, 0, 0, 1, 0, 0)
-  context.clearRect(0, 0, view.width * ratio, view.height * ratio)
+  const relative = relativeScale(view, scene.sheet.scale, paint.symbols)
+  const { symbolPx } = relative
+  const [band, step] = [bandOf(relative.scale), thinningStep(relative.scale)]
   context.save()
   clipToFace(context, scene, paint)
   for (const face of scene.faces) {
     const drawing = paint.isFaceHidden(face.unit) ? undefined : scene.areaOf(face)
-    if (drawing) {
-      drawDrawing(context, drawing, { view, pxPerMm: groundPxPerMm(view, drawing.mmPerMetre), ratio })
-    }
+    if (!drawing) continue
+    const pxPerMm = groundPxPerMm(view, drawing.mmPerMetre)
+    drawDrawing(context, drawing, { view, pxPerMm, ratio, patternPxPerMm: symbolPx })
+    yield
   }
+  const notReady: LineItem[] = []
   for (const item of scene.index.within(groundInView(view, SYMBOL_REACH * symbolPx))) {
-    if (paint.isHidden(item)) continue
-    const drawing = scene.drawingOf(item, mmPerMetre, paint.settle)
+    if (paint.isHidden(item, step)) continue
+    const drawing = paint.settle ? scene.drawingOf(item, band) : scene.readyDrawingOf(item, band)
+    if (!drawing) {
+      if (isLineItem(item)) notReady.push(item)
+      continue
+    }
     const pxPerMm = isLineItem(item) ? groundPxPerMm(view, drawing.mmPerMetre) : symbolPx
     drawDrawing(context, drawing, { view, pxPerMm, ratio })
+    yield
   }
+  paintPlain(context, notReady, { view, ratio, symbolPx })
   context.restore()
-  const frame = scene.frame(mmPerMetre, paint.settle)
+  const frame = scene.frame(view.pxPerMetre / symbolPx, paint.settle)
   drawDrawing(context, frame, { view, pxPerMm: groundPxPerMm(view, frame.mmPerMetre), ratio })
 }
 

@@ -2,32 +2,45 @@ import type { Face } from '@shared/api/faces'
 import type { Sheet } from '@shared/api/sheets'
 import { drawSheetFrame, facePath } from '@shared/sheet-face/graticule'
 import { neatlineBounds } from '@shared/sheet-face/page-layout'
+import { standLabels } from '@shared/sheet-face/stand-labels'
 import type { SheetProjection } from '@shared/geometry/projection'
-import { isLineItem, type Item, type LineItem, type PointItem } from '@shared/items/item'
+import { isLineItem, type Item, type ItemOf, type LineItem, type PointItem } from '@shared/items/item'
 import type { UnitProperties } from '@shared/items/legend'
+import { facePathOf } from '@shared/sheet-face/compose-face'
+import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { drawFace } from '@shared/symbols/draw-face'
 import { drawItem } from '@shared/symbols/draw-item'
+import type { LabelStand } from '@shared/symbols/draw-unit-label'
 import { arrowOf } from '@shared/symbols/draw-lineation'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '@shared/symbols/frame'
-import { polyline } from '@shared/symbols/paths'
-import type { Metres, XY } from '@shared/units'
+import { printed } from '@shared/symbols/one-ink'
+import { simplifyStrokes } from '@shared/symbols/simplify'
+import { unitFills, type Printing, type UnitFill } from '@shared/symbols/unit-fill'
+import type { Metres, Millimetres, XY } from '@shared/units'
 import { makeDrawing, type Drawing } from './drawing'
 import { ItemIndex, type GroundBox } from './item-index'
+import { KeptDrawings } from './kept-drawings'
 import { screenScaleBar } from './screen-scale-bar'
-import { thinLine } from './thin-line'
+import { thinOut } from './thinning'
+import { bandScale } from './zoom-bands'
 
-/** Vertices nearer than this to the one before are left out of a line's drawing, millimetres: a third of a hairline. */
-const LEAST_STEP_MM = 0.05
+/** How far a line's drawing may leave the line when the sheet is shown smaller than print, millimetres: a quarter of a
+ *  pixel. At print size and above nothing is left out. */
+const SIMPLER_BY: Millimetres = 0.07
 
-/** Everything that the map shows of a sheet, with its drawings kept ready. Drawings of lines depend on the scale they were
- *  made for; those of points and unit areas do not. */
+/** Everything that the map shows of a sheet, with its drawings kept ready. */
 export class Scene {
   readonly bounds: GroundBox
   index = new ItemIndex([])
   faces: readonly Face[] = []
+  /** In colour or in one ink: the map shows what will be printed. */
+  printing: Printing = 'colour'
   private units = new Map<string, UnitProperties>()
-  private lines = new WeakMap<Item, Drawing>()
-  private points = new WeakMap<Item, Drawing>()
+  private fills = new Map<string, UnitFill>()
+  private labels: readonly ItemOf<'unit-label'>[] = []
+  private stands: Map<string, LabelStand> | undefined
+  private readonly kept = new KeptDrawings()
+  private steps: ReadonlyMap<Item, number> | undefined
   private areas = new WeakMap<Face, Drawing>()
   private frameDrawing: Drawing | undefined
 
@@ -40,60 +53,95 @@ export class Scene {
 
   /** Takes over all items; drawings of items that are still the same objects are kept. */
   setItems(items: readonly Item[]): void {
+    const points = this.index.points
     this.index = new ItemIndex(items)
-    const units = new Map<string, UnitProperties>()
-    for (const item of items) if (item.kind === 'unit') units.set(item.id, item.properties)
+    if (!isSameList(points, this.index.points)) this.steps = undefined
+    this.setPrinting(sheetFaceOf(items).printing)
+    this.setUnits(items.filter((item) => item.kind === 'unit'))
+    this.setLabels(items.filter((item) => item.kind === 'unit-label'))
+  }
+
+  private setPrinting(printing: Printing): void {
+    if (printing === this.printing) return
+    this.printing = printing
+    this.forgetDrawings()
+    this.areas = new WeakMap()
+  }
+
+  private setUnits(legend: readonly ItemOf<'unit'>[]): void {
+    const units = new Map(legend.map(({ id, properties }) => [id, properties]))
     if (!isSameLegend(units, this.units)) {
-      this.points = new WeakMap()
+      this.forgetLabels()
       this.areas = new WeakMap()
     }
     this.units = units
+    this.fills = unitFills(legend, this.printing)
+  }
+
+  private setLabels(labels: readonly ItemOf<'unit-label'>[]): void {
+    if (!isSameList(labels, this.labels)) this.forgetLabels()
+    this.labels = labels
   }
 
   setFaces(faces: readonly Face[]): void {
     this.faces = faces
+    this.forgetLabels()
+  }
+
+  /** Where letters stand depends on all areas and labels: worked out anew when next they are drawn. */
+  private forgetLabels(): void {
+    this.kept.forgetLabels()
+    this.stands = undefined
+  }
+
+  private standOf(label: string): LabelStand | undefined {
+    const frame = this.frameAt(this.bounds.min, mmPerMetreAtScale(this.sheet.scale))
+    this.stands ??= standLabels(this.faces, this.labels, frame, (id) => this.units.get(id))
+    return this.stands.get(label)
   }
 
   /** Letters were measured or drawn with another font before Lato was there. */
   forgetDrawings(): void {
-    this.lines = new WeakMap()
-    this.points = new WeakMap()
+    this.kept.forget()
     this.frameDrawing = undefined
   }
 
-  /** An item's drawing for a scale.
-   *  @param settle false where a drawing made for another scale will do for now, as in the middle of a zoom */
-  drawingOf(item: LineItem | PointItem, mmPerMetre: number, settle: boolean): Drawing {
-    const cache = isLineItem(item) ? this.lines : this.points
-    const known = cache.get(item)
-    if (known && (!settle || !isLineItem(item) || known.mmPerMetre === mmPerMetre)) return known
-    const made = this.make(item, mmPerMetre)
-    cache.set(item, made)
-    return made
+  /** Whether a point symbol gives way to its neighbours at a step of zooming out (see `thinOut`). */
+  isThinned(item: Item, step: number): boolean {
+    if (step === 0) return false
+    this.steps ??= thinOut(this.index.points, this.sheet.scale)
+    return (this.steps.get(item) ?? step) < step
   }
 
-  private make(item: LineItem | PointItem, mmPerMetre: number): Drawing {
-    const frame = this.frameAt(originOf(item), mmPerMetre)
-    const list = drawItem(isLineItem(item) ? thinned(item, LEAST_STEP_MM / mmPerMetre) : item, frame, {
+  /** An item's drawing for a band of zooms. */
+  drawingOf(item: LineItem | PointItem, band: number): Drawing {
+    return this.kept.of(item, band, () => this.make(item, band))
+  }
+
+  /** The drawing that is there already, of the nearest band; it will do while the view moves. Points are always ready. */
+  readyDrawingOf(item: LineItem | PointItem, band: number): Drawing | undefined {
+    return isLineItem(item) ? this.kept.nearest(item, band) : this.drawingOf(item, band)
+  }
+
+  private make(item: LineItem | PointItem, band: number): Drawing {
+    const frame = this.frameAt(originOf(item), mmPerMetreAtScale(this.sheet.scale) * bandScale(band))
+    const list = drawItem(item, frame, {
       unitOf: (id) => this.units.get(id),
+      standOf: (label) => this.standOf(label),
     })
-    return makeDrawing(list, frame)
+    const shown = printed(list, this.printing)
+    return makeDrawing(isLineItem(item) && band < 0 ? simplifyStrokes(shown, SIMPLER_BY) : shown, frame)
   }
 
   /** The area of a unit; undefined where no unit, or one that is gone, claims it. */
   areaOf(face: Face): Drawing | undefined {
     const known = this.areas.get(face)
     if (known) return known
-    const unit = face.unit === null ? undefined : this.units.get(face.unit)
-    if (!unit) return undefined
+    const fill = face.unit === null ? undefined : this.fills.get(face.unit)
+    if (!fill) return undefined
     const frame = this.frameAt(this.bounds.min, mmPerMetreAtScale(this.sheet.scale))
-    const rings = face.rings.flatMap((ring) =>
-      polyline(
-        ring.slice(0, -1).map((xy) => toMm(frame, xy)),
-        true,
-      ),
-    )
-    const made = makeDrawing(drawFace(rings, unit), frame)
+    const list = drawFace(facePathOf(face, frame), fill, toMm(frame, this.bounds.min))
+    const made = makeDrawing(printed(list, this.printing), frame)
     this.areas.set(face, made)
     return made
   }
@@ -103,10 +151,11 @@ export class Scene {
     const known = this.frameDrawing
     if (known && (!settle || known.mmPerMetre === mmPerMetre)) return known
     const frame = this.frameAt(this.bounds.min, mmPerMetre)
-    this.frameDrawing = makeDrawing(
-      [...drawSheetFrame(this.sheet, this.projection, frame), ...screenScaleBar(this.bounds, frame)],
-      frame,
-    )
+    const list = [
+      ...drawSheetFrame(this.sheet, this.projection, frame),
+      ...screenScaleBar(this.bounds, frame),
+    ]
+    this.frameDrawing = makeDrawing(printed(list, this.printing), frame)
     return this.frameDrawing
   }
 
@@ -129,17 +178,20 @@ export class Scene {
 const originOf = (item: LineItem | PointItem): XY =>
   isLineItem(item) ? (item.geometry.coordinates[0] ?? [0, 0]) : item.geometry.coordinates
 
-const thinned = (item: LineItem, step: Metres): LineItem => ({
-  ...item,
-  geometry: { ...item.geometry, coordinates: thinLine(item.geometry.coordinates, step) },
-})
+const isSameList = <T>(a: readonly T[], b: readonly T[]): boolean =>
+  a.length === b.length && a.every((each, index) => each === b[index])
 
 function isSameLegend(
   a: ReadonlyMap<string, UnitProperties>,
   b: ReadonlyMap<string, UnitProperties>,
 ): boolean {
+  const shown = ({ label, colour, pattern, rank }: UnitProperties): string =>
+    [label, colour, pattern, rank].join(' ')
   return (
     a.size === b.size &&
-    [...a].every(([id, unit]) => b.get(id)?.label === unit.label && b.get(id)?.colour === unit.colour)
+    [...a].every(([id, unit]) => {
+      const other = b.get(id)
+      return other !== undefined && shown(other) === shown(unit)
+    })
   )
 }

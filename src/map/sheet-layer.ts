@@ -3,8 +3,13 @@ import type { FrameState } from 'ol/Map'
 import ViewHint from 'ol/ViewHint'
 import type { ViewFrame } from './view-frame'
 
-/** A frame longer than this is felt when it comes sixty times a second, milliseconds. */
-const SMOOTH_MS = 14
+/** How long drawing may take of one frame: at rest; and for a change of content, as long as lets most sheets show it in the
+ *  same frame. Milliseconds. */
+const BUDGET_MS = { resting: 24, changed: 120 } as const
+/** A picture that takes no longer than this is drawn anew in every frame, milliseconds. */
+const QUICK_MS = 8
+/** A picture that takes longer waits until the view has rested for a moment: the wheel turns by notches. */
+const QUIET_MS = 70
 
 export interface PaintRequest {
   context: CanvasRenderingContext2D
@@ -14,21 +19,34 @@ export interface PaintRequest {
   settle: boolean
 }
 
-/** A canvas of our own in an OpenLayers map. It is drawn again only when the view or its content changed. While the view
- *  moves and drawing is slow, the last picture is shifted and stretched instead, and drawn again when the view rests. */
+/** Draws a picture, pausing now and then. */
+export type Painter = (request: PaintRequest) => Iterator<unknown>
+
+/** What a canvas shows. */
+interface Picture {
+  key: string
+  version: number
+  view: ViewFrame
+  settled: boolean
+}
+
+/** A picture of our own in an OpenLayers map. It is drawn on a hidden canvas, a little in each frame, and shown when it is
+ *  whole; until then the last one is shifted and stretched to where the view has moved. A small sheet is whole at once. */
 export class SheetLayer extends Layer {
-  private readonly canvas = document.createElement('canvas')
-  private readonly context: CanvasRenderingContext2D
-  private drawn: { key: string; view: ViewFrame; settled: boolean } | null = null
+  private readonly box = document.createElement('div')
+  private front = openCanvas()
+  private back = openCanvas()
+  private shown: Picture | null = null
+  private job: { picture: Picture; steps: Iterator<unknown>; spentMs: number } | null = null
   private version = 0
   private costMs = 0
+  private movedAt = 0
 
-  constructor(private readonly paint: (request: PaintRequest) => void) {
+  constructor(private readonly paint: Painter) {
     super({})
-    const context = this.canvas.getContext('2d')
-    if (!context) throw new TypeError('This browser has no 2D canvas.')
-    this.context = context
-    this.canvas.style.cssText = 'position:absolute;inset:0;transform-origin:0 0'
+    this.box.style.cssText = 'position:absolute;inset:0;overflow:hidden'
+    this.box.append(this.front.canvas, this.back.canvas)
+    this.back.canvas.style.visibility = 'hidden'
   }
 
   /** What is to be drawn has changed. */
@@ -38,46 +56,99 @@ export class SheetLayer extends Layer {
   }
 
   override render(frame: FrameState | null): HTMLElement {
-    if (!frame) return this.canvas
+    if (!frame) return this.box
+    const wanted = this.pictureOf(frame)
+    if (!wanted.settled) this.movedAt = performance.now()
+    const isShown = this.isShown(wanted)
+    if (isShown) this.job = null
+    else if (this.mayDraw(wanted)) this.draw(wanted, frame.pixelRatio)
+    if (this.shown) place(this.front.canvas, wanted.view, this.shown.view)
+    const isWaiting = !this.isShown(wanted)
+    // For tests and benches: whether the picture is the one of this view, whole and settled.
+    this.box.dataset['picture'] = isWaiting ? 'drawing' : 'drawn'
+    if (isWaiting && wanted.settled) requestAnimationFrame(() => this.changed())
+    return this.box
+  }
+
+  private pictureOf(frame: FrameState): Picture {
     const view = viewOf(frame)
     const hints = [frame.viewHints[ViewHint.ANIMATING], frame.viewHints[ViewHint.INTERACTING]]
-    const moving = hints.some((hint) => hint !== undefined && hint > 0)
-    const key = [
-      this.version,
-      ...view.center,
-      view.pxPerMetre,
-      view.width,
-      view.height,
-      frame.pixelRatio,
-    ].join(' ')
-    if (this.drawn?.key === key && (this.drawn.settled || moving)) return this.canvas
-    if (moving && this.drawn && this.costMs > SMOOTH_MS) this.shift(view, this.drawn.view)
-    else this.draw(frame, view, { key, settle: !moving })
-    return this.canvas
+    const { version } = this
+    const key = [version, ...view.center, view.pxPerMetre, view.width, view.height, frame.pixelRatio].join(
+      ' ',
+    )
+    return { key, version, view, settled: !hints.some((hint) => hint !== undefined && hint > 0) }
   }
 
-  private draw(frame: FrameState, view: ViewFrame, { key, settle }: { key: string; settle: boolean }): void {
-    const ratio = frame.pixelRatio
-    const [width, height] = [Math.round(view.width * ratio), Math.round(view.height * ratio)]
-    if (this.canvas.width !== width || this.canvas.height !== height) {
-      this.canvas.width = width
-      this.canvas.height = height
-      this.canvas.style.width = `${view.width}px`
-      this.canvas.style.height = `${view.height}px`
-    }
-    this.canvas.style.transform = ''
+  private isShown({ key, settled }: Picture): boolean {
+    return this.shown?.key === key && (this.shown.settled || !settled)
+  }
+
+  /** A changed content is drawn at once. For another view a picture that takes long waits until the view rests: while it
+   *  moves, the last one is shifted. */
+  private mayDraw(wanted: Picture): boolean {
+    if (this.shown?.version !== wanted.version || this.costMs <= QUICK_MS) return true
+    return wanted.settled && performance.now() - this.movedAt > QUIET_MS
+  }
+
+  /** Goes on with the picture that is in the making, or begins it. */
+  private draw(wanted: Picture, ratio: number): void {
+    const current = this.job?.picture
+    if (current?.key !== wanted.key || current.settled !== wanted.settled) this.begin(wanted, ratio)
+    const isChanged = this.shown?.version !== wanted.version
+    this.work(isChanged ? BUDGET_MS.changed : BUDGET_MS.resting)
+  }
+
+  private begin(wanted: Picture, ratio: number): void {
+    // The first picture of all is drawn from what is ready, so that there is something to see at once.
+    const picture = this.shown ? wanted : { ...wanted, settled: false }
+    const { canvas, context } = this.back
+    const { view } = picture
+    // Setting the size also clears the canvas and whatever an unfinished picture had set.
+    canvas.width = Math.round(view.width * ratio)
+    canvas.height = Math.round(view.height * ratio)
+    canvas.style.width = `${view.width}px`
+    canvas.style.height = `${view.height}px`
+    this.job = { picture, steps: this.paint({ context, view, ratio, settle: picture.settled }), spentMs: 0 }
+  }
+
+  private work(budgetMs: number): void {
+    if (!this.job) return
+    const { picture, steps } = this.job
     const begin = performance.now()
-    this.paint({ context: this.context, view, ratio, settle })
-    this.costMs = performance.now() - begin
-    this.drawn = { key, view, settled: settle }
+    const until = this.shown ? begin + budgetMs : Infinity
+    let isWhole = false
+    while (!isWhole && performance.now() < until) isWhole = steps.next().done === true
+    this.job.spentMs += performance.now() - begin
+    if (isWhole) this.show(picture, this.job.spentMs)
   }
 
-  private shift(view: ViewFrame, old: ViewFrame): void {
-    const scale = view.pxPerMetre / old.pxPerMetre
-    const x = view.width / 2 + (old.center[0] - view.center[0]) * view.pxPerMetre - (old.width / 2) * scale
-    const y = view.height / 2 - (old.center[1] - view.center[1]) * view.pxPerMetre - (old.height / 2) * scale
-    this.canvas.style.transform = `translate(${x}px, ${y}px) scale(${scale})`
+  private show(picture: Picture, costMs: number): void {
+    ;[this.front, this.back] = [this.back, this.front]
+    this.front.canvas.style.visibility = ''
+    this.back.canvas.style.visibility = 'hidden'
+    this.shown = picture
+    this.costMs = costMs
+    this.job = null
   }
+}
+
+function openCanvas(): { canvas: HTMLCanvasElement; context: CanvasRenderingContext2D } {
+  const canvas = document.createElement('canvas')
+  const context = canvas.getContext('2d')
+  if (!context) throw new TypeError('This browser has no 2D canvas.')
+  canvas.style.cssText = 'position:absolute;inset:0;transform-origin:0 0'
+  return { canvas, context }
+}
+
+/** Shifts and stretches a picture of one view to lie where its ground is in another. */
+function place(canvas: HTMLCanvasElement, view: ViewFrame, drawn: ViewFrame): void {
+  const scale = view.pxPerMetre / drawn.pxPerMetre
+  const x = view.width / 2 + (drawn.center[0] - view.center[0]) * view.pxPerMetre - (drawn.width / 2) * scale
+  const y =
+    view.height / 2 - (drawn.center[1] - view.center[1]) * view.pxPerMetre - (drawn.height / 2) * scale
+  const isSame = scale === 1 && x === 0 && y === 0
+  canvas.style.transform = isSame ? '' : `translate(${x}px, ${y}px) scale(${scale})`
 }
 
 /** The frame that OpenLayers is about to show, in our words. */
