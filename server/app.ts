@@ -15,6 +15,7 @@ import { mountLedger } from './features/ledger/ledger.routes'
 import { mountOpenApi } from './features/openapi/openapi.routes'
 import { mountReview } from './features/review/review.routes'
 import { mountSheets } from './features/sheets/sheets.routes'
+import { mountSymbols } from './features/symbols/symbols.routes'
 import { handleProblems } from './platform/http/problem-handler'
 import { limitSessionAge } from './platform/http/session'
 import { logRequests } from './platform/log'
@@ -47,13 +48,20 @@ function createApi(services: Services, { checkAnswers = false }: AppOptions): Ro
   const api = Router()
   const passport = createPassport(accounts)
   api.use((_request, response, next) => {
-    response.locals.context = { access: accounts, uploadFolder, checkAnswers }
+    response.locals.context = {
+      access: accounts,
+      uploadFolder,
+      checkAnswers,
+      noteDownload: (account, sheet, path) =>
+        accounts.keepEvent({ kind: 'download', path }, account.id, sheet.number),
+    }
     next()
   })
   // Before sessions: a balancer that asks for health should not touch them.
   mountHealth(api, services.health)
   mountOpenApi(api, services.config.version)
   mountCatalogue(api, services.editions)
+  mountSymbols(api)
   api.use(sessions.middleware, limitSessionAge, passport.session())
   mountAccounts(api, accounts, services.links, passport)
   mountAdministration(api, services.administration)

@@ -1,4 +1,5 @@
 import * as accounts from './accounts'
+import * as audit from './audit'
 import * as catalogue from './catalogue'
 import * as comparisons from './comparisons'
 import type { Endpoint } from './endpoint'
@@ -12,10 +13,12 @@ import * as openapi from './openapi'
 import * as restores from './restores'
 import * as review from './review'
 import * as sheets from './sheets'
+import * as symbols from './symbols'
 
 const rooms = [
   health,
   accounts,
+  audit,
   sheets,
   ledger,
   comparisons,
@@ -26,6 +29,7 @@ const rooms = [
   jobs,
   events,
   catalogue,
+  symbols,
   openapi,
 ]
 

@@ -10,9 +10,12 @@ import type { TypeScale } from './type-scale'
 const ARM: Millimetres = 22
 /** Room above the arrows for their names, and beside the text for the whole diagram. */
 const LABEL: Millimetres = 4.5
+/** Room above for a name that stands higher than its neighbours. */
+const RAISED: Millimetres = 3
 const ROOM: Millimetres = 30
-/** Least drawn angle between the two norths: a smaller one could not be told apart. */
+/** Least drawn angle between two norths: a smaller one could not be told apart. A larger one than the most would lie flat. */
 const LEAST_DRAWN: Degrees = 7
+const MOST_DRAWN: Degrees = 24
 
 /** Where grid north lies, in figures. */
 export function convergenceWords(convergence: Degrees): string {
@@ -21,46 +24,94 @@ export function convergenceWords(convergence: Degrees): string {
   return `At the centre of the sheet, grid north lies ${angleInWords(convergence)} of true north.`
 }
 
-/** True and grid north from one point with the convergence in figures. Magnetic north is not computed, and it says so.
+/** Magnetic north as someone states it. */
+export interface MagneticNorth {
+  /** Azimuth of magnetic north from true north, degrees, east positive. */
+  declination: Degrees
+  /** When it held, and by what: `2026.9, World Magnetic Model 2025`. */
+  asOf: string
+}
+
+/** Where magnetic north lies from true north, and from grid north. Source: grid–magnetic angle = declination −
+ *  convergence; geodesy.md section 1. */
+export function declinationWords({ declination, asOf }: MagneticNorth, convergence: Degrees): string {
+  const fromGrid = declination - convergence
+  return `Magnetic north lies ${angleInWords(declination)} of true north and ${angleInWords(fromGrid)} of grid north (${asOf}).`
+}
+
+/** True, grid and, where it is stated, magnetic north from one point, with their angles in figures. Magnetic north is never
+ *  computed; where nobody states it, the diagram says so.
  *  @param convergence azimuth of grid north from true north at the sheet's centre, degrees, clockwise positive */
-export function northDiagram(convergence: Degrees, width: Millimetres, type: TypeScale): Block {
-  const words = paragraph(
-    `${convergenceWords(convergence)} Magnetic declination is not stated. The angle is not drawn to scale.`,
-    width - ROOM,
-    type.small,
-  )
+export function northDiagram(
+  convergence: Degrees,
+  width: Millimetres,
+  type: TypeScale,
+  magnetic?: MagneticNorth,
+): Block {
+  const stated = magnetic ? declinationWords(magnetic, convergence) : 'Magnetic declination is not stated.'
+  const drawn = magnetic ? 'The angles are not drawn to scale.' : 'The angle is not drawn to scale.'
+  const words = paragraph(`${convergenceWords(convergence)} ${stated} ${drawn}`, width - ROOM, type.small)
   const arm = ARM * Math.min(1, type.factor ** 2)
+  const label = LABEL + (magnetic ? RAISED : 0)
   const heading = stack([paragraph('NORTH', width, type.age), space(0.8 * type.factor)])
   return {
-    height: heading.height + Math.max(words.height, arm + LABEL),
+    height: heading.height + Math.max(words.height, arm + label),
     draw: (x, top) => [
       ...heading.draw(x, top),
-      ...arrows(convergence, [x + 12, top - heading.height - arm - LABEL], arm),
+      ...arrows(drawnNorths(convergence, magnetic), [x + 12, top - heading.height - arm - label], arm),
       ...words.draw(x + ROOM, top - heading.height),
     ],
   }
 }
 
-function arrows(convergence: Degrees, foot: MM, arm: Millimetres): Mark[] {
-  const agree = Math.round(Math.abs(convergence) * 60) === 0
-  // The frame's up is grid north; true north lies the other way round from it.
-  const drawn = agree ? 0 : -Math.sign(convergence) * Math.max(LEAST_DRAWN, Math.abs(convergence))
-  const grid = tip(foot, 0, arm)
-  const north = tip(foot, drawn, arm)
-  const outside = drawn < 0 ? -1 : 1
-  const label = (text: string, at: MM, side: number): Mark[] =>
-    textLines(
-      [text],
-      { x: at[0] + side, top: at[1] + 3.6, align: side < 0 ? 'end' : side > 0 ? 'start' : 'middle' },
-      NAME,
-    )
-  return [
-    line(foot, grid),
-    ...(agree ? [] : [line(foot, north)]),
-    head(north, drawn),
-    ...label(agree ? 'true and grid' : 'true', north, agree ? 0 : outside),
-    ...(agree ? [] : label('grid', grid, -outside)),
-  ]
+type North = 'true' | 'grid' | 'magnetic'
+
+/** Norths that are drawn as one arrow, and its azimuth on the drawing, whose up is grid north. */
+interface DrawnNorth {
+  names: North[]
+  azimuth: Degrees
+}
+
+/** The arrows from west to east: in their true order, but far enough apart to be told from one another. Norths that agree
+ *  to the minute share one. */
+export function drawnNorths(convergence: Degrees, magnetic?: MagneticNorth): DrawnNorth[] {
+  const norths: DrawnNorth[] = []
+  for (const [name, azimuth] of [
+    ['grid', 0],
+    ['true', -convergence],
+    ...(magnetic ? ([['magnetic', magnetic.declination - convergence]] as const) : []),
+  ] as const) {
+    const same = norths.find((north) => Math.round(Math.abs(north.azimuth - azimuth) * 60) === 0)
+    if (same) same.names.unshift(name)
+    else norths.push({ names: [name], azimuth })
+  }
+  norths.sort((a, b) => a.azimuth - b.azimuth)
+  const grid = norths.findIndex(({ names }) => names.includes('grid'))
+  return norths.map(({ names, azimuth }, index) => {
+    const places = index - grid
+    if (places === 0) return { names, azimuth: 0 }
+    const least = LEAST_DRAWN * Math.abs(places)
+    const drawn = Math.min(MOST_DRAWN * Math.abs(places), Math.max(least, Math.abs(azimuth)))
+    return { names, azimuth: Math.sign(places) * drawn }
+  })
+}
+
+function arrows(norths: readonly DrawnNorth[], foot: MM, arm: Millimetres): Mark[] {
+  return norths.flatMap(({ names, azimuth }, index) => {
+    const at = tip(foot, azimuth, arm)
+    const isFirst = index === 0
+    const isLast = index === norths.length - 1
+    const align = isFirst === isLast ? 'middle' : isFirst ? 'end' : 'start'
+    // The middle one of three stands higher: between the two others there is no room.
+    const raised = !isFirst && !isLast ? NAME.size * NAME.leading : 0
+    const shifted = align === 'end' ? -1 : align === 'start' ? 1 : 0
+    return [
+      line(foot, at),
+      ...(names.includes('true') ? [head(at, azimuth)] : []),
+      ...(names.includes('magnetic') ? [halfHead(at, azimuth)] : []),
+      ...textLines([names.join(' and ')], { x: at[0] + shifted, top: at[1] + 3.6 + raised, align }, NAME),
+    ]
+  })
 }
 
 const NAME: TextStyle = { size: 2.4, weight: 700, ink: 'frame', leading: 1.2 }
@@ -85,6 +136,16 @@ function head(at: MM, azimuth: Degrees): Mark {
   return {
     mark: 'fill',
     path: polyline([at, left, right], true),
+    ink: 'frame',
+  }
+}
+
+/** Half a head, on the eastern side: the mark of a compass needle. */
+function halfHead(at: MM, azimuth: Degrees): Mark {
+  const back = tip(at, azimuth + 180, 5)
+  return {
+    mark: 'fill',
+    path: polyline([at, back, tip(back, azimuth + 90, 1.3)], true),
     ink: 'frame',
   }
 }

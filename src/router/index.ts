@@ -94,6 +94,12 @@ export const routes: RouteRecordRaw[] = [
     meta: { title: 'Edition' },
   },
   {
+    path: '/symbols',
+    name: 'symbols',
+    component: () => import('@/views/SymbolsView.vue'),
+    meta: { title: 'Symbol set' },
+  },
+  {
     path: '/api-reference',
     name: 'api-reference',
     component: () => import('@/views/ApiReferenceView.vue'),
