@@ -39,8 +39,10 @@ export function layOutLine(line: MeasuredLine, symbol: LineSymbol, drawing: Line
   const heads = placeHeads(line, drawing.plunge ?? [])
   const lengthAt = (end: LineEnd, of: 'covers' | 'room') => heads.find((head) => head.end === end)?.[of] ?? 0
   const stretchBeside = (of: 'covers' | 'room'): Stretch => {
-    const from = lengthAt('start', of)
-    return [from, Math.max(from, line.length - lengthAt('end', of))]
+    const [first, last] = [lengthAt('start', of), lengthAt('end', of)]
+    // On a line too short for both, what is left between them is nothing, but in the same place from either end.
+    const fit = Math.min(1, line.length / Math.max(first + last, line.length))
+    return [first * fit, line.length - last * fit]
   }
   const [drawn, within] = [stretchBeside('covers'), stretchBeside('room')]
 

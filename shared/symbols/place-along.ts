@@ -40,7 +40,7 @@ export function placeAlong(line: MeasuredLine, sharing: Sharing): Millimetres[] 
   const { size, interval, even = false } = sharing
   const [from, to] = sharing.within
   const room = to - from
-  if (room < size || size <= 0) return []
+  if (room < size - ROUNDING || size <= 0) return []
   const count = evenedCount(room / interval, Math.floor(room / size), even)
   const spacing = room / count
   const slack = count === 1 ? (room - size) / 2 : Math.min((spacing - size) / 2, spacing * MOST_MOVED)
@@ -82,9 +82,9 @@ function nearestStraight(
 ): Millimetres | undefined {
   const step = stepFor(size)
   const first = favouredWay(line)
-  for (let away = 0; away <= slack; away += step) {
+  for (let away = 0; away <= slack + ROUNDING; away += step) {
     for (const place of away === 0 ? [middle] : [middle + first * away, middle - first * away]) {
-      if (!isTaken(place, size, taken) && sharpestTurn(line, place, straightOver) <= SHARPEST_BEND)
+      if (!isTaken(place, size, taken) && sharpestTurn(line, place, straightOver) <= SHARPEST_BEND + ROUNDING)
         return place
     }
   }
@@ -100,7 +100,7 @@ export function straightestPlace(
   const step = Math.max(stepFor(size), slack / MOST_TRIED)
   const first = favouredWay(line)
   let best: { place: Millimetres; turn: Degrees } | undefined
-  for (let away = 0; away <= slack; away += step) {
+  for (let away = 0; away <= slack + ROUNDING; away += step) {
     for (const place of [middle + first * away, middle - first * away]) {
       if (isTaken(place, size, taken)) continue
       const turn = sharpestTurn(line, place, size)
@@ -115,10 +115,13 @@ const MOST_TRIED = 400
 /** Turns nearer than this are equal. */
 const LEAST_GAIN: Degrees = 0.01
 
-const stepFor = (size: Millimetres): Millimetres => Math.min(size / 4, 0.5)
+const stepFor = (size: Millimetres): Millimetres => Math.max(0.1, Math.min(size / 4, 0.5))
+
+/** Two that touch do not overlap, whatever the last digit of a sum. */
+export const ROUNDING: Millimetres = 1e-6
 
 const isTaken = (place: Millimetres, size: Millimetres, taken: readonly Stretch[]): boolean =>
-  taken.some(([from, to]) => place + size / 2 > from && place - size / 2 < to)
+  taken.some(([from, to]) => place + size / 2 > from + ROUNDING && place - size / 2 < to - ROUNDING)
 
 /** Which way along the line wins where both would do: the eastern, else the northern one. Depends on the ground and not on
  *  the way the line was drawn. */

@@ -1,7 +1,7 @@
 import type { MeasuredLine } from '../geometry/measured-line'
 import type { Millimetres, MM } from '../units'
 import type { Ink, Mark } from './display-list'
-import { favouredWay, straightestPlace, straightPlaceNear, type Stretch } from './place-along'
+import { favouredWay, ROUNDING, straightestPlace, straightPlaceNear, type Stretch } from './place-along'
 import { capHeight, measureText } from './text-metrics'
 
 /** The question mark set in a line of questioned identity. Source of the size: 8 points, FGDC as cited in
@@ -25,7 +25,7 @@ export function placeQueries(
   line: MeasuredLine,
   { within, taken }: { within: Stretch; taken: readonly Stretch[] },
 ): Millimetres[] {
-  const gaps = gapsBetween(within, taken).filter(([from, to]) => to - from >= MOST_ROOM)
+  const gaps = gapsBetween(within, taken).filter(([from, to]) => to - from >= MOST_ROOM - ROUNDING)
   const places = gaps.length === 1 ? shared(gaps[0]) : gaps.map(([from, to]) => (from + to) / 2)
   const wanted = Math.max(1, Math.round((within[1] - within[0]) / query.interval))
   const chosen = everyNth(places, wanted, favouredWay(line))
