@@ -1,11 +1,13 @@
 import type { LocationConfidence } from '../items/confidence'
 import type { Item } from '../items/item'
+import { isSidedFold, type Side } from '../items/lines'
 import type { Application, PartOutcome } from './apply'
 import type { LineTarget, Mapping } from './mapping'
 import { parseNumber } from './numbers'
 import { placeLine } from './place'
 import { fromStatedNorth } from './readings'
 import { attributeText, type FilePosition, type IntakeRecord } from './records'
+import { faultSideMeaning } from './sides'
 import { fitText, mappedText } from './texts'
 
 /** What a line of a record becomes. */
@@ -47,7 +49,7 @@ export function lineItem(
       return {
         outcome: 'item',
         item: { kind: 'fault', ...line, properties },
-        conversions: [...conversions, ...sideWords(target, lines)],
+        conversions: [...conversions, ...sideWords(faultSideMeaning(target.type), lines.faultSide)],
       }
     }
     case 'axial-trace': {
@@ -58,14 +60,15 @@ export function lineItem(
       const properties = {
         ...basis,
         form: target.form,
-        side: 'right' as const,
+        side: lines.foldSide,
         plunge: axis.plunge,
         trend: axis.trend,
         doubly: 'no' as const,
         otherPlunge: null,
       }
       const item: Item = { kind: 'axial-trace', ...line, properties }
-      return { outcome: 'item', item, conversions: [...conversions, ...axis.conversions] }
+      const side = isSidedFold(target.form) ? sideWords('dip of its limbs', lines.foldSide) : []
+      return { outcome: 'item', item, conversions: [...conversions, ...axis.conversions, ...side] }
     }
   }
 }
@@ -94,13 +97,9 @@ function confidenceOf(record: IntakeRecord, lines: Mapping['lines']): LocationCo
   return known ?? { outcome: 'refused', field: confidenceColumn, value, reason }
 }
 
-/** A fault whose symbol has a side states where the side came from: a person said so, the file did not. */
-function sideWords(target: LineTarget & { kind: 'fault' }, lines: Mapping['lines']): string[] {
-  const sided = target.type === 'normal' || target.type === 'reverse' || target.type === 'thrust'
-  if (!sided) return []
-  const side = target.type === 'normal' ? 'downthrown side' : 'upper plate'
-  return [`${side} on the ${lines.faultSide} of the line as drawn: stated at intake`]
-}
+/** A line whose symbol has a side states where the side came from: a person said so, the file did not. */
+const sideWords = (meaning: string | undefined, side: Side): string[] =>
+  meaning ? [`${meaning} on the ${side} of the line as drawn: stated at intake`] : []
 
 type Axis =
   | { outcome: 'axis'; plunge: number | null; trend: number | null; conversions: string[] }

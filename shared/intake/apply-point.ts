@@ -1,11 +1,14 @@
+import { parseAzimuth } from '../structure/azimuth-text'
+import { placeSymbolOf } from '../symbols/draw-place'
 import type { Application, PartOutcome } from './apply'
 import type { Mapping, PointTarget } from './mapping'
+import { lineationItem } from './apply-lineation'
 import { placePoint } from './place'
+import { pointBasis, type PointBasis } from './point-basis'
 import { saysTopsUnknown } from './point-words'
 import { readReading, fromStatedNorth } from './readings'
 import { attributeText, type FilePosition, type IntakeRecord } from './records'
-import { fitText, mappedText } from './texts'
-import type { XY } from '../units'
+import { mappedText } from './texts'
 
 /** What a point of a record becomes. */
 export function pointItem(
@@ -22,35 +25,22 @@ export function pointItem(
   if (target.kind === 'leave-out') return { outcome: 'left-out' }
   const placed = placePoint(position, application.ground)
   if (placed.outcome === 'misplaced') return { ...placed, outcome: 'refused', field: 'geometry' }
-  const common = commonOf(record, points, placed.geometry, application.newId())
+  const common = pointBasis(record, points, placed.geometry, application.newId())
   const conversions = [...placed.conversions, ...common.conversions]
-  if (target.kind === 'attitude') return attitudeItem(record, target, { ...common, conversions }, application)
-  const properties = { note: common.note, type: 'station' as const, name: common.station, azimuth: null }
-  return { outcome: 'item', item: { kind: 'station', ...common.point, properties }, conversions }
-}
-
-interface Common {
-  point: { id: string; geometry: { type: 'Point'; coordinates: XY } }
-  station: string
-  note: string
-  conversions: string[]
-}
-
-function commonOf(record: IntakeRecord, points: Mapping['points'], xy: XY, id: string): Common {
-  const station = fitText(mappedText(record, points.stationColumn), 100, 'station')
-  const note = fitText(mappedText(record, points.noteColumn), 2000, 'note')
-  return {
-    point: { id, geometry: { type: 'Point', coordinates: xy } },
-    station: station.text,
-    note: note.text,
-    conversions: [...station.conversions, ...note.conversions],
+  switch (target.kind) {
+    case 'attitude':
+      return attitudeItem(record, target, { ...common, conversions }, application)
+    case 'lineation':
+      return lineationItem(record, target, { ...common, conversions }, application)
+    case 'station':
+      return placeItem(record, target, { ...common, conversions }, application)
   }
 }
 
 function attitudeItem(
   record: IntakeRecord,
   target: PointTarget & { kind: 'attitude' },
-  { point, station, note, conversions }: Common,
+  { point, station, note, conversions }: PointBasis,
   { mapping, ground }: Application,
 ): PartOutcome {
   const read = readReading(record, mapping.points)
@@ -78,8 +68,8 @@ function attitudeItem(
     strike: turned?.azimuth ?? null,
     dip: read.dip,
     overturned,
-    undulating: false,
-    topsKnown: false,
+    undulating: target.undulating,
+    topsKnown: target.topsKnown,
     station,
     reading: {
       text: read.text.slice(0, 200),
@@ -92,6 +82,34 @@ function attitudeItem(
     outcome: 'item',
     item: { kind: 'attitude', ...point, properties },
     conversions: [...conversions, ...read.conversions, ...(turned?.conversions ?? []), ...tops],
+  }
+}
+
+function placeItem(
+  record: IntakeRecord,
+  { type }: PointTarget & { kind: 'station' },
+  { point, station, note, conversions }: PointBasis,
+  { mapping, ground }: Application,
+): PartOutcome {
+  const { trendColumn } = mapping.points
+  const text = placeSymbolOf(type).azimuth === undefined ? '' : mappedText(record, trendColumn)
+  const place = { kind: 'station' as const, ...point }
+  if (trendColumn === null || text === '') {
+    const properties = { note, type, name: station, azimuth: null }
+    return { outcome: 'item', item: { ...place, properties }, conversions }
+  }
+  const read = parseAzimuth(text)
+  if (read.outcome === 'refused') {
+    return { outcome: 'refused', field: trendColumn, value: text, reason: read.reason }
+  }
+  const turned = fromStatedNorth(read.azimuth, mapping, () =>
+    ground.projection.convergenceAt(point.geometry.coordinates),
+  )
+  const properties = { note, type, name: station, azimuth: turned.azimuth }
+  return {
+    outcome: 'item',
+    item: { ...place, properties },
+    conversions: [...conversions, ...turned.conversions],
   }
 }
 

@@ -1,21 +1,16 @@
 import type { LocationConfidence } from '../items/confidence'
-import { foldForms, type FoldForm } from '../items/lines'
+import { faultTypes, foldForms, otherLineTypes, type FaultType } from '../items/lines'
 import type { LineTarget } from './mapping'
-import { correctSpelling, understand, vocabulary, wordsOf } from './words'
+import { correctSpelling, named, understand, vocabulary, wordsOf } from './words'
 
-type FaultSense = 'normal' | 'reverse' | 'thrust' | 'left-lateral' | 'right-lateral' | 'strike-slip'
-type OtherSense = 'dike' | 'vein' | 'marker-bed'
-type LineSense = 'contact' | 'fault' | 'frame' | FoldForm | FaultSense | OtherSense
+/** What a fold's name is made of: an overturned syncline is both, a monocline's anticlinal bend too. */
+type FoldSense = 'anticline' | 'syncline' | 'antiform' | 'synform' | 'overturned' | 'monocline'
+type FaultSense = Exclude<FaultType, 'unspecified'> | 'strike-slip'
+type OtherSense = (typeof otherLineTypes)[number]
+type LineSense = 'contact' | 'fault' | 'frame' | FoldSense | FaultSense | OtherSense
 
-const foldSenses: readonly string[] = foldForms
-const faultSenses: readonly string[] = [
-  'normal',
-  'reverse',
-  'thrust',
-  'left-lateral',
-  'right-lateral',
-  'strike-slip',
-]
+const statedTypes = faultTypes.filter((type) => type !== 'unspecified')
+const faultSenses: readonly LineSense[] = ['fault', 'strike-slip', ...statedTypes]
 
 const confidenceWords = vocabulary<LocationConfidence>([
   ['certain', 'certain, accurate, accurately, definite, exact, known, observed, exposed'],
@@ -27,21 +22,24 @@ const confidenceWords = vocabulary<LocationConfidence>([
 
 /** The trade's words for lines. Two-word terms stand beside their one-word spellings. */
 const lineWords = vocabulary<LineSense>([
+  ...named(statedTypes),
+  ...named(otherLineTypes),
   ['contact', 'contact, contacts, boundary, boundaries'],
   ['fault', 'fault, faults'],
-  ['thrust', 'thrust, thrusts, overthrust'],
-  ['reverse', 'reverse'],
-  ['normal', 'normal'],
-  ['left-lateral', 'left lateral, left slip, leftlateral, leftslip, sinistral'],
-  ['right-lateral', 'right lateral, right slip, rightlateral, rightslip, dextral'],
+  ['thrust', 'thrusts, overthrust'],
+  ['left-lateral', 'left slip, leftlateral, leftslip, sinistral'],
+  ['right-lateral', 'right slip, rightlateral, rightslip, dextral'],
+  ['rotational', 'scissor, scissors, pivotal'],
   ['strike-slip', 'strike slip, strikeslip, wrench, transcurrent'],
   ['anticline', 'anticline, anticlines, anticlinal'],
   ['syncline', 'syncline, synclines, synclinal'],
   ['antiform', 'antiform, antiforms, antiformal'],
   ['synform', 'synform, synforms, synformal'],
-  ['dike', 'dike, dikes, dyke, dykes'],
-  ['vein', 'vein, veins'],
-  ['marker-bed', 'marker bed, marker beds, marker horizon, key bed, key beds'],
+  ['overturned', 'overturned'],
+  ['monocline', 'monocline, monoclines, monoclinal'],
+  ['dike', 'dikes, dyke, dykes'],
+  ['vein', 'veins'],
+  ['marker-bed', 'marker beds, marker horizon, key bed, key beds'],
   ['frame', 'frame, map frame, neatline, map border, sheet border'],
   [
     null,
@@ -49,10 +47,13 @@ const lineWords = vocabulary<LineSense>([
   ],
   [
     null,
-    'rock, axis, axes, axial, trace, plane, surface, hinge, fold, line, structural, slip, plunging, of, the, a',
+    'rock, axis, axes, axial, trace, plane, surface, hinge, fold, bend, line, structural, slip, plunging, of, the, a',
   ],
   [null, [...confidenceWords.keys()].join(', ')],
 ])
+
+/** A form of fold is what its own name says. */
+const formSenses = foldForms.map((form) => ({ form, senses: understand(wordsOf(form), lineWords).senses }))
 
 /** What a text says a line is, every word of it understood; undefined where it says nothing, two things, or more than
  *  we know ("fold", "fault contact", "fault breccia"). Frames of map sheets are known, and left out. */
@@ -89,22 +90,21 @@ function targetOf(senses: ReadonlySet<LineSense>): LineTarget | undefined {
   if (senses.has('frame')) return { kind: 'leave-out' }
   if (senses.size === 0) return undefined
   const all = [...senses]
-  if (all.every((sense) => sense === 'fault' || faultSenses.includes(sense))) return faultTarget(senses)
-  const only = all.length === 1 ? all[0] : undefined
-  if (only === 'contact') return { kind: 'contact' }
-  if (only === 'dike' || only === 'vein' || only === 'marker-bed') return { kind: 'other-line', type: only }
-  return isFoldForm(only) ? { kind: 'axial-trace', form: only } : undefined
+  if (all.every((sense) => faultSenses.includes(sense))) return faultTarget(senses)
+  const other = otherLineTypes.find((type) => senses.has(type))
+  if (other) return all.length === 1 ? { kind: 'other-line', type: other } : undefined
+  if (senses.has('contact')) return all.length === 1 ? { kind: 'contact' } : undefined
+  const fold = formSenses.find((each) => isSame(each.senses, senses))
+  return fold && { kind: 'axial-trace', form: fold.form }
 }
 
 function faultTarget(senses: ReadonlySet<LineSense>): LineTarget | undefined {
-  const types = (['normal', 'reverse', 'thrust', 'left-lateral', 'right-lateral'] as const).filter((type) =>
-    senses.has(type),
-  )
+  const types = statedTypes.filter((type) => senses.has(type))
   if (types.length > 1) return undefined
   const type = types[0] ?? 'unspecified'
   const slides = type === 'left-lateral' || type === 'right-lateral' || type === 'unspecified'
   return senses.has('strike-slip') && !slides ? undefined : { kind: 'fault', type }
 }
 
-const isFoldForm = (sense: LineSense | undefined): sense is FoldForm =>
-  sense !== undefined && foldSenses.includes(sense)
+const isSame = <T>(a: ReadonlySet<T>, b: ReadonlySet<T>): boolean =>
+  a.size === b.size && [...a].every((member) => b.has(member))

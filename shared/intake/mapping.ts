@@ -1,7 +1,13 @@
 import { z } from 'zod'
 import { locationConfidences } from '../items/confidence'
-import { faultTypes, foldForms, otherLineTypes } from '../items/lines'
-import { attitudeConventions, northReferences, planeTypes } from '../items/points'
+import { faultTypes, foldForms, otherLineTypes, sides } from '../items/lines'
+import {
+  attitudeConventions,
+  lineationTypes,
+  northReferences,
+  planeTypes,
+  stationTypes,
+} from '../items/points'
 
 /** What one value of the type column (or every line of a file) becomes. */
 export const lineTargetSchema = z.discriminatedUnion('kind', [
@@ -15,13 +21,20 @@ export type LineTarget = z.infer<typeof lineTargetSchema>
 
 /** What one value of the type column (or every point of a file) becomes. */
 export const pointTargetSchema = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('attitude'), type: z.enum(planeTypes), overturned: z.boolean() }),
-  z.strictObject({ kind: z.literal('station') }),
+  z.strictObject({
+    kind: z.literal('attitude'),
+    type: z.enum(planeTypes),
+    overturned: z.boolean().default(false),
+    undulating: z.boolean().default(false),
+    topsKnown: z.boolean().default(false),
+  }),
+  z.strictObject({ kind: z.literal('lineation'), type: z.enum(lineationTypes) }),
+  z.strictObject({ kind: z.literal('station'), type: z.enum(stationTypes).default('station') }),
   z.strictObject({ kind: z.literal('leave-out') }),
 ])
 export type PointTarget = z.infer<typeof pointTargetSchema>
 
-const column = z.string().max(500).nullable()
+const column = z.string().max(500).nullable().default(null)
 
 /** How the attributes of a file become ours. Columns are named as in the file; null means that there is none. */
 export const mappingSchema = z
@@ -42,9 +55,11 @@ export const mappingSchema = z
       confidences: z.record(z.string(), z.enum(locationConfidences)),
       /** What lines become that state no confidence: no column, or no value in it. */
       confidenceOtherwise: z.enum(locationConfidences),
-      /** Side of normal, reverse and thrust faults, looking along the line as the file has it, that is the downthrown
-       *  side or the upper plate. Files seldom say so; the person who brings it does. */
-      faultSide: z.enum(['left', 'right']),
+      /** Side of faults whose symbol has one, looking along the line as the file has it: the downthrown side or the
+       *  upper plate. Files seldom say so; the person who brings it does. */
+      faultSide: z.enum(sides).default('right'),
+      /** Side to which the limbs of overturned folds and the steep limbs of monoclines dip, stated likewise. */
+      foldSide: z.enum(sides).default('right'),
       nameColumn: column,
       plungeColumn: column,
       trendColumn: column,
@@ -60,6 +75,9 @@ export const mappingSchema = z
       azimuthColumn: column,
       dipColumn: column,
       convention: z.enum(attitudeConventions),
+      /** Trend of lineations; azimuth of places that have one. */
+      trendColumn: column,
+      plungeColumn: column,
       stationColumn: column,
       noteColumn: column,
     }),

@@ -1,22 +1,39 @@
+import { lineationTypes, planeTypes, stationTypes } from '../items/points'
 import type { PointTarget } from './mapping'
-import { correctSpelling, understand, vocabulary, wordsOf } from './words'
+import { correctSpelling, named, understand, vocabulary, wordsOf } from './words'
 
-type PointSense = 'bedding' | 'foliation' | 'cleavage' | 'joint' | 'station' | 'overturned'
+type PlaneTrait = 'overturned' | 'undulating' | 'tops-known'
+type PointSense =
+  (typeof planeTypes)[number] | (typeof lineationTypes)[number] | (typeof stationTypes)[number] | PlaneTrait
 
+/** The trade's words for points. What is named like a type of ours is that type. */
 const pointWords = vocabulary<PointSense>([
-  ['bedding', 'bedding, bed, beds, strata, stratum, stratification, layering, s0'],
-  ['foliation', 'foliation, schistosity, gneissosity, bedding foliation'],
-  ['cleavage', 'cleavage'],
-  ['joint', 'joint, joints, fracture, fractures'],
-  ['station', 'station, stations, outcrop, outcrops, observation, waypoint, locality, stop'],
+  ...named(planeTypes),
+  ...named(lineationTypes),
+  ...named(stationTypes),
+  ['bedding', 'bed, beds, strata, stratum, stratification, layering, s0'],
+  ['foliation', 'schistosity, gneissosity, bedding foliation'],
+  ['joint', 'joints, fracture, fractures'],
+  ['lineation', 'lineations, mineral lineation, stretching lineation'],
+  ['minor-fold-axis', 'minor fold, fold axis'],
+  ['station', 'stations, outcrop, outcrops, observation, waypoint, locality, stop'],
+  ['sample', 'samples, specimen, specimens'],
+  ['fossil-locality', 'fossil, fossils'],
+  ['borehole', 'boreholes, drill hole, drillhole, drillholes'],
+  ['spring', 'springs'],
+  ['quarry', 'quarries'],
+  ['mine-adit', 'adit, adits'],
+  ['tops-direction', 'younging, younging direction'],
   ['overturned', 'overturned, inverted'],
+  ['undulating', 'undulating, wavy, crenulated'],
+  ['tops-known', 'tops known, top known'],
   [
     null,
     'strike, dip, and, of, the, vertical, horizontal, inclined, normal, upright, tops, top, unknown, facing',
   ],
   [
     null,
-    'attitude, measurement, reading, plane, planes, planar, surface, surfaces, symbol, point, bedding parallel',
+    'attitude, measurement, reading, plane, planes, planar, surface, surfaces, symbol, point, axis, bedding parallel',
   ],
 ])
 
@@ -40,9 +57,29 @@ export function suggestPointType(text: string): PointTarget | undefined {
 export const saysTopsUnknown = (text: string): boolean => /\b(tops?|facing)\b.*\bunknown\b/i.test(text)
 
 function targetOf(senses: ReadonlySet<PointSense>): PointTarget | undefined {
+  const plane = planeTypes.find((type) => senses.has(type))
+  if (plane) return attitudeTarget(plane, senses)
+  const [only, ...more] = senses
+  if (more.length > 0) return undefined
+  const lineation = lineationTypes.find((type) => type === only)
+  if (lineation) return { kind: 'lineation', type: lineation }
+  const station = stationTypes.find((type) => type === only)
+  return station && { kind: 'station', type: station }
+}
+
+/** Only beds have a top, and only beds and foliation undulate, as far as a symbol tells. */
+function attitudeTarget(
+  type: (typeof planeTypes)[number],
+  senses: ReadonlySet<PointSense>,
+): PointTarget | undefined {
   const overturned = senses.has('overturned')
-  const planes = (['bedding', 'foliation', 'cleavage', 'joint'] as const).filter((type) => senses.has(type))
-  const type = planes.length === 1 ? planes[0] : undefined
-  if (senses.has('station')) return planes.length === 0 && !overturned ? { kind: 'station' } : undefined
-  return type ? { kind: 'attitude', type, overturned } : undefined
+  const topsKnown = senses.has('tops-known')
+  const undulating = senses.has('undulating')
+  const others = [...senses].filter(
+    (sense) => sense !== type && sense !== 'overturned' && sense !== 'tops-known' && sense !== 'undulating',
+  )
+  if (others.length > 0) return undefined
+  if ((overturned || topsKnown) && type !== 'bedding') return undefined
+  if (undulating && type !== 'bedding' && type !== 'foliation') return undefined
+  return { kind: 'attitude', type, overturned, undulating, topsKnown }
 }

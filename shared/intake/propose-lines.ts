@@ -13,6 +13,7 @@ import {
 import { isSenseless, readConfidence, readLineType, suggestLineType } from './line-words'
 import type { LineTarget, Mapping } from './mapping'
 import type { IntakeColumn, ProposalNote } from './report'
+import { isSidedAxis, isSidedFault } from './sides'
 
 type Lines = Mapping['lines']
 
@@ -24,7 +25,6 @@ const nameNames = [/^name$/, /^(fault|fold|line)_name$/, /^title$/]
 const noteNames = [/^(notes?|remarks?|comments?)$/, /^descr.*$/]
 const plungeNames = [/^plunge(_val(ue)?)?$/]
 const trendNames = [/^trend(_val(ue)?)?$/, /^plunge_(dir|direction|azimuth)$/]
-const sidedTypes: readonly string[] = ['normal', 'reverse', 'thrust']
 
 /** What the lines of a file become, proposed from its columns. */
 export function proposeLines(
@@ -42,13 +42,16 @@ export function proposeLines(
     ...proposeConfidence(columns, type, notes),
     otherwise: leaveOut,
     faultSide: 'right' as const,
+    foldSide: 'right' as const,
     nameColumn: columnNamed(free, nameNames, isWordy)?.name ?? null,
     // One without the other says nothing about an axis.
     plungeColumn: trend === null ? null : plunge,
     trendColumn: plunge === null ? null : trend,
     noteColumn: columnNamed(free, noteNames, isWordy)?.name ?? null,
   }
-  if (Object.values(proposed.types).some(isSided)) notes.push(sideNote)
+  const targets = Object.values(proposed.types)
+  if (targets.some(isSidedFault)) notes.push(faultSideNote)
+  if (targets.some(isSidedAxis)) notes.push(foldSideNote)
   return { proposed, notes }
 }
 
@@ -156,12 +159,16 @@ function typeNote(column: IntakeColumn, fit: ValueFit | undefined): ProposalNote
       }
 }
 
-const isSided = (target: LineTarget): boolean => target.kind === 'fault' && sidedTypes.includes(target.type)
-
-const sideNote: ProposalNote = {
+const faultSideNote: ProposalNote = {
   weight: 'check',
   field: 'lines.faultSide',
   text: 'The file does not say on which side of its faults the downthrown side or the upper plate lies: right of the line, as drawn, is proposed.',
+}
+
+const foldSideNote: ProposalNote = {
+  weight: 'check',
+  field: 'lines.foldSide',
+  text: 'The file does not say to which side the limbs of its overturned folds or the steep limbs of its monoclines dip: right of the line, as drawn, is proposed.',
 }
 
 const noLines: Lines = {
@@ -172,6 +179,7 @@ const noLines: Lines = {
   confidences: {},
   confidenceOtherwise: 'certain',
   faultSide: 'right',
+  foldSide: 'right',
   nameColumn: null,
   plungeColumn: null,
   trendColumn: null,

@@ -16,11 +16,20 @@ import type { IntakeColumn, ProposalNote } from './report'
 type Points = Mapping['points']
 
 const leaveOut: PointTarget = { kind: 'leave-out' }
+const plainBedding: PointTarget = {
+  kind: 'attitude',
+  type: 'bedding',
+  overturned: false,
+  undulating: false,
+  topsKnown: false,
+}
 
 const strikeNames = [/^strike(_(val|value|rhr|azimuth|deg))?$/, /^(strk|rhr)$/]
 const dipDirectionNames = [/^dip_?(dir|direction|azimuth|azimut|az)(_(val|value|deg))?$/, /^dd$/]
 const azimuthNames = [/^azim(ut|uth)?$/, /^(az|bearing|direction|orientation)$/]
 const dipNames = [/^dip(_?(val|value|angle|amount|deg))?$/]
+const trendNames = [/^trend(_?(val|value))?$/, /^plunge_?(dir|direction|azimuth)$/]
+const plungeNames = [/^plunge(_?(val|value|angle|amount))?$/]
 const stationNames = [/^(station|stn|site|outcrop|locality|stop)(_?(id|no|name|number))?$/, /^name$/]
 const noteNames = [/^(notes?|remarks?|comments?)$/, /^descr.*$/]
 const typeNames = [/^(point_|plane_|structure_)?type$/, /^(kind|class|category|legend.*|feature)$/]
@@ -33,13 +42,14 @@ export function proposePoints(
   const notes: ProposalNote[] = []
   if (pointCount === 0) return { proposed: noPoints, notes }
   const readings = proposeReadings(columns, notes)
-  const reads = readings.readingColumn !== null || readings.dipColumn !== null
-  const type = proposeTypes(columns, reads, notes)
+  const line = proposeLineations(columns)
+  const type = proposeTypes(columns, usualTarget(readings, line), notes)
   const taken = [type.typeColumn, readings.readingColumn]
   const free = columns.filter((column) => !taken.includes(column.name))
   return {
     proposed: {
       ...readings,
+      ...line,
       ...type,
       stationColumn: columnNamed(free, stationNames, (column) => column.filled > 0)?.name ?? null,
       noteColumn: columnNamed(free, noteNames, isWordy)?.name ?? null,
@@ -103,9 +113,30 @@ function proposeAzimuth(
   return { column: azimuth, convention: 'strike-dip' }
 }
 
+type LineColumns = Pick<Points, 'trendColumn' | 'plungeColumn'>
+
+/** One without the other says nothing about a line. */
+function proposeLineations(columns: readonly IntakeColumn[]): LineColumns {
+  const trend = columnNamed(columns, trendNames, (column) => column.filled > 0)
+  const plunge = columnNamed(columns, plungeNames, (column) => isNumeric(column, 0, 90))
+  return trend && plunge
+    ? { trendColumn: trend.name, plungeColumn: plunge.name }
+    : { trendColumn: null, plungeColumn: null }
+}
+
+/** What points become of which no column says what they are. */
+function usualTarget(readings: Readings, line: LineColumns): { target: PointTarget; words: string } {
+  if (readings.readingColumn !== null || readings.dipColumn !== null) {
+    return { target: plainBedding, words: 'bedding, not overturned' }
+  }
+  return line.plungeColumn === null
+    ? { target: { kind: 'station', type: 'station' }, words: 'a station, since none has a reading' }
+    : { target: { kind: 'lineation', type: 'lineation' }, words: 'a lineation' }
+}
+
 function proposeTypes(
   columns: readonly IntakeColumn[],
-  reads: boolean,
+  usual: { target: PointTarget; words: string },
   notes: ProposalNote[],
 ): Pick<Points, 'typeColumn' | 'types' | 'otherwise'> {
   const fit = columnByValues(columns, 'points', (value) => readPointType(value) !== undefined, 0.3)
@@ -113,16 +144,12 @@ function proposeTypes(
   const column = fit?.column ?? named
   const field = 'points.typeColumn'
   if (!column) {
-    const otherwise: PointTarget = reads
-      ? { kind: 'attitude', type: 'bedding', overturned: false }
-      : { kind: 'station' }
-    const what = reads ? 'bedding, not overturned' : 'a station, since none has a reading'
     notes.push({
       weight: 'check',
       field: 'points.otherwise',
-      text: `No column says what the points are: each would be taken as ${what}.`,
+      text: `No column says what the points are: each would be taken as ${usual.words}.`,
     })
-    return { typeColumn: null, types: {}, otherwise }
+    return { typeColumn: null, types: {}, otherwise: usual.target }
   }
   if (fit) notes.push({ weight: 'reason', field, text: saysWhat(fit, pointForm) })
   const values = column.values.filter(({ value, points }) => value !== '' && points > 0)
@@ -174,6 +201,8 @@ const noPoints: Points = {
   azimuthColumn: null,
   dipColumn: null,
   convention: 'strike-dip',
+  trendColumn: null,
+  plungeColumn: null,
   stationColumn: null,
   noteColumn: null,
 }

@@ -21,7 +21,10 @@ export function proposeMapping(columns: readonly IntakeColumn[], counts: FormCou
   const lines = proposeLines(columns, counts.lines)
   const notes = [...points.notes, ...lines.notes]
   const azimuths =
-    points.proposed.azimuthColumn ?? points.proposed.readingColumn ?? lines.proposed.trendColumn
+    points.proposed.azimuthColumn ??
+    points.proposed.readingColumn ??
+    points.proposed.trendColumn ??
+    lines.proposed.trendColumn
   if (azimuths !== null) notes.push(northNote)
   return {
     mapping: {

@@ -16,6 +16,10 @@ export type Vocabulary<Sense> = ReadonlyMap<string, Sense | null>
 export const vocabulary = <Sense>(senses: readonly (readonly [Sense | null, string])[]): Vocabulary<Sense> =>
   new Map(senses.flatMap(([sense, words]) => words.split(', ').map((word) => [word, sense] as const)))
 
+/** Each of our own values with its name in plain words: left-lateral by `left lateral`. */
+export const named = <Value extends string>(values: readonly Value[]): (readonly [Value, string])[] =>
+  values.map((value) => [value, value.replaceAll('-', ' ')])
+
 export interface Understood<Sense> {
   senses: Set<Sense>
   /** Words that the vocabulary does not have. */

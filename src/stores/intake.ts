@@ -1,7 +1,7 @@
 import { defineStore } from 'pinia'
 import { reactive } from 'vue'
 import type { Intake } from '@shared/api/intake'
-import type { Mapping } from '@shared/intake/mapping'
+import { mappingSchema, type Mapping } from '@shared/intake/mapping'
 
 /** What a person has changed of a file's proposed mapping and not taken in yet. */
 export interface IntakeDraft {
@@ -18,7 +18,9 @@ export const useIntakeStore = defineStore('intake', () => {
   /** The draft of a file, begun from its proposal. */
   function draftOf(intake: Intake): IntakeDraft {
     if (!drafts.has(intake.id)) {
-      drafts.set(intake.id, { mapping: structuredClone(intake.proposal), answered: new Set(), message: '' })
+      // Parsing copies it, and fills in what a proposal made by an older version does not have.
+      const mapping = mappingSchema.parse(intake.proposal)
+      drafts.set(intake.id, { mapping, answered: new Set(), message: '' })
     }
     // Just put there if it was missing; the map's own value is the reactive one.
     return drafts.get(intake.id) as IntakeDraft

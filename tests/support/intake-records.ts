@@ -1,3 +1,4 @@
+import { applyMapping, type Applied } from '@shared/intake/apply'
 import type { Mapping } from '@shared/intake/mapping'
 import { sheetGround, type SheetGround } from '@shared/intake/place'
 import type { IntakeRecord, RecordPart } from '@shared/intake/records'
@@ -40,6 +41,7 @@ export function aMapping(given: {
       confidences: {},
       confidenceOtherwise: 'certain',
       faultSide: 'right',
+      foldSide: 'right',
       nameColumn: null,
       plungeColumn: null,
       trendColumn: null,
@@ -49,11 +51,13 @@ export function aMapping(given: {
     points: {
       typeColumn: null,
       types: {},
-      otherwise: { kind: 'station' },
+      otherwise: { kind: 'station', type: 'station' },
       readingColumn: null,
       azimuthColumn: null,
       dipColumn: null,
       convention: 'strike-dip',
+      trendColumn: null,
+      plungeColumn: null,
       stationColumn: null,
       noteColumn: null,
       ...given.points,
@@ -61,9 +65,28 @@ export function aMapping(given: {
   }
 }
 
+/** A bed that is only measured. */
+export const aBed = {
+  kind: 'attitude',
+  type: 'bedding',
+  overturned: false,
+  undulating: false,
+  topsKnown: false,
+} as const
+
 /** Two columns of numbers, each point a bedding attitude. */
 export const strikeAndDip: Partial<Mapping['points']> = {
   azimuthColumn: 'strike',
   dipColumn: 'dip',
-  otherwise: { kind: 'attitude', type: 'bedding', overturned: false },
+  otherwise: aBed,
 }
+
+/** What a mapping makes of records, on the ground above; the items are numbered from 1. */
+export function applied(records: readonly IntakeRecord[], mapping: Mapping): Applied {
+  let made = 0
+  const newId = () => `00000000-0000-4000-8000-${String(++made).padStart(12, '0')}`
+  return applyMapping(records, 'field.geojson', { mapping, ground: aGround(), newId })
+}
+
+export const propertiesOf = ({ items }: Applied) => items.map(({ item }) => item.properties)
+export const reasonsOf = ({ refusals }: Applied) => refusals.map(({ reason }) => reason)

@@ -2,19 +2,14 @@ import type { LocationConfidence } from '@shared/items/confidence'
 import { lineTargetSchema, type LineTarget, type PointTarget } from '@shared/intake/mapping'
 import { lineKinds } from '@shared/items/item'
 import { planeTypes } from '@shared/items/points'
+import { lineations } from '@shared/symbols/definitions/lineations'
+import { places } from '@shared/symbols/definitions/points'
 import { lineSymbols } from '@shared/symbols/draw-item'
 import { legendEntries, type LegendEntry } from '@shared/symbols/legend-entries'
-
-/** Choices under one heading; without a title, choices for themselves. */
-export interface OptionGroup {
-  title: string
-  options: readonly { key: string; title: string }[]
-}
+import type { Option, OptionGroup } from './option-groups'
 
 /** One choice of what a value becomes. */
-export interface TargetOption<T> {
-  key: string
-  title: string
+export interface TargetOption<T> extends Option {
   target: T
 }
 
@@ -63,18 +58,35 @@ function lineTarget(kind: (typeof lineKinds)[number], variant: string): LineTarg
   return lineTargetSchema.parse(kind === 'axial-trace' ? { kind, form: variant } : { kind, type: variant })
 }
 
+const either = [false, true]
+const traits = either.flatMap((overturned) =>
+  either.flatMap((topsKnown) => either.map((undulating) => ({ overturned, topsKnown, undulating }))),
+)
+
+/** Every point that has a symbol; of planes, with each trait that their symbol can show. */
 export const pointTargets: readonly TargetGroup<PointTarget>[] = [
-  { title: 'Attitudes', options: planeTypes.flatMap((type) => [false, true].flatMap(attitudeOption(type))) },
-  { title: 'Other points', options: [option('Station', { kind: 'station' })] },
+  {
+    title: 'Attitudes',
+    options: planeTypes
+      .flatMap((type) => traits.map((trait): PointTarget => ({ kind: 'attitude', type, ...trait })))
+      .filter((target) => entryOf(target, 'certain') !== undefined)
+      .map((target) => option(planeTitle(target), target)),
+  },
+  {
+    title: 'Lineations',
+    options: lineations.map(({ type, title }) => option<PointTarget>(title, { kind: 'lineation', type })),
+  },
+  {
+    title: 'Places',
+    options: places.map(({ type, title }) => option<PointTarget>(title, { kind: 'station', type })),
+  },
 ]
 
-/** Only planes that have a top are overturned: those that the legend explains so. */
-function attitudeOption(type: (typeof planeTypes)[number]) {
-  return (overturned: boolean): TargetOption<PointTarget>[] => {
-    const target: PointTarget = { kind: 'attitude', type, overturned }
-    const title = overturned ? `${capital(type)}, overturned` : capital(type)
-    return entryOf(target, 'certain') ? [option(title, target)] : []
-  }
+function planeTitle(target: PointTarget): string {
+  if (target.kind !== 'attitude') return ''
+  const { type, overturned, topsKnown, undulating } = target
+  const words = [overturned && 'overturned', topsKnown && 'tops known', undulating && 'undulating']
+  return [capital(type), ...words.filter(Boolean)].join(', ')
 }
 
 /** The option with a key. */

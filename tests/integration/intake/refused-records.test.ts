@@ -11,6 +11,7 @@ import {
   placemark,
   useIntakeDesk,
 } from '../../support/intake-desk'
+import { aBed } from '../../support/intake-records'
 
 const desk = useIntakeDesk()
 
@@ -97,18 +98,16 @@ describe('a record that cannot be is refused with its number, field, value and r
       points: {
         ...intake.proposal.points,
         readingColumn: 'attitude',
-        otherwise: { kind: 'attitude', type: 'bedding', overturned: false },
+        otherwise: aBed,
       },
     })
     const intake = await desk.brought(kml(readings.join('')), 'readings.kml')
     const { refusals, accepted } = await desk.preview(intake, mapping(intake))
     expect(accepted).toBe(1)
-    expect(refusals).toMatchObject(
-      [
-        { record: 2, field: 'attitude', value: 'N45E 40NE', reason: /NE lies along the strike/ },
-        { record: 3, field: 'attitude', value: 'see sketch' },
-      ].map(({ reason, ...rest }) => (reason ? { ...rest, reason: expect.stringMatching(reason) } : rest)),
-    )
+    expect(refusals).toMatchObject([
+      { record: 2, value: 'N45E 40NE', reason: expect.stringContaining('NE lies along the strike') },
+      { record: 3, value: 'see sketch', reason: expect.stringContaining('does not read') },
+    ])
   })
 })
 

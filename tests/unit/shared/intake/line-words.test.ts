@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { faultTypes, foldForms, foldWords, otherLineTypes } from '@shared/items/lines'
 import { isSenseless, readConfidence, readLineType, suggestLineType } from '@shared/intake/line-words'
 
 const fault = (type: string) => ({ kind: 'fault', type })
@@ -20,6 +21,9 @@ describe('readLineType', () => {
     ['Antiform axis', fold('antiform')],
     ['AnticlineAxialTrace', fold('anticline')],
     ['syncline, approximately located', fold('syncline')],
+    ['overturned synclinal axis', fold('overturned-syncline')],
+    ['Monocline (synclinal bend)', fold('monocline-synclinal-bend')],
+    ['scissor fault', fault('rotational')],
     ['dyke', { kind: 'other-line', type: 'dike' }],
     ['marker bed', { kind: 'other-line', type: 'marker-bed' }],
     ['Map frame', { kind: 'leave-out' }],
@@ -34,11 +38,25 @@ describe('readLineType', () => {
     'Fault?',
     'anticline or syncline',
     'normal thrust',
+    'monocline',
+    'overturned fault',
+    'overturned',
     'c',
     '',
     '1611',
   ])('does not guess at “%s”', (text) => {
     expect(readLineType(text)).toBeUndefined()
+  })
+})
+
+describe('every type that there is', () => {
+  it('is read by its own name', () => {
+    const stated = faultTypes.filter((type) => type !== 'unspecified')
+    expect(stated.map((type) => readLineType(`${type} fault`))).toEqual(stated.map(fault))
+    expect(foldForms.map((form) => readLineType(foldWords[form]))).toEqual(foldForms.map(fold))
+    expect(otherLineTypes.map(readLineType)).toEqual(
+      otherLineTypes.map((type) => ({ kind: 'other-line', type })),
+    )
   })
 })
 
