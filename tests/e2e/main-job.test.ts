@@ -9,7 +9,7 @@ import type { Edition } from '@shared/api/catalogue'
 import type { Sheet } from '@shared/api/sheets'
 import { isLineItem, type Item, type ItemKind, type ItemOf } from '@shared/items/item'
 import type { XY } from '@shared/units'
-import { demoFieldFiles } from '../../server/demo/field-files'
+import { demoFieldFiles } from '../../server/demo/field-files/field-files'
 import { expectArrowDownPlunge } from '../support/arrows'
 import { expectPrintedPage } from '../support/printed-page'
 import { draw, enterAs, followErrors, goTo, openPage, waitUntilSaved } from '../support/people'
@@ -128,9 +128,10 @@ describe('the main job, from sign-in to the released edition', () => {
 
   it('takes a GeoJSON and a KML in, each as one ledger entry, and lists what it refuses with reasons', async () => {
     const before = (await ask<Sheet>(compiler, `/api/sheets/${SHEET}`)).revision
-    for (const { name, text } of demoFieldFiles()) {
+    const brought = demoFieldFiles().filter(({ name }) => /traverse\.(geojson|kml)$/.test(name))
+    for (const { name, bytes } of brought) {
       const path = join(folder, name)
-      writeFileSync(path, text)
+      writeFileSync(path, bytes)
       await compiler.getByLabel('Field files').setInputFiles(path)
       await compiler.getByRole('heading', { name }).waitFor()
       const take = compiler.getByRole('button', { name: /^Take in \d+ items$/ })

@@ -1,52 +1,28 @@
 import type { Metres, XY } from '@shared/units'
+import type { Lattice, Sampled } from './lattice'
 import { bisect, ontoZero, type Surface } from './vectors'
 
 /** A level line: open ones begin and end on the edge of the area, closed ones repeat their first place. */
 export type Line = XY[]
 
-/** The area that is contoured: from the origin to width and height, in square cells. */
-export interface Extent {
-  width: Metres
-  height: Metres
-  cell: Metres
-}
-
-/** A surface with its values at the corners of cells, row by row from the south-west. */
-export interface Sampled {
-  surface: Surface
-  extent: Extent
-  columns: number
-  rows: number
-  values: Float64Array
-}
-
-/** Samples a surface once, for all levels that are asked of it. */
-export function sample(surface: Surface, extent: Extent): Sampled {
-  const { width, height, cell } = extent
-  const [columns, rows] = [Math.round(width / cell), Math.round(height / cell)]
-  const values = new Float64Array((columns + 1) * (rows + 1))
-  values.forEach((_, index) => {
-    values[index] = surface([(index % (columns + 1)) * cell, Math.floor(index / (columns + 1)) * cell])
-  })
-  return { surface, extent, columns, rows, values }
-}
-
 /** Lines on which a sampled surface has a value, by marching squares, each vertex then moved onto the level exactly. Ends
  *  lie exactly on the edges of the area. Source: common practice; the middle of a cell decides its saddle. */
 export function levelLines(sampled: Sampled, level: number): Line[] {
-  const { surface, extent, columns, rows, values } = sampled
+  const { surface, lattice, values } = sampled
   const above: Surface = (xy) => surface(xy) - level
   const grid: Grid = {
     surface: above,
-    cell: extent.cell,
-    columns,
-    rows,
-    // A value of exactly zero would leave the level between two cells.
-    valueAt: (column, row) => (values[row * (columns + 1) + column] ?? level) - level || 1e-12,
+    lattice,
+    valueAt(column, row) {
+      const value = (values[row * (lattice.columns + 1) + column] ?? NaN) - level
+      // A value of exactly zero would leave the level between two cells.
+      return value === 0 ? 1e-12 : value
+    },
   }
   const graph = new CrossingGraph()
-  for (let row = 0; row < rows; row++) {
-    for (let column = 0; column < columns; column++) {
+  for (let row = 0; row < lattice.rows; row++) {
+    for (let column = 0; column < lattice.columns; column++) {
+      if (!isCrossed(sampled, level, column, row)) continue
       for (const [from, to] of cellPairs(grid, column, row)) graph.join(from, to)
     }
   }
@@ -56,6 +32,17 @@ export function levelLines(sampled: Sampled, level: number): Line[] {
       above,
     ),
   )
+}
+
+/** Whether a level may pass a cell. Most cells are passed by none: this must be quick. */
+function isCrossed({ values, lattice }: Sampled, level: number, column: number, row: number): boolean {
+  const southWest = row * (lattice.columns + 1) + column
+  const northWest = southWest + lattice.columns + 1
+  const [a, b] = [(values[southWest] ?? NaN) - level, (values[southWest + 1] ?? NaN) - level]
+  const [c, d] = [(values[northWest] ?? NaN) - level, (values[northWest + 1] ?? NaN) - level]
+  const allAbove = a > 0 && b > 0 && c > 0 && d > 0
+  const allBelow = a < 0 && b < 0 && c < 0 && d < 0
+  return !allAbove && !allBelow && !Number.isNaN(a + b + c + d)
 }
 
 /** How far a piece of a line may depart from the level between its vertices. */
@@ -82,9 +69,7 @@ function bendsBetween(from: XY, to: XY, surface: Surface, depth: number): Line {
 
 interface Grid {
   surface: Surface
-  cell: Metres
-  columns: number
-  rows: number
+  lattice: Lattice
   valueAt(column: number, row: number): number
 }
 
@@ -98,7 +83,7 @@ interface Crossing {
 const keyOf = ({ column, row, toward }: Crossing): string => `${column} ${row} ${toward}`
 
 /** Which crossings of a cell's edges the level joins. */
-function cellPairs({ valueAt, surface, cell }: Grid, column: number, row: number): [Crossing, Crossing][] {
+function cellPairs({ valueAt, surface, lattice }: Grid, column: number, row: number): [Crossing, Crossing][] {
   const [sw, se, nw, ne] = [
     valueAt(column, row) > 0,
     valueAt(column + 1, row) > 0,
@@ -119,7 +104,7 @@ function cellPairs({ valueAt, surface, cell }: Grid, column: number, row: number
   const [first, second] = crossed
   if (crossed.length === 2 && first && second) return [[first, second]]
   if (crossed.length < 4) return []
-  const middle = surface([(column + 0.5) * cell, (row + 0.5) * cell]) > 0
+  const middle = surface(lattice.nodeAt(column + 0.5, row + 0.5)) > 0
   return middle === sw
     ? [
         [bottom, right],
@@ -174,16 +159,18 @@ class CrossingGraph {
 }
 
 /** The exact place of a crossing: on the edge of the area it stays on the edge, inside it moves down the slope. */
-function placeOf({ surface, cell, columns, rows, valueAt }: Grid, { column, row, toward }: Crossing): XY {
-  const [x, y] = [column * cell, row * cell]
-  const onEdge = toward === 'east' ? row === 0 || row === rows : column === 0 || column === columns
+function placeOf({ surface, lattice, valueAt }: Grid, { column, row, toward }: Crossing): XY {
+  const [x, y] = lattice.nodeAt(column, row)
+  const [nextX, nextY] = lattice.nodeAt(column + 1, row + 1)
+  const isEast = toward === 'east'
+  const onEdge = isEast ? row === 0 || row === lattice.rows : column === 0 || column === lattice.columns
   if (onEdge) {
-    return toward === 'east'
-      ? [bisect((at) => surface([at, y]), x, x + cell), y]
-      : [x, bisect((at) => surface([x, at]), y, y + cell)]
+    return isEast
+      ? [bisect((at) => surface([at, y]), x, nextX), y]
+      : [x, bisect((at) => surface([x, at]), y, nextY)]
   }
   const from = valueAt(column, row)
-  const to = toward === 'east' ? valueAt(column + 1, row) : valueAt(column, row + 1)
+  const to = isEast ? valueAt(column + 1, row) : valueAt(column, row + 1)
   const fraction = from / (from - to)
-  return ontoZero(surface, toward === 'east' ? [x + fraction * cell, y] : [x, y + fraction * cell])
+  return ontoZero(surface, isEast ? [x + fraction * (nextX - x), y] : [x, y + fraction * (nextY - y)])
 }

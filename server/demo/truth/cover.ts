@@ -1,45 +1,59 @@
-import type { XY } from '@shared/units'
-import { beyondHead, fromValley, valleys, type Valley } from './terrain'
-import type { Surface } from './vectors'
+import type { Metres } from '@shared/units'
+import { wave } from './curves'
+import type { Land } from './terrain'
+import { slope, type Surface } from './vectors'
 
-/** A body of younger cover: it lies where its surface is positive. */
-export interface CoverPatch {
-  /** Which of the cover units it is. */
-  unit: 'alluvium' | 'peat'
+/** What lies on the rock and hides it. The sea hides even what is known beneath. */
+export type CoverKind = 'sea' | 'alluvium' | 'peat' | 'talus'
+
+/** A kind of cover: it lies where its surface is positive, unless a cover before it in the list does. */
+export interface Cover {
+  kind: CoverKind
   surface: Surface
 }
 
-const wave = (at: number, length: number, phase = 0): number => Math.sin((2 * Math.PI * at) / length + phase)
+/** Cover of an island, the uppermost first. */
+export function coverOf(land: Land): readonly Cover[] {
+  return [
+    { kind: 'sea', surface: (xy) => -land.ground(xy) },
+    { kind: 'alluvium', surface: alluvium(land) },
+    { kind: 'talus', surface: talus(land) },
+    { kind: 'peat', surface: peat(land) },
+  ]
+}
 
-/** Alluvium along a valley floor, wider and narrower, up to its head. */
-const ribbon =
-  (valley: Valley): Surface =>
+/** Floors of the great valleys, narrower upstream to a rounded head; each valley has its own. Distances across a valley
+ *  are shares of the way to its divide. */
+const alluvium =
+  (land: Land): Surface =>
   (xy) => {
-    const half = 175 + 55 * wave(xy[0], 2300) + 22 * wave(xy[0], 930, 1)
+    const along = land.alongCoast(xy)
+    const head: Metres = 7600 + 2600 * wave(along, 7900, 1.4)
+    const beyond = (land.inland(xy) - head) / 900
+    const half = 0.12 + 0.03 * wave(xy[0] - xy[1], 2300) + 0.015 * wave(xy[0], 930, 1)
     // Smooth at the middle line, so that the head is round.
-    const away = Math.sqrt(fromValley(valley, xy) ** 2 + 60 ** 2)
-    const narrowing = 120 * Math.log1p(Math.exp((beyondHead(valley, xy) + 100) / 120))
-    return half - away - narrowing
+    const away = Math.hypot(land.fromValley(xy), 0.06) - 0.06
+    return half - away - 0.35 * Math.log1p(Math.exp(beyond * 4))
   }
 
-/** A blanket of peat: an ellipse with an uneven edge. */
-const blanket =
-  (middle: XY, [long, short]: XY, turn: number, phase: number): Surface =>
-  ([x, y]) => {
-    const [dx, dy] = [x - middle[0], y - middle[1]]
-    const u = (dx * Math.sin(turn) + dy * Math.cos(turn)) / long
-    const v = (dx * Math.cos(turn) - dy * Math.sin(turn)) / short
-    const around = Math.atan2(v, u)
-    const edge = 1 + 0.13 * Math.sin(2 * around + phase) + 0.09 * Math.sin(3 * around - phase)
-    return edge - Math.hypot(u, v)
+/** Blankets on broad high ground, away from the valleys and the coast. */
+const peat =
+  (land: Land): Surface =>
+  (xy) => {
+    const [x, y] = xy
+    const swell = wave(x + 0.35 * y, 3900, 0.3) * wave(y - 0.25 * x, 5100, 1.9)
+    const frayed =
+      0.17 * wave(x, 1430) * wave(y, 1190, 1) + 0.07 * wave(x + y, 710) + 0.12 * wave(x - y, 9100, 1)
+    const edge = 0.25 * Math.exp(-((land.inland(xy) / 2500) ** 2))
+    return swell + frayed + 0.75 * Math.min(1, land.fromValley(xy)) - edge - 1.27
   }
 
-/** All cover of the demo sheet. Patches do not touch one another. */
-export const coverPatches: readonly CoverPatch[] = [
-  ...valleys.map((valley): CoverPatch => ({ unit: 'alluvium', surface: ribbon(valley) })),
-  { unit: 'peat', surface: blanket([1500, 6250], [830, 430], 0.35, 0.6) },
-  { unit: 'peat', surface: blanket([4550, 5350], [640, 380], 0.75, 2.2) },
-  { unit: 'peat', surface: blanket([8900, 5450], [700, 420], 0.2, 4) },
-  { unit: 'peat', surface: blanket([5300, 10250], [560, 340], 0.6, 1.4) },
-  { unit: 'peat', surface: blanket([3350, 700], [520, 330], 0.5, 3) },
-]
+/** Blocks at the foot of the steepest slopes. */
+const talus =
+  (land: Land): Surface =>
+  (xy) => {
+    const [x, y] = xy
+    const steepness = Math.hypot(...slope(land.ground, xy, 140))
+    const patches = 0.1 * wave(x - 0.4 * y, 2700, 2) * wave(y + 0.4 * x, 2900, 0.5)
+    return steepness + patches - 0.475
+  }

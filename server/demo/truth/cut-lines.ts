@@ -50,9 +50,17 @@ export const isClosed = (line: Line): boolean => {
 
 export const isSame = (a: XY, b: XY): boolean => a[0] === b[0] && a[1] === b[1]
 
-/** The line with the nodes of other lines as vertices, each in its nearest segment. */
+/** Nodes farther than this from a line belong to another. */
+const NODE_REACH: Metres = 1
+
+/** The line with those nodes of other lines that lie on it as vertices, each in its nearest segment. */
 export function withNodes(line: Line, nodes: readonly XY[]): Line {
-  const places = nodes.map((node) => ({ node, at: positionAlong(line, node) })).sort((a, b) => a.at - b.at)
+  const places = nodes
+    .flatMap((node) => {
+      const { distance, at } = positionAlong(line, node)
+      return distance < NODE_REACH ? [{ node, at }] : []
+    })
+    .sort((a, b) => a.at - b.at)
   const result: XY[] = []
   line.forEach((place, index) => {
     result.push(place)
@@ -63,8 +71,8 @@ export function withNodes(line: Line, nodes: readonly XY[]): Line {
   return result
 }
 
-/** Number of the nearest segment plus the fraction along it. */
-function positionAlong(line: Line, place: XY): number {
+/** Number of the nearest segment plus the fraction along it, and the distance from it. */
+function positionAlong(line: Line, place: XY): { distance: Metres; at: number } {
   let nearest = { distance: Infinity, at: 0 }
   line.slice(1).forEach((to, index) => {
     const from = line[index] ?? to
@@ -72,7 +80,7 @@ function positionAlong(line: Line, place: XY): number {
     const distance = distanceTo(from, to, place)
     if (distance < nearest.distance) nearest = { distance, at: index + fraction }
   })
-  return nearest.at
+  return nearest
 }
 
 function fractionAlong(from: XY, to: XY, place: XY): number {
@@ -119,4 +127,14 @@ function thinRun(run: Line, tolerance: Metres, longest: Metres): Line {
     ...thinRun(run.slice(0, at + 1), tolerance, longest),
     ...thinRun(run.slice(at), tolerance, longest).slice(1),
   ]
+}
+
+/** Length of a line, metres. */
+export function lengthOf(line: Line): Metres {
+  let length = 0
+  for (let index = 1; index < line.length; index++) {
+    const [from, to] = [line[index - 1], line[index]]
+    if (from && to) length += Math.hypot(to[0] - from[0], to[1] - from[1])
+  }
+  return length
 }

@@ -1,245 +1,215 @@
-import { snapToGrid } from '@shared/geometry/grid'
-import type { LocationConfidence } from '@shared/items/confidence'
 import type { ItemOf } from '@shared/items/item'
-import { formatAttitude } from '@shared/structure/attitude-words'
-import { normalizeAzimuth, type Azimuth, type Degrees, type Metres, type XY } from '@shared/units'
-import { makeTraces, type Trace } from './axial-traces'
-import type { Line } from './contours'
-import { makeLabels, type Label } from './labels'
-import { lengthOf, makeLinework, withStretch, type MapLine } from './linework'
-import { randomId, seededRandom, type Random } from './random'
-import { makeStations, type Station } from './stations'
-import { makeTruth, type Truth } from './truth'
-import { coverUnits, layers, markerBed } from './units'
+import type { StationType } from '@shared/items/points'
+import type { Degrees, Metres, XY } from '@shared/units'
+import { makeTraces } from './axial-traces'
+import { ItemFrame } from './item-frame'
+import { makeLabels } from './labels'
+import { layLattice, type Extent } from './lattice'
+import { LineItems } from './line-items'
+import { makeLinework, type MapLine } from './linework'
+import { MapBounds } from './map-bounds'
+import { noNoise, type Noise } from './noise'
+import { PointItems } from './point-items'
+import { seededRandom } from './random'
+import { cellsNear, rasterize } from './raster'
+import { axisDirection, beddingNormal, dipAt, FreePlaces, type Measured, type Station } from './stations'
+import type { Truth } from './truth'
+import { legendUnits } from './units'
 
 export interface SheetOptions {
   seed: number
-  /** South-west corner, sheet metres. */
+  truth: Truth
+  /** Which part of the island the sheet shows. */
+  extent: Extent
+  /** The island's origin in sheet metres. */
   origin: XY
-  width: Metres
-  height: Metres
-  /** Trend of the fold axes, degrees from true north. */
-  trend: Azimuth
+  /** Grid convergence at a place in sheet metres, degrees. */
   convergenceAt(xy: XY): Degrees
-  /** Attitudes on the sheet. */
-  stations: number
+  /** Attitudes on the sheet; fewer if there is no room. */
+  attitudes: number
   /** Letters before station numbers. */
-  stationPrefix: string
+  prefix: string
+  /** Least distance between stations. */
+  apart: Metres
+  noise?: Noise
+  /** Sides of the cells that lines and areas are found in. */
+  cells?: { lines: Metres; areas: Metres }
 }
 
 /** Everything on a demo sheet, sorted as people would have brought it. */
 export interface DemoSheet {
-  truth: Truth
   units: ItemOf<'unit'>[]
   contacts: ItemOf<'contact'>[]
   coverContacts: ItemOf<'contact'>[]
   faults: ItemOf<'fault'>[]
-  markerBeds: ItemOf<'other-line'>[]
+  otherLines: ItemOf<'other-line'>[]
   traces: ItemOf<'axial-trace'>[]
   attitudes: ItemOf<'attitude'>[]
+  lineations: ItemOf<'lineation'>[]
+  stations: ItemOf<'station'>[]
   labels: ItemOf<'unit-label'>[]
+  /** What the sheet was drawn from: where its areas end, and what room for stations is left. */
+  survey: { bounds: MapBounds; places: FreePlaces }
 }
 
-/** A demo sheet whose every line and figure follows from a known field. Same options, same sheet. */
+/** Distance of a station from the edge of its area: 90 m are nearly 4 mm at 1:24 000. */
+const CLEAR: Metres = 90
+
+/** A sheet whose every line and figure follows from the known island. Same options, same sheet. */
 export function generateSheet(options: SheetOptions): DemoSheet {
-  const { origin, width, height } = options
-  const centre: XY = [origin[0] + width / 2, origin[1] + height / 2]
-  const truth = makeTruth({ width, height, gridTrend: options.trend - options.convergenceAt(centre) })
-  const writer = new ItemWriter(options, seededRandom(options.seed))
-  const units = writer.units()
-  const { lines, leftOut } = makeLinework(truth)
-  const labels = makeLabels(truth, leftOut)
-  const stations = makeStations(truth, seededRandom(options.seed + 1), {
-    wanted: options.stations,
-    apart: 560,
-    clearOf: labels.map((label) => label.at),
-    clear: 200,
-  })
+  const { seed, truth, extent, apart, noise = noNoise, cells = { lines: 40, areas: 25 } } = options
+  const bounds = new MapBounds(truth, layLattice(extent, cells.lines, truth.ground))
+  const { lines, leftOut } = makeLinework(bounds)
+  const traces = makeTraces(bounds)
+  const raster = rasterize(bounds, cells.areas)
+  const across = [...traces.map(({ line }) => line), ...lines.filter(boundsNothing).map(({ line }) => line)]
+  const labels = makeLabels(bounds, raster, across, leftOut)
+  const near = cellsNear(raster, across, Math.round(CLEAR / cells.areas))
+  const places = new FreePlaces(truth, raster, near, CLEAR, seededRandom(seed + 1), apart)
+  for (const { at } of labels) places.occupy(at)
+
+  const frame = new ItemFrame(options.origin, (xy) => options.convergenceAt(xy), seededRandom(seed))
+  const lineItems = new LineItems(frame, truth)
+  const pointItems = new PointItems(frame, truth, noise)
+  const units = legendUnits.map((properties, index): ItemOf<'unit'> => ({
+    kind: 'unit',
+    id: frame.id(),
+    geometry: null,
+    properties: { ...properties, rank: (index + 1) * 10 },
+  }))
+  const finds = takeFinds(places, extent)
+  const measured = takeMeasured(truth, places, options)
+  const named = (index: number) => `${options.prefix}-${String(index + 1).padStart(3, '0')}`
   return {
-    truth,
     units,
-    contacts: lines.filter(isOf('contact')).flatMap((line) => writer.contacts(line)),
-    coverContacts: lines.filter(isOf('cover')).flatMap((line) => writer.contacts(line)),
-    faults: lines.filter(isOf('fault')).flatMap((line) => writer.faults(line)),
-    markerBeds: lines.filter(isOf('marker-bed')).map((line) => writer.markerBed(line)),
-    traces: makeTraces(truth).map((trace) => writer.trace(trace)),
-    attitudes: sortedByPlace(stations).map((station, index) => writer.attitude(station, index + 1)),
-    labels: labels.map((label) => writer.label(label, units)),
+    contacts: lines.filter(isOf('contact', 'unconformity')).flatMap((line) => lineItems.contacts(line)),
+    coverContacts: lines.filter(isOf('cover')).flatMap((line) => lineItems.contacts(line)),
+    faults: lines.filter(isOf('fault', 'thrust')).flatMap((line) => lineItems.faults(line)),
+    otherLines: [
+      ...lines.filter(isOf('marker-bed')).map((line) => lineItems.other(line, 'marker-bed')),
+      ...lines.filter(isOf('dike')).map((line) => lineItems.other(line, 'dike')),
+    ],
+    traces: traces.map((trace) => lineItems.trace(trace)),
+    attitudes: measured.planes.map(({ station, type }, index) =>
+      pointItems.attitude(station, type, named(index)),
+    ),
+    lineations: measured.lines.map(({ station, direction, onPlane }, index) =>
+      pointItems.lineation(station, direction, onPlane, named(measured.planes.length + index)),
+    ),
+    stations: finds.map(({ station, type, name, note }) => pointItems.find(station, type, name, note)),
+    labels: labels.map((label) => pointItems.label(label, units)),
+    survey: { bounds, places },
   }
 }
+
+/** All items of a sheet in one list. */
+export const itemsOf = (sheet: DemoSheet) => [
+  ...sheet.units,
+  ...sheet.contacts,
+  ...sheet.coverContacts,
+  ...sheet.faults,
+  ...sheet.otherLines,
+  ...sheet.traces,
+  ...sheet.attitudes,
+  ...sheet.lineations,
+  ...sheet.stations,
+  ...sheet.labels,
+]
 
 const isOf =
-  (kind: MapLine['kind']) =>
-  (line: MapLine): boolean =>
-    line.kind === kind
+  (...kinds: MapLine['subject']['kind'][]) =>
+  ({ subject }: MapLine): boolean =>
+    kinds.includes(subject.kind)
 
-/** As traverses go: in strips from west to east, each from south to north. */
-const sortedByPlace = (stations: readonly Station[]): Station[] =>
-  stations.toSorted((a, b) => Math.floor(a.at[0] / 2500) - Math.floor(b.at[0] / 2500) || a.at[1] - b.at[1])
+const boundsNothing = isOf('marker-bed', 'dike')
 
-const foldNames: Record<Trace['hinge']['form'], readonly string[]> = {
-  anticline: ['Puffin', 'Guillemot', 'Gannet', 'Tystie'],
-  syncline: ['Shearwater', 'Skua', 'Dunlin', 'Whimbrel'],
+interface Measurements {
+  planes: { station: Station; type: Measured }[]
+  lines: { station: Station; direction: NonNullable<ReturnType<typeof axisDirection>>; onPlane: boolean }[]
 }
 
-/** Turns places and figures of the truth into items of the sheet. */
-class ItemWriter {
-  private readonly foldNumbers = new Map<string, string>()
+/** Units with a cleavage or foliation of their own, and what share of their stations measured it. */
+const fabrics: Record<string, { type: Measured; share: number }> = {
+  Ot: { type: 'cleavage', share: 0.4 },
+  Dm: { type: 'cleavage', share: 0.25 },
+  Ms: { type: 'cleavage', share: 0.2 },
+  Zs: { type: 'foliation', share: 0.75 },
+}
+const JOINT_SHARE = 0.07
 
-  constructor(
-    private readonly options: SheetOptions,
-    private readonly random: Random,
-  ) {}
-
-  units(): ItemOf<'unit'>[] {
-    const described = [...coverUnits, ...layers].map(
-      ({ label, name, age, colour, pattern, description }) => ({
-        label,
-        name,
-        age,
-        colour,
-        pattern,
-        description,
-      }),
-    )
-    return described.map((properties, index) => ({
-      kind: 'unit',
-      id: this.id(),
-      geometry: null,
-      properties: { ...properties, rank: (index + 1) * 10 },
+/** Level and upright beds, which are rare, before all others; then whatever there is, in the order of traverses. */
+function takeMeasured(truth: Truth, places: FreePlaces, options: SheetOptions): Measurements {
+  const random = seededRandom(options.seed + 2)
+  const rare = Math.min(5, Math.floor(options.attitudes / 40))
+  const upright = places.take(
+    rare,
+    (station) => station.rock.series === 'upper' && dipAt(truth, station) > 89.5,
+  )
+  const overturned = places.take(rare * 3, (station) => beddingNormal(truth, station)[2] < 0)
+  const level = places.take(
+    rare,
+    (station) => station.rock.series === 'younger' && dipAt(truth, station) < 0.5,
+  )
+  const lines = places
+    .take(Math.floor(options.attitudes / 14), ({ rock }) => rock.series !== 'younger')
+    .flatMap((station) => {
+      const direction = axisDirection(truth, station)
+      return direction ? [{ station, direction, onPlane: random() < 0.5 }] : []
+    })
+  const others = places
+    .take(options.attitudes - upright.length - overturned.length - level.length)
+    .map((station) => ({
+      station,
+      type: typeOf(station, random()),
     }))
-  }
+  const bedding = [...upright, ...overturned, ...level].map((station) => ({
+    station,
+    type: 'bedding' as const,
+  }))
+  return { planes: inTraverses([...bedding, ...others]), lines }
+}
 
-  /** Some contacts are located less well along a part of them. */
-  contacts({ line, concealed, kind }: MapLine): ItemOf<'contact'>[] {
-    const chance = this.random()
-    const isLong = lengthOf(line) > 2200
-    const stretches =
-      concealed || !isLong || chance > 0.45 || kind === 'cover'
-        ? [{ line, locationConfidence: this.confidenceOf(concealed, kind === 'cover' && chance < 0.5) }]
-        : withStretch(line, [0.3 + chance / 4, 0.55 + chance / 2], chance < 0.28 ? 'approximate' : 'inferred')
-    return stretches.map((stretch) => ({
-      kind: 'contact',
-      id: this.id(),
-      geometry: this.lineGeometry(stretch.line),
-      properties: this.lineProperties(stretch.locationConfidence),
-    }))
-  }
+function typeOf({ rock }: Station, chance: number): Measured {
+  const fabric = fabrics[rock.layer.label]
+  if (fabric) return chance < fabric.share ? fabric.type : 'bedding'
+  return chance < JOINT_SHARE && rock.series !== 'younger' ? 'joint' : 'bedding'
+}
 
-  /** Drawn from south to north, so that the down-thrown block lies on the right. */
-  faults({ line, concealed }: MapLine): ItemOf<'fault'>[] {
-    const northward = (line[0]?.[1] ?? 0) > (line.at(-1)?.[1] ?? 0) ? line.toReversed() : line
-    const stretches =
-      concealed || lengthOf(line) < 5000
-        ? [{ line: northward, locationConfidence: this.confidenceOf(concealed, false) }]
-        : withStretch(northward, [0.3, 0.52], 'approximate')
-    return stretches.map((stretch) => ({
-      kind: 'fault',
-      id: this.id(),
-      geometry: this.lineGeometry(stretch.line),
-      properties: {
-        ...this.lineProperties(stretch.locationConfidence),
-        name: 'Cormorant fault',
-        type: 'normal',
-        side: 'right',
-        dip: null,
-      },
-    }))
-  }
+/** As traverses go: in strips from west to east, each from south to north. */
+const inTraverses = <T extends { station: Station }>(members: readonly T[]): T[] =>
+  members.toSorted(
+    ({ station: { at: a } }, { station: { at: b } }) =>
+      Math.floor(a[0] / 2500) - Math.floor(b[0] / 2500) || a[1] - b[1],
+  )
 
-  markerBed({ line }: MapLine): ItemOf<'other-line'> {
-    return {
-      kind: 'other-line',
-      id: this.id(),
-      geometry: this.lineGeometry(line),
-      properties: { ...this.lineProperties('certain'), name: markerBed.name, type: 'marker-bed' },
-    }
-  }
+/** What is found on the island, and in which units. */
+const finds: readonly {
+  type: StationType
+  in: readonly string[]
+  per100Km2: number
+  name: string
+  note: string
+}[] = [
+  { type: 'sample', in: ['Ov', 'Oe', 'Sr', 'Df', 'Zs'], per100Km2: 7, name: 'S', note: 'thin section' },
+  {
+    type: 'fossil-locality',
+    in: ['Sd', 'Dl', 'Jm', 'Kl'],
+    per100Km2: 4,
+    name: 'F',
+    note: 'corals and shells',
+  },
+  { type: 'quarry', in: ['Dl', 'Op', 'Df'], per100Km2: 3, name: 'Q', note: 'disused' },
+  { type: 'spring', in: ['Jm', 'Trt', 'Dm', 'Sc'], per100Km2: 4, name: 'W', note: '' },
+  { type: 'borehole', in: ['Js', 'Sr', 'Oe'], per100Km2: 2, name: 'B', note: 'water, 60 m' },
+  { type: 'mine-adit', in: ['Ms', 'Sc', 'Ov'], per100Km2: 1, name: 'A', note: 'abandoned, blocked' },
+  { type: 'tops-direction', in: ['Df', 'Oe', 'Op'], per100Km2: 5, name: '', note: 'graded beds' },
+]
 
-  trace({ hinge, line, concealed, axis }: Trace): ItemOf<'axial-trace'> {
-    const middle = this.toSheet(line[Math.floor(line.length / 2)] ?? [0, 0])
-    return {
-      kind: 'axial-trace',
-      id: this.id(),
-      geometry: this.lineGeometry(line),
-      properties: {
-        ...this.lineProperties(this.confidenceOf(concealed, false)),
-        name: this.foldName(hinge),
-        form: hinge.form,
-        side: 'right',
-        plunge: axis && Math.round(axis.plunge),
-        trend: axis && normalizeAzimuth(Math.round(axis.gridTrend + this.options.convergenceAt(middle))),
-        doubly: 'no',
-        otherPlunge: null,
-      },
-    }
-  }
-
-  attitude(station: Station, number: number): ItemOf<'attitude'> {
-    const at = this.toSheet(station.at)
-    const plane = {
-      strike: normalizeAzimuth(Math.round(station.gridStrike + this.options.convergenceAt(at))),
-      dip: Math.round(station.dip),
-      overturned: station.overturned,
-    }
-    return {
-      kind: 'attitude',
-      id: this.id(),
-      geometry: { type: 'Point', coordinates: at },
-      properties: {
-        type: 'bedding',
-        ...plane,
-        station: `${this.options.stationPrefix}-${String(number).padStart(3, '0')}`,
-        reading: {
-          text: formatAttitude(plane, 'strike-dip'),
-          convention: 'strike-dip',
-          northReference: 'true',
-          declination: null,
-        },
-        note: '',
-      },
-    }
-  }
-
-  label({ at, unit }: Label, units: readonly ItemOf<'unit'>[]): ItemOf<'unit-label'> {
-    const cover = coverUnits.findIndex((described) => described.cover === unit)
-    const item = units[typeof unit === 'number' ? coverUnits.length + unit : cover]
-    if (!item) throw new RangeError(`There is no unit ${unit}.`)
-    return {
-      kind: 'unit-label',
-      id: this.id(),
-      geometry: { type: 'Point', coordinates: this.toSheet(at) },
-      properties: { unit: item.id, identity: 'certain', note: '' },
-    }
-  }
-
-  /** Folds are named in the order in which they are met, from west to east; both blocks know a fold by one name. */
-  private foldName({ form, across }: Trace['hinge']): string {
-    const key = `${form} ${across}`
-    const taken = [...this.foldNumbers.keys()].filter((other) => other.startsWith(form)).length
-    const name = this.foldNumbers.get(key) ?? `${foldNames[form][taken] ?? 'Outer'} ${form}`
-    this.foldNumbers.set(key, name)
-    return name
-  }
-
-  private confidenceOf(concealed: boolean, vague: boolean): LocationConfidence {
-    if (concealed) return 'concealed'
-    return vague ? 'approximate' : 'certain'
-  }
-
-  private lineProperties(locationConfidence: LocationConfidence) {
-    return { locationConfidence, identity: 'certain' as const, name: '', note: '' }
-  }
-
-  private lineGeometry(line: Line) {
-    return { type: 'LineString' as const, coordinates: line.map((place) => this.toSheet(place)) }
-  }
-
-  private toSheet([x, y]: XY): XY {
-    return snapToGrid([this.options.origin[0] + x, this.options.origin[1] + y])
-  }
-
-  private id(): string {
-    return randomId(this.random)
-  }
+function takeFinds(places: FreePlaces, { width, height }: Extent) {
+  const area = (width * height) / 1e8
+  return finds.flatMap(({ type, in: labels, per100Km2, name, note }) =>
+    places
+      .take(Math.round(per100Km2 * area), ({ rock }) => labels.includes(rock.layer.label))
+      .map((station, index) => ({ station, type, name: name && `${name}${index + 1}`, note })),
+  )
 }

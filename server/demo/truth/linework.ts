@@ -1,153 +1,174 @@
-import type { LocationConfidence } from '@shared/items/confidence'
 import type { Metres, XY } from '@shared/units'
-import { levelLines, sample, type Line } from './contours'
-import { cutLine, isClosed, thin, withNodes } from './cut-lines'
-import type { Block } from './field'
-import type { Truth } from './truth'
-import { contactHeights, markerBed } from './units'
+import { levelLines, type Line } from './contours'
+import type { CoverKind } from './cover'
+import { cutLine, isClosed, lengthOf, thin, withNodes } from './cut-lines'
+import type { Dike, Series, Side } from './island'
+import { reachesEdge, sampleField } from './lattice'
+import { atLevel, keptParts, sides, SHORTEST_RING, type Condition, type MapBounds } from './map-bounds'
+import { foldedLayers, levelsOf, markerBeds, youngerLayers } from './units'
 import type { Surface } from './vectors'
 
-/** A line of the demo map, metres from the sheet's south-west corner. */
+/** What a line of the map is. */
+export type LineSubject =
+  | { kind: 'contact'; level: Metres; series: Series; side: Side }
+  | { kind: 'unconformity' | 'thrust'; side: Side }
+  | { kind: 'fault' }
+  | { kind: 'cover'; cover: CoverKind }
+  | { kind: 'marker-bed'; name: string; level: Metres; series: Series; side: Side }
+  | { kind: 'dike'; name: string }
+
+/** A line of the map, metres from the island's origin. */
 export interface MapLine {
-  kind: 'contact' | 'fault' | 'cover' | 'marker-bed'
+  subject: LineSubject
   line: Line
   /** Whether it lies beneath younger cover. */
   concealed: boolean
-  /** Stratigraphic height of a contact or marker bed. */
-  height?: Metres
-  block?: Block
-}
-
-export interface Linework {
-  lines: MapLine[]
-  /** Closed contacts too small for the map, left out: what stands inside is shown as what surrounds them. */
-  leftOut: Line[]
 }
 
 /** How far a drawn line may depart from the true one: a twentieth of a pen's width at 1:24 000. */
 const TOLERANCE: Metres = 0.6
 const LONGEST_PIECE: Metres = 150
-/** Closed contacts shorter than this, some 10 mm on the map, are left out. */
-const SHORTEST_RING: Metres = 260
 /** Concealed pieces bound nothing; shorter than two dots they only smudge. */
 const SHORTEST_CONCEALED: Metres = 60
 
-/** All linework of the known ground. Lines that meet share a vertex. */
-export function makeLinework(truth: Truth): Linework {
-  const faultNodes: XY[] = []
-  const coverNodes: XY[][] = truth.cover.map(() => [])
-  const found = (['west', 'east'] as const).flatMap((block) =>
-    contactsOf(truth, block, faultNodes, coverNodes),
-  )
+/** All linework of an extent, and the small closed contacts that were left out. Lines that meet share a vertex: what ends
+ *  at others comes before them, so that they know where. */
+export function makeLinework(bounds: MapBounds): { lines: MapLine[]; leftOut: Line[] } {
+  const rock = [
+    ...sides.flatMap((side) => foldedLines(bounds, side, 'lower')),
+    ...sides.flatMap((side) => foldedLines(bounds, side, 'upper')),
+    ...sides.flatMap((side) => youngerLines(bounds, side)),
+    ...sides.flatMap((side) => thrustLines(bounds, side)),
+    ...sides.flatMap((side) => unconformityLines(bounds, side)),
+  ]
   const isSmall = ({ line }: MapLine) => isClosed(line) && lengthOf(line) < SHORTEST_RING
-  const fault = faultLines(truth, faultNodes, coverNodes)
-  const cover = truth.cover.flatMap((patch, index) =>
-    levelLines(sample(patch.surface, truth.extent), 0).map((line): MapLine => {
-      const nodes = coverNodes[index] ?? []
-      return {
-        kind: 'cover',
-        line: thin(withNodes(line, nodes), nodes, TOLERANCE, LONGEST_PIECE),
-        concealed: false,
-      }
-    }),
-  )
   return {
-    lines: [...found.filter((line) => !isSmall(line)), ...fault, ...cover],
-    leftOut: found.filter(isSmall).map(({ line }) => line),
+    leftOut: [...bounds.leftOut, ...rock.filter(isSmall).map(({ line }) => line)],
+    lines: [
+      ...rock.filter((line) => !isSmall(line)),
+      ...bounds.truth.island.dikes.flatMap((dike) => dikeLines(bounds, dike)),
+      ...faultLines(bounds),
+      ...coverOutlines(bounds),
+    ],
   }
 }
 
-/** Contacts and marker bed of one block, cut at the fault and where cover hides them. */
-function contactsOf(truth: Truth, block: Block, faultNodes: XY[], coverNodes: XY[][]): MapLine[] {
-  const sampled = sample(truth.onGround.height(block), truth.extent)
-  return [...contactHeights, markerBed.height].flatMap((height) => {
-    const isMarker = height === markerBed.height
-    const own = levelOf(sampled.surface, height)
-    return levelLines(sampled, height).flatMap((line) => {
-      const { pieces, nodes } = cutLine(line, own, truth.onGround.fault)
-      // A marker bed bounds nothing: nothing need meet it.
-      if (!isMarker) faultNodes.push(...nodes)
-      return pieces
-        .filter((piece) => piece.positive === (block === 'east'))
-        .flatMap((piece) => cutAtCover(truth, piece.line, own, isMarker ? undefined : coverNodes))
-        .filter((piece) => !piece.concealed || (!isMarker && lengthOf(piece.line) > SHORTEST_CONCEALED))
-        .map(({ line: piece, concealed }): MapLine => {
-          const drawn = thin(piece, [], TOLERANCE, LONGEST_PIECE)
-          return { kind: isMarker ? 'marker-bed' : 'contact', line: drawn, concealed, height, block }
-        })
-    })
-  })
+/** A line before it is cut: where it is, what ends at it, and whether others must meet it. */
+interface Uncut {
+  lines: readonly Line[]
+  own: Surface
+  conditions: readonly Condition[]
+  /** Places of other lines that end here. */
+  nodes: readonly XY[]
+  bounds: boolean
 }
 
-function faultLines(truth: Truth, nodes: XY[], coverNodes: XY[][]): MapLine[] {
-  const { fault } = truth.onGround
-  return levelLines(sample(fault, truth.extent), 0).flatMap((line) =>
-    cutAtCover(truth, withNodes(line, nodes), fault, coverNodes).map(
-      ({ line: piece, concealed }): MapLine => ({
-        kind: 'fault',
-        line: thin(piece, nodes, TOLERANCE, LONGEST_PIECE),
-        concealed,
-      }),
+/** Those parts of a rock's lines that meet the conditions, with the nodes of what ends at them, cut where cover begins. */
+function drawn(at: MapBounds, subject: LineSubject, uncut: Uncut): MapLine[] {
+  const { lines, own, conditions, nodes, bounds } = uncut
+  return lines
+    .flatMap((line) => keptParts(line, own, conditions, bounds))
+    .flatMap((line) => at.cutAtCover(withNodes(line, nodes), own, bounds))
+    .filter(({ line, concealed }) => {
+      if (!concealed) return true
+      const isLong = lengthOf(line) > SHORTEST_CONCEALED
+      return bounds && (isLong || reachesEdge(at.lattice.extent, line))
+    })
+    .map(({ line, concealed }) => ({
+      subject,
+      line: thin(line, nodes, TOLERANCE, LONGEST_PIECE),
+      concealed,
+    }))
+}
+
+/** Contacts and marker beds of a folded series. A marker bed bounds nothing: nothing need meet it. */
+function foldedLines(at: MapBounds, side: Side, series: 'lower' | 'upper'): MapLine[] {
+  const conditions = at.conditionsOf(series, side)
+  const sampled = at.sampleWhere(at.truth.island.height(series, side), conditions)
+  const onLevel = (level: Metres, bounds: boolean): Uncut => ({
+    lines: levelLines(sampled, level),
+    own: atLevel(sampled, level),
+    conditions,
+    nodes: [],
+    bounds,
+  })
+  return [
+    ...levelsOf(foldedLayers).flatMap((level) =>
+      drawn(at, { kind: 'contact', level, series, side }, onLevel(level, true)),
+    ),
+    ...markerBeds.flatMap(({ name, height }) =>
+      drawn(at, { kind: 'marker-bed', name, level: height, series, side }, onLevel(height, false)),
+    ),
+  ]
+}
+
+function youngerLines(at: MapBounds, side: Side): MapLine[] {
+  const series = 'younger'
+  const conditions = at.conditionsOf(series, side)
+  const sampled = at.sampleWhere(at.truth.island.height(series, side), conditions)
+  return levelsOf(youngerLayers).flatMap((level) =>
+    drawn(
+      at,
+      { kind: 'contact', level, series, side },
+      {
+        lines: levelLines(sampled, level),
+        own: atLevel(sampled, level),
+        conditions,
+        nodes: [],
+        bounds: true,
+      },
     ),
   )
 }
 
-/** A line cut at the edges of cover; the places of the cuts are added to each patch's nodes, if given. */
-export function cutAtCover(
-  truth: Truth,
-  line: Line,
-  own: Surface,
-  coverNodes?: XY[][],
-): { line: Line; concealed: boolean }[] {
-  return truth.cover.reduce<{ line: Line; concealed: boolean }[]>(
-    (pieces, patch, index) =>
-      pieces.flatMap((piece) => {
-        if (piece.concealed) return [piece]
-        const cut = cutLine(piece.line, own, patch.surface)
-        coverNodes?.[index]?.push(...cut.nodes)
-        return cut.pieces.map(({ line: part, positive }) => ({ line: part, concealed: positive }))
-      }),
-    [{ line, concealed: false }],
+function thrustLines(at: MapBounds, side: Side): MapLine[] {
+  const { sampled, nodes } = at.thrusts[side]
+  const [onSide, beneathYounger] = at.conditionsOf('upper', side)
+  const conditions = onSide && beneathYounger ? [onSide, beneathYounger] : []
+  const uncut = { lines: levelLines(sampled, 0), own: sampled.surface, conditions, nodes, bounds: true }
+  return drawn(at, { kind: 'thrust', side }, uncut)
+}
+
+function unconformityLines(at: MapBounds, side: Side): MapLine[] {
+  const { sampled, nodes } = at.bases[side]
+  const conditions = at.conditionsOf('younger', side).slice(0, 1)
+  const uncut = { lines: levelLines(sampled, 0), own: sampled.surface, conditions, nodes, bounds: true }
+  return drawn(at, { kind: 'unconformity', side }, uncut)
+}
+
+function faultLines(at: MapBounds): MapLine[] {
+  const { sampled, nodes } = at.fault
+  const uncut = { lines: levelLines(sampled, 0), own: sampled.surface, conditions: [], nodes, bounds: true }
+  return drawn(at, { kind: 'fault' }, uncut)
+}
+
+/** A dike bounds nothing either. */
+function dikeLines(at: MapBounds, { name, surface, extent }: Dike): MapLine[] {
+  const sampled = sampleField(surface, at.truth.ground, at.lattice)
+  const lines = levelLines(sampled, 0).flatMap((line) =>
+    cutLine(line, sampled.surface, extent)
+      .pieces.filter(({ positive }) => positive)
+      .map((piece) => piece.line),
+  )
+  return drawn(
+    at,
+    { kind: 'dike', name },
+    { lines, own: sampled.surface, conditions: [], nodes: [], bounds: false },
   )
 }
 
-export const levelOf =
-  (surface: Surface, level: number): Surface =>
-  (xy) =>
-    surface(xy) - level
-
-export function lengthOf(line: Line): Metres {
-  return line
-    .slice(1)
-    .reduce(
-      (sum, [x, y], index) => sum + Math.hypot(x - (line[index]?.[0] ?? x), y - (line[index]?.[1] ?? y)),
-      0,
-    )
-}
-
-/** A stretch of a line that is located less well than the rest. */
-export interface Stretch {
-  line: Line
-  locationConfidence: LocationConfidence
-}
-
-/** Cuts a line at the vertices nearest to two fractions of its length; what lies between gets another confidence. */
-export function withStretch(
-  line: Line,
-  [from, to]: readonly [number, number],
-  locationConfidence: LocationConfidence,
-): Stretch[] {
-  const length = lengthOf(line)
-  const [start, end] = [vertexAt(line, from * length), vertexAt(line, to * length)]
-  if (start < 1 || end <= start || end > line.length - 2) return [{ line, locationConfidence: 'certain' }]
-  return [
-    { line: line.slice(0, start + 1), locationConfidence: 'certain' },
-    { line: line.slice(start, end + 1), locationConfidence },
-    { line: line.slice(end), locationConfidence: 'certain' },
-  ]
-}
-
-/** Index of the first vertex at or beyond a length along the line. */
-function vertexAt(line: Line, along: Metres): number {
-  return line.findIndex((_, index) => lengthOf(line.slice(0, index + 1)) >= along)
+/** Outlines of cover, each where no other cover lies on it; the lowest first, which ends at those above. */
+function coverOutlines({ cover }: MapBounds): MapLine[] {
+  return cover.toReversed().flatMap(({ kind, bound: { sampled, nodes } }, index) => {
+    const above = cover.slice(0, cover.length - 1 - index)
+    const conditions = above.map(({ bound }): Condition => ({ bound, sign: -1 }))
+    return levelLines(sampled, 0)
+      .filter((line) => !isClosed(line) || lengthOf(line) >= SHORTEST_RING)
+      .flatMap((line) => keptParts(line, sampled.surface, conditions, true))
+      .map((line) => ({
+        subject: { kind: 'cover' as const, cover: kind },
+        line: thin(withNodes(line, nodes), nodes, TOLERANCE, LONGEST_PIECE),
+        concealed: false,
+      }))
+  })
 }

@@ -1,59 +1,120 @@
-import type { Degrees, Metres, XY } from '@shared/units'
-import { contactHeights, markerBed } from './units'
-import { planeOfGradient, type Block } from './field'
+import { toDegrees, type Degrees, type Metres, type XY } from '@shared/units'
+import type { Vector3 } from './fold-belt'
+import { planeOfGradient } from './planes'
 import type { Random } from './random'
-import type { Truth } from './truth'
-import { slope } from './vectors'
+import { shuffled } from './random'
+import type { Raster } from './raster'
+import { rockAt, type Rock, type Truth } from './truth'
 
-/** A place where the layers were measured, with what the field says there. */
+/** A place where something was measured or found, with the rock there. */
 export interface Station {
   at: XY
-  block: Block
-  gridStrike: Degrees
-  dip: Degrees
-  overturned: boolean
+  rock: Rock
 }
 
-export interface Spacing {
-  wanted: number
-  apart: Metres
-  /** Places to keep away from, for example unit labels. */
-  clearOf: readonly XY[]
-  clear: Metres
-}
+/** What is measured at a station. */
+export type Measured = 'bedding' | 'foliation' | 'cleavage' | 'joint'
 
-/** Places scattered over the folded rock, clear of contacts, fault, hinges, cover and one another. */
-export function makeStations(truth: Truth, random: Random, spacing: Spacing): Station[] {
-  const { width, height } = truth.extent
-  const stations: Station[] = []
-  for (let round = 0; round < spacing.wanted * 200 && stations.length < spacing.wanted; round++) {
-    const at: XY = [150 + random() * (width - 300), 150 + random() * (height - 300)]
-    if (stations.some((other) => distance(other.at, at) < spacing.apart)) continue
-    if (spacing.clearOf.some((other) => distance(other, at) < spacing.clear)) continue
-    if (!isClear(truth, at)) continue
-    stations.push(stationAt(truth, at))
+/** Free places of a sheet: rock at the surface, clear of all lines. One place is given away once. */
+export class FreePlaces {
+  private readonly cells: readonly number[]
+  private readonly taken = new Map<string, XY[]>()
+
+  /** @param near cells beside lines or labels   @param clear distance from the edges of areas */
+  constructor(
+    private readonly truth: Truth,
+    private readonly raster: Raster,
+    near: Uint8Array,
+    clear: Metres,
+    random: Random,
+    private readonly apart: Metres,
+  ) {
+    const { codes, depths, areas, cell } = raster
+    const free: number[] = []
+    for (let index = 0; index < codes.length; index++) {
+      const isRock = areas[codes[index] ?? 0]?.isCover === false
+      if (isRock && near[index] === 0 && (depths[index] ?? 0) * cell >= clear) free.push(index)
+    }
+    this.cells = shuffled(free, random)
   }
-  return stations
+
+  /** Up to `wanted` places that pass, apart from one another and from all given away before.
+   *  @param apart the usual distance, or less */
+  take(
+    wanted: number,
+    passes: (station: Station) => boolean = () => true,
+    apart: Metres = this.apart,
+  ): Station[] {
+    const found: Station[] = []
+    for (const cell of this.cells) {
+      if (found.length >= wanted) break
+      const at = this.raster.centreOf(cell)
+      if (this.isCrowded(at, apart)) continue
+      const station = { at, rock: rockAt(this.truth, at) }
+      if (!passes(station)) continue
+      found.push(station)
+      this.occupy(at)
+    }
+    return found
+  }
+
+  /** Keeps others away from a place. */
+  occupy(at: XY): void {
+    const key = this.keyOf(at, 0, 0)
+    this.taken.set(key, [...(this.taken.get(key) ?? []), at])
+  }
+
+  private isCrowded(at: XY, apart: Metres): boolean {
+    for (const right of [-1, 0, 1]) {
+      for (const up of [-1, 0, 1]) {
+        const others = this.taken.get(this.keyOf(at, right, up)) ?? []
+        if (others.some(([x, y]) => Math.hypot(x - at[0], y - at[1]) < apart)) return true
+      }
+    }
+    return false
+  }
+
+  private keyOf([x, y]: XY, right: number, up: number): string {
+    return `${Math.floor(x / this.apart) + right} ${Math.floor(y / this.apart) + up}`
+  }
 }
 
-const distance = (a: XY, b: XY): Metres => Math.hypot(a[0] - b[0], a[1] - b[1])
+/** Gradient of the layers at a station: the upward or downward normal of the bedding, toward the younger side. */
+export const beddingNormal = ({ ground }: Truth, { at, rock }: Station): Vector3 =>
+  rock.field.gradient(at, ground(at))
 
-/** What the field says at a place. */
-export function stationAt(truth: Truth, at: XY): Station {
-  const block = truth.onGround.blockAt(at)
-  return { at, block, ...planeOfGradient(truth.field.gradient(at, truth.ground(at), block)) }
+/** Normal of what is measured, and whether it has a younger side. Cleavage follows the axial surfaces, foliation the
+ *  layers; joints stand across the fold axis. */
+export function normalOf(truth: Truth, station: Station, measured: Measured): Vector3 {
+  const { at, rock } = station
+  const bedding = beddingNormal(truth, station)
+  if (measured === 'bedding' || measured === 'foliation' || rock.series === 'younger') return bedding
+  const across = truth.island.belt(rock.series, rock.side).across.gradient(at, truth.ground(at))
+  return measured === 'cleavage' ? across : crossProduct(bedding, across)
 }
 
-/** Room for a symbol: 100 m are 4 mm at 1:24 000. */
-function isClear(truth: Truth, at: XY): boolean {
-  const block = truth.onGround.blockAt(at)
-  const height = truth.onGround.height(block)
-  const steepness = Math.hypot(...slope(height, at))
-  const near = [...contactHeights, markerBed.height].some(
-    (level) => Math.abs(height(at) - level) < 90 * steepness,
-  )
-  const [across, hinges] = [truth.onGround.across(block)(at), truth.field.hinges]
-  const onHinge = hinges.some((hinge) => Math.abs(across - hinge.across) < 110)
-  const covered = truth.cover.some(({ surface, unit }) => surface(at) > (unit === 'peat' ? -0.25 : -90))
-  return !near && !onHinge && !covered && Math.abs(truth.onGround.fault(at)) > 150
+/** Direction of the fold axis at a station: in the layer and in the axial surface; undefined in the younger beds. */
+export function axisDirection(truth: Truth, { at, rock }: Station): Vector3 | undefined {
+  if (rock.series === 'younger') return undefined
+  const z = truth.ground(at)
+  const belt = truth.island.belt(rock.series, rock.side)
+  return crossProduct(belt.height.gradient(at, z), belt.across.gradient(at, z))
 }
+
+const crossProduct = ([a, b, c]: Vector3, [p, q, r]: Vector3): Vector3 => [
+  b * r - c * q,
+  c * p - a * r,
+  a * q - b * p,
+]
+
+/** A direction as trend from grid north of its down-going end, and plunge, degrees. */
+export function lineOf([east, north, up]: Vector3): { gridTrend: Degrees; plunge: Degrees } {
+  const down = up > 0 ? -1 : 1
+  return {
+    gridTrend: toDegrees(Math.atan2(east * down, north * down)),
+    plunge: toDegrees(Math.atan2(Math.abs(up), Math.hypot(east, north))),
+  }
+}
+
+export const dipAt = (truth: Truth, station: Station): Degrees =>
+  planeOfGradient(beddingNormal(truth, station)).dip

@@ -1,51 +1,66 @@
 import type { Metres, XY } from '@shared/units'
-import type { Surface } from './vectors'
+import { wave } from './curves'
+import type { FoldAxes } from './fold-belt'
 
-/** A valley floor: its middle line as north over east, both from the sheet's south-west corner, and where it has a head. */
-export interface Valley {
-  north(east: Metres): Metres
-  /** East of its head; the valley lies on the side that `side` names. */
-  head: Metres
-  side: 'west' | 'east'
+/** What the land looks like at a place. */
+export interface Land {
+  /** Height above sea, metres; negative beneath the sea. */
+  ground(xy: XY): Metres
+  /** Distance inland from the general line of the coast, metres; negative offshore. */
+  inland(xy: XY): Metres
+  /** Place across the great valleys: 0 on a valley's middle line, 1 on the divide. */
+  fromValley(xy: XY): number
+  /** Distance along the coast, by which one valley differs from another, metres. */
+  alongCoast(xy: XY): Metres
 }
 
-const wave = (at: number, length: number, phase = 0): number => Math.sin((2 * Math.PI * at) / length + phase)
+/** Between the middle lines of two great valleys. */
+const VALLEY_SPACING: Metres = 2750
+/** Between the streams that follow the strike. */
+const STREAM_SPACING: Metres = 1330
 
-export const valleys: readonly Valley[] = [
-  {
-    north: (east) => 2500 + 850 * wave(east, 9000, 0.4) + 150 * wave(east, 2100),
-    head: 7300,
-    side: 'west',
-  },
-  {
-    north: (east) => 8150 - 420 * wave(east, 8000, 2.4) - 130 * wave(east, 1900, 1),
-    head: 3000,
-    side: 'east',
-  },
-]
+const GULLY_SPACING: Metres = 760
 
-/** Distance from a valley's middle line, metres; good to a few per cent near it. */
-export function fromValley({ north }: Valley, [east, northing]: XY): Metres {
-  const fall = (north(east + 1) - north(east - 1)) / 2
-  return (northing - north(east)) / Math.hypot(1, fall)
-}
+/** A valley's cross-section from |sin|: V-shaped, its floor rounded over `floor`. */
+const notch = (sine: number, floor: number): number => Math.sqrt(sine * sine + floor * floor) - floor
 
-/** How far a place lies beyond a valley's head, metres; negative inside the valley. */
-export const beyondHead = ({ head, side }: Valley, [east]: XY): Metres =>
-  side === 'west' ? east - head : head - east
-
-/** Ground height above sea level, metres, of a place given from the sheet's south-west corner. */
-export function terrain(): Surface {
-  return (xy) => {
-    const [x, y] = xy
-    const hills =
-      54 * wave(x + 0.3 * y, 2900, 0.5) * Math.cos((2 * Math.PI * (y - 0.2 * x)) / 3700) +
-      24 * wave(x + y, 1500, 1) * wave(x - 0.6 * y, 1900) +
-      6 * wave(x, 690, 2) * wave(y, 810)
-    const cut = valleys.reduce((sum, valley) => {
-      const along = 1 / (1 + Math.exp(beyondHead(valley, xy) / 350))
-      return sum + 55 * along * Math.exp(-((fromValley(valley, xy) / 420) ** 2))
-    }, 0)
-    return 235 + hills - cut
+/** An island whose great valleys cross the folds on their way to a drowned coast in the north-west, and whose streams
+ *  follow the strike between them. */
+export function land(axes: FoldAxes): Land {
+  const inland: Land['inland'] = ([x, y]) =>
+    0.75 * x - 0.66 * y + 6000 + 520 * wave(0.66 * x + 0.75 * y, 6100, 0.4) + 170 * wave(y - x, 2300, 1)
+  const valleyPhase = (along: Metres, across: Metres): number =>
+    Math.sin(
+      (Math.PI *
+        (along + 380 * wave(across, 7300, 0.9) + 170 * wave(across, 2900, 2.1) + 60 * wave(across, 1150))) /
+        VALLEY_SPACING +
+        0.55,
+    )
+  const streamPhase = (along: Metres, across: Metres): number =>
+    Math.sin(
+      (Math.PI * (across + 210 * wave(along, 3300, 0.3) + 80 * wave(along, 1270, 1.2))) / STREAM_SPACING +
+        1.1,
+    )
+  // Gullies run down the sides of the great valleys, aslant to the strike.
+  const gullyPhase = (along: Metres, across: Metres): number =>
+    Math.sin(
+      (Math.PI * (across + 0.45 * along + 120 * wave(along - across, 2100, 0.8) + 40 * wave(along, 810))) /
+        GULLY_SPACING,
+    )
+  return {
+    inland,
+    fromValley: (xy) => Math.abs(valleyPhase(...axes.toOwn(xy))),
+    alongCoast: (xy) => axes.toOwn(xy)[0],
+    ground(xy) {
+      const [along, across] = axes.toOwn(xy)
+      const from = inland(xy)
+      const floor = 210 * Math.tanh(from / 14_000) + 42 * Math.tanh((from - 500) / 550) - 26
+      const relief = 0.3 + 0.7 / (1 + Math.exp(-(from - 1200) / 1100))
+      const divide = notch(valleyPhase(along, across), 0.12)
+      const spur = notch(streamPhase(along, across), 0.1)
+      const gully = notch(gullyPhase(along, across), 0.2)
+      const swell = 60 * wave(xy[0] + 0.3 * xy[1], 5200, 0.5) * wave(xy[1] - 0.2 * xy[0], 6400, 1)
+      return floor + relief * divide * (165 + swell + spur * (120 + 75 * gully))
+    },
   }
 }

@@ -1,30 +1,73 @@
 import type { UnitProperties } from '@shared/items/legend'
 import type { Metres } from '@shared/units'
+import type { CoverKind } from './cover'
 
-/** A layer of the demo: its top in stratigraphic height, metres; the youngest has none. */
-export interface Layer extends Omit<UnitProperties, 'rank'> {
+type Described = Omit<UnitProperties, 'rank'>
+
+/** A layer of the island: its top in stratigraphic height, metres; the youngest of a series has none. */
+export interface Layer extends Described {
   top: Metres
 }
 
-/** Folded layers, youngest first. */
-export const layers: readonly Layer[] = [
+/** Nearly level beds on a worn surface of the folded ones, youngest first. Heights are above that surface. */
+export const youngerLayers: readonly Layer[] = [
   {
-    label: 'Ck',
-    name: 'Kittiwake Grit',
-    age: 'Carboniferous',
-    colour: '#e3d2b0',
-    pattern: 'conglomerate',
-    description: 'coarse pebbly sandstone, cross-bedded, in beds of one to three metres',
+    label: 'Kl',
+    name: 'Lintel Limestone',
+    age: 'Cretaceous',
+    colour: '#dfe6c8',
+    pattern: 'limestone',
+    description: 'white limestone with flints; top not seen, more than 120 m',
     top: Infinity,
   },
   {
-    label: 'Cs',
+    label: 'Js',
+    name: 'Sandglass Sandstone',
+    age: 'Jurassic',
+    colour: '#c5d8e0',
+    pattern: 'sandstone',
+    description: 'yellow sandstone, cross-bedded, friable; 55 m',
+    top: 150,
+  },
+  {
+    label: 'Jm',
+    name: 'Marram Marl',
+    age: 'Jurassic',
+    colour: '#a9c2d3',
+    pattern: 'marl',
+    description: 'blue-grey marl with oyster beds; 55 m',
+    top: 95,
+  },
+  {
+    label: 'Trt',
+    name: 'Tern Conglomerate',
+    age: 'Triassic',
+    colour: '#c3a9c4',
+    pattern: 'conglomerate',
+    description: 'red conglomerate, pebbles of quartzite and chert from below; 40 m',
+    top: 40,
+  },
+]
+
+/** Folded layers, youngest first. Thickness is that of the crests; limbs are thinner. */
+export const foldedLayers: readonly Layer[] = [
+  {
+    label: 'Mk',
+    name: 'Kittiwake Grit',
+    age: 'Mississippian',
+    colour: '#e3d2b0',
+    pattern: 'sandstone',
+    description: 'coarse pebbly sandstone, cross-bedded; top not seen',
+    top: Infinity,
+  },
+  {
+    label: 'Ms',
     name: 'Sealholm Beds',
-    age: 'Carboniferous',
-    colour: '#d5c39f',
-    pattern: 'none',
-    description: 'grey mudstone with thin sandstones and plant remains',
-    top: 1960,
+    age: 'Mississippian',
+    colour: '#cbbd9f',
+    pattern: 'shale',
+    description: 'grey mudstone with thin sandstones and plant remains; 350 to 650 m',
+    top: 2350,
   },
   {
     label: 'Df',
@@ -32,26 +75,35 @@ export const layers: readonly Layer[] = [
     age: 'Devonian',
     colour: '#cf9f8c',
     pattern: 'sandstone',
-    description: 'red sandstone, thick-bedded, with lenses of conglomerate',
-    top: 1330,
+    description: 'red sandstone, thick-bedded, with lenses of conglomerate; 300 to 620 m',
+    top: 1700,
   },
   {
     label: 'Dm',
     name: 'Mizzen Shale',
     age: 'Devonian',
-    colour: '#dcbba8',
+    colour: '#e2c3b0',
     pattern: 'shale',
-    description: 'dark fissile shale with thin beds of limestone',
-    top: 700,
+    description: 'dark fissile shale with thin beds of limestone; 260 to 520 m',
+    top: 1080,
   },
   {
-    label: 'Sp',
-    name: 'Spindrift Limestone',
-    age: 'Silurian',
-    colour: '#b7cdc9',
+    label: 'Dl',
+    name: 'Lantern Limestone',
+    age: 'Devonian',
+    colour: '#b98a72',
     pattern: 'limestone',
-    description: 'nodular limestone with corals, massive at the top',
-    top: 190,
+    description: 'black bedded limestone, a ridge-former; 70 to 140 m',
+    top: 560,
+  },
+  {
+    label: 'Sd',
+    name: 'Spindrift Dolomite',
+    age: 'Silurian',
+    colour: '#bcd2cd',
+    pattern: 'dolomite',
+    description: 'nodular dolomite with corals, massive at the top; 180 to 360 m',
+    top: 420,
   },
   {
     label: 'Sr',
@@ -59,17 +111,35 @@ export const layers: readonly Layer[] = [
     age: 'Silurian',
     colour: '#93b3a5',
     pattern: 'siltstone',
-    description: 'laminated calcareous siltstone',
-    top: -260,
+    description: 'laminated calcareous siltstone; 240 to 480 m',
+    top: 60,
+  },
+  {
+    label: 'Sc',
+    name: 'Scoter Chert',
+    age: 'Silurian',
+    colour: '#6f9d98',
+    pattern: 'chert',
+    description: 'ribbon chert, green and red; 60 to 120 m',
+    top: -420,
   },
   {
     label: 'Oe',
     name: 'Eider Formation',
     age: 'Ordovician',
-    colour: '#c6cd9d',
+    colour: '#d0d5a6',
     pattern: 'none',
-    description: 'sandstone and shale in turn, graded, with sole marks',
-    top: -760,
+    description: 'sandstone and shale in turn, graded, with sole marks; 300 to 610 m',
+    top: -540,
+  },
+  {
+    label: 'Ov',
+    name: 'Vane Tuff',
+    age: 'Ordovician',
+    colour: '#b9a6a9',
+    pattern: 'tuff',
+    description: 'pale welded tuff, quartz and feldspar crystals; 90 to 180 m',
+    top: -1150,
   },
   {
     label: 'Ot',
@@ -77,37 +147,46 @@ export const layers: readonly Layer[] = [
     age: 'Ordovician',
     colour: '#aab57f',
     pattern: 'slate',
-    description: 'cleaved slate, grey-green, with bands of tuff',
+    description: 'cleaved slate, grey-green; 310 to 620 m',
     top: -1330,
   },
   {
-    label: 'Cmp',
+    label: 'Op',
     name: 'Petrel Quartzite',
-    age: 'Cambrian',
+    age: 'Ordovician',
     colour: '#dcc08b',
     pattern: 'quartzite',
-    description: 'white quartzite, massive, ripple-marked near its base',
-    top: -1800,
+    description: 'white quartzite, massive, ripple-marked near its base; 200 to 400 m',
+    top: -1950,
   },
   {
     label: 'Zs',
     name: 'Stormcrest Group',
-    age: 'Precambrian',
-    colour: '#c9a57c',
-    pattern: 'none',
-    description: 'greywacke and conglomerate, much folded',
-    top: -2330,
+    age: 'Ediacaran',
+    colour: '#c59d78',
+    pattern: 'gneiss',
+    description: 'banded gneiss and greywacke; base not seen',
+    top: -2350,
   },
 ]
 
-/** Cover, younger than all folding, youngest first. */
-export const coverUnits: readonly ({ cover: 'alluvium' | 'peat' } & Omit<UnitProperties, 'rank'>)[] = [
+/** Cover, younger than all folding, in the order of the legend. */
+export const coverUnits: readonly (Described & { cover: CoverKind })[] = [
+  {
+    cover: 'sea',
+    label: 'w',
+    name: 'Sea',
+    age: 'Quaternary',
+    colour: '#dce9ee',
+    pattern: 'none',
+    description: 'at mean sea level',
+  },
   {
     cover: 'alluvium',
     label: 'Qa',
     name: 'Alluvium',
     age: 'Quaternary',
-    colour: '#f4ecd2',
+    colour: '#f7f0d4',
     pattern: 'alluvium',
     description: 'sand and gravel of the present valleys',
   },
@@ -116,19 +195,40 @@ export const coverUnits: readonly ({ cover: 'alluvium' | 'peat' } & Omit<UnitPro
     label: 'Qp',
     name: 'Blanket peat',
     age: 'Quaternary',
-    colour: '#e2dfc9',
+    colour: '#d5cfb4',
     pattern: 'peat',
     description: 'peat, one to four metres, on the high ground',
   },
+  {
+    cover: 'talus',
+    label: 'Qt',
+    name: 'Talus',
+    age: 'Quaternary',
+    colour: '#efe2cf',
+    pattern: 'talus',
+    description: 'angular blocks at the foot of steep slopes',
+  },
 ]
 
-/** Heights at which one layer gives way to the next, youngest first. */
-export const contactHeights: readonly Metres[] = layers.map((layer) => layer.top).filter(Number.isFinite)
+/** Legend of the island, in its order. */
+export const legendUnits: readonly Described[] = [
+  ...coverUnits.map(({ cover: _, ...described }) => described),
+  ...[...youngerLayers, ...foldedLayers].map(({ top: _, ...described }) => described),
+]
 
-/** Number of the layer at a stratigraphic height. A layer holds its top. */
-export function layerAt(height: Metres): number {
-  return layers.reduce((found, layer, index) => (height <= layer.top ? index : found), 0)
+/** Heights at which one layer of a series gives way to the next, youngest first. */
+export const levelsOf = (layers: readonly Layer[]): Metres[] =>
+  layers.map((layer) => layer.top).filter(Number.isFinite)
+
+/** The layer at a stratigraphic height. A layer holds its top. */
+export function layerAt(layers: readonly Layer[], height: Metres): Layer {
+  const layer = layers.findLast(({ top }) => height <= top)
+  if (!layer) throw new RangeError(`No layer holds the height ${height}.`)
+  return layer
 }
 
-/** Height of the marker bed within its layer. */
-export const markerBed = { name: 'Coral bed', height: -40 } as const
+/** Beds too thin to be areas, by their height. */
+export const markerBeds = [
+  { name: 'Coral bed', height: 180 },
+  { name: 'Sealholm seam', height: 2050 },
+] as const

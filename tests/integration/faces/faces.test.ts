@@ -3,11 +3,10 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import type { Face } from '@shared/api/faces'
 import type { ItemOf } from '@shared/items/item'
 import type { XY } from '@shared/units'
-import { gannetHeadOptions } from '../../../server/demo/gannet-head'
 import { loadDemo } from '../../../server/demo/load-demo'
-import { unitAt } from '../../../server/demo/truth/labels'
-import { makeTruth } from '../../../server/demo/truth/truth'
-import { coverUnits, layers } from '../../../server/demo/truth/units'
+import { fromIsland, gannetHead, merrowTruth } from '../../../server/demo/merrow-island'
+import { shownAt } from '../../../server/demo/truth/truth'
+import { coverUnits } from '../../../server/demo/truth/units'
 import { aSheet, signInAs, startTestServer, type Agent, type TestServer } from '../../support/server'
 
 let server: TestServer
@@ -280,18 +279,15 @@ describe('the demo sheet', () => {
   it('shows in each area the unit that the field has there', async () => {
     const { body } = await editor.get('/api/sheets/MI-14/items')
     const units: ItemOf<'unit'>[] = body.items.filter((item: { kind: string }) => item.kind === 'unit')
-    const { origin, width, height, trend, convergenceAt } = gannetHeadOptions
-    const gridTrend = trend - convergenceAt([origin[0] + width / 2, origin[1] + height / 2])
-    const truth = makeTruth({ width, height, gridTrend })
+    const { origin, width, height } = gannetHead.extent
     const samples: { label: string; x: number; y: number }[] = []
-    for (let x = 155; x < width; x += 310) {
-      for (let y = 165; y < height; y += 330) {
-        const found = unitAt(truth, [x, y])
-        const described =
-          typeof found === 'number'
-            ? layers[found]
-            : coverUnits.find((candidate) => candidate.cover === found)
-        samples.push({ label: described?.label ?? '', x: x + origin[0], y: y + origin[1] })
+    for (let x = origin[0] + 155; x < origin[0] + width; x += 310) {
+      for (let y = origin[1] + 165; y < origin[1] + height; y += 330) {
+        const shown = shownAt(merrowTruth, [x, y])
+        const label =
+          typeof shown === 'string' ? coverUnits.find(({ cover }) => cover === shown)?.label : shown.label
+        const [east, north] = fromIsland([x, y])
+        samples.push({ label: label ?? '', x: east, y: north })
       }
     }
     const rows: { label: string; unit: string }[] = await server.dataSource.query(
@@ -302,9 +298,10 @@ describe('the demo sheet', () => {
       [JSON.stringify(samples)],
     )
     const labels = new Map(units.map((item) => [item.id, item.properties.label]))
-    // A place within a metre of a line may fall on its other side: drawn lines depart that far from the true ones.
+    // A place within a metre of a line may fall on its other side: drawn lines depart that far from the true ones. Patches
+    // too small for the map are left out.
     const wrong = rows.filter((row) => labels.get(row.unit) !== row.label)
     expect(rows.length).toBeGreaterThan(1000)
-    expect(wrong.length).toBeLessThanOrEqual(2)
+    expect(wrong.length).toBeLessThanOrEqual(3)
   })
 })
