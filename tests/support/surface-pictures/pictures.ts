@@ -99,7 +99,7 @@ async function asPdf({ list, size, pxPerMm, ground = '#ffffff' }: PictureRequest
     // Of poppler's two renderers, this one leaves fine lines at their width; the other sets them on whole pixels.
     execFileSync('pdftocairo', [
       ...['-png', '-singlefile', '-r', String(pxPerMm * 25.4)],
-      ...['-scale-to-x', across ?? '', '-scale-to-y', down ?? ''],
+      ...['-x', '0', '-y', '0', '-W', across ?? '', '-H', down ?? ''],
       ...[join(folder, 'page.pdf'), join(folder, 'page')],
     ])
     return PNG.sync.read(await readFile(join(folder, 'page.png')))

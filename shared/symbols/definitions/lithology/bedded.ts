@@ -106,13 +106,13 @@ const bar = ([x, y]: MM, length: Millimetres): TileMark =>
 export const beddedPatterns: readonly LithologyPattern[] = [
   pattern('shale', 'Shale', () => ({
     width: 6,
-    height: 4,
-    marks: rows(4, 1, (y, row) => [dash([row * 3.3, y], 2.1), dash([row * 3.3 + 3, y], 2.1)]),
+    height: 5,
+    marks: rows(4, 1.25, (y, row) => [dash([row * 3.75, y], 2), dash([row * 3.75 + 3, y], 2)]),
   })),
   pattern('siltstone', 'Siltstone', () => ({
     width: 5,
-    height: 4.2,
-    marks: rows(3, 1.4, (y, row) => [
+    height: 4.5,
+    marks: rows(3, 1.5, (y, row) => [
       dash([row * 1.75, y], 1.9),
       dot([row * 1.75 + 2.75, y], 0.15),
       dot([row * 1.75 + 3.45, y], 0.15),
@@ -133,23 +133,23 @@ export const beddedPatterns: readonly LithologyPattern[] = [
     ],
   })),
   pattern('chert', 'Chert', () => ({
-    width: 7.2,
-    height: 5.2,
-    marks: rows(2, 2.6, (y, row) =>
-      [0, 3.6].flatMap((x) => [
-        triangle([row * 1.8 + x + 0.4, y - 0.35]),
-        dash([row * 1.8 + x + 2, y - 0.05], 1),
+    width: 7,
+    height: 5,
+    marks: rows(2, 2.5, (y, row) =>
+      [0, 3.5].flatMap((x) => [
+        triangle([row * 1.75 + x + 0.25, y - 0.25]),
+        dash([row * 1.75 + x + 1.75, y], 1),
       ]),
     ),
   })),
   pattern('evaporite', 'Evaporite', () => ({
-    width: 5.6,
-    height: 4.4,
-    marks: rows(2, 2.2, (y, row) => [cube([row * 1.4 + 0.8, y + 0.6]), cube([row * 1.4 + 3.6, y + 0.6])]),
+    width: 5.5,
+    height: 4.5,
+    marks: rows(2, 2.25, (y, row) => [cube([row * 1.5 + 0.75, y]), cube([row * 1.5 + 3.5, y])]),
   })),
   pattern('coal', 'Coal', () => ({
     width: 9,
-    height: 5.6,
-    marks: rows(2, 2.8, (y, row) => [bar([row * 4.5 + 0.3, y], 3.3), dash([row * 4.5 + 4.9, y], 2.9)]),
+    height: 5.5,
+    marks: rows(2, 2.75, (y, row) => [bar([row * 4.5 + 0.3, y], 3.3), dash([row * 4.5 + 4.9, y], 2.9)]),
   })),
 ]

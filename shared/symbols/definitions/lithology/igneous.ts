@@ -15,7 +15,7 @@ function tuff(): LithologyPattern {
 }
 
 function basalt(): LithologyPattern {
-  const [across, up] = [2.8, 2.2]
+  const [across, up] = [2.75, 2.25]
   return pattern('basalt', 'Basalt', () => ({
     width: 2 * across,
     height: 2 * up,

@@ -52,9 +52,9 @@ export const metamorphicPatterns: readonly LithologyPattern[] = [
   })),
   pattern('gneiss', 'Gneiss', () => ({
     width: 10,
-    height: 7.2,
+    height: 7,
     marks: [0, 1].flatMap((row) => {
-      const y = row * 3.6 + 0.8
+      const y = row * 3.5 + 0.75
       const x = row * 5
       return [
         swell([x, y], 10, 0.55),
@@ -66,11 +66,11 @@ export const metamorphicPatterns: readonly LithologyPattern[] = [
   })),
   pattern('slate', 'Slate', () => ({ width: 8, height: 8, marks: cleavage() })),
   pattern('quartzite', 'Quartzite', () => ({
-    width: 6.4,
-    height: 5.6,
+    width: 6.5,
+    height: 5.5,
     marks: [0, 1].flatMap((row) =>
       [0, 1].flatMap((column) => {
-        const [x, y] = [column * 3.2 + row * 1.6 + 0.6, row * 2.8 + 0.7]
+        const [x, y] = [column * 3.25 + row * 1.625 + 0.6, row * 2.75 + 0.75]
         return [
           dot([x, y], 0.16),
           dot([x + 0.7, y], 0.16),
