@@ -6,13 +6,19 @@ import { locationConfidences } from '../items/confidence'
 import type { Millimetres } from '../units'
 import type { Dimension } from './entry'
 
+const NO_BREAK_SPACE = '\u00a0'
+const figure = (length: Millimetres): string => String(Math.round(length * 100) / 100)
+
 /** A length to the hundredth of a millimetre. */
-export const mm = (length: Millimetres): string => `${Math.round(length * 100) / 100} mm`
+export const mm = (length: Millimetres): string => `${figure(length)}${NO_BREAK_SPACE}mm`
 
 const size = (marks: DisplayList): string => {
   const box = boundsOf(marks)
-  return box ? `${mm(box.width).replace(' mm', '')} × ${mm(box.height)}` : '0 mm'
+  return box ? sizeWords(box) : '0 mm'
 }
+
+const sizeWords = ({ width, height }: { width: Millimetres; height: Millimetres }): string =>
+  `${figure(width)} × ${mm(height)}`
 
 const different = <T>(values: readonly T[]): T[] => [...new Set(values)]
 
@@ -95,7 +101,7 @@ const withoutWidth = (marks: DisplayList): DisplayList =>
 export function tileDimensions({ width, height, marks }: Tile): Dimension[] {
   const widths = different(marks.flatMap((mark) => (mark.mark === 'stroke' ? [mark.width] : [])))
   return [
-    { what: 'cell', figure: `${mm(width).replace(' mm', '')} × ${mm(height)}` },
+    { what: 'cell', figure: sizeWords({ width, height }) },
     ...(widths.length
       ? [
           {

@@ -15,8 +15,16 @@ export const dimensionWords = (dimensions: SpecimenEntry['dimensions']): string 
     first.toUpperCase(),
   )
 
-/** The published standard's numbers; where none was verified, that is said. */
-export const publishedWords = (published: SpecimenEntry['published']): string =>
-  published.length === 0
-    ? 'No published number verified.'
-    : published.map(({ standard, number, of }) => `${standard}: ${number}${of ? ` (${of})` : ''}`).join('; ')
+/** The published standard's numbers, each with the case that it is for; where none was verified, that is said. */
+export function publishedWords(published: SpecimenEntry['published']): string {
+  if (published.length === 0) return 'No published number verified.'
+  const standards = [...new Set(published.map(({ standard }) => standard))]
+  return standards
+    .map((standard) => {
+      const numbers = published
+        .filter((each) => each.standard === standard)
+        .map(({ number, of }) => (of ? `${number} (${of})` : number))
+      return `${standard}: ${numbers.join(', ')}`
+    })
+    .join('; ')
+}

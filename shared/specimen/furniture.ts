@@ -1,6 +1,7 @@
 import { sheetProjection } from '../geometry/projection'
 import { northDiagram } from '../sheet-face/north-diagram'
 import { drawSheetFrame } from '../sheet-face/graticule'
+import { groupThousands } from '../sheet-face/figures'
 import { scaleBar } from '../sheet-face/scale-bar'
 import { sectionTicks } from '../sheet-face/section-ticks'
 import { typeScale } from '../sheet-face/type-scale'
@@ -39,7 +40,9 @@ function entry(
 }
 
 const scaleBars = (): SpecimenCase[] =>
-  [10_000, 24_000, 100_000].map((scale) => specimenCase(`1:${scale}`, scaleBar(scale, 84).draw(0, 0)))
+  [12_500, 25_000, 62_500].map((scale) =>
+    specimenCase(`1:${groupThousands(scale)}`, scaleBar(scale, 84).draw(0, 0)),
+  )
 
 function norths(): SpecimenCase[] {
   const asOf = '2025.0, an example'
