@@ -1,4 +1,4 @@
-import { isLineItem, kindWords, lineKinds, type Item, type ItemKind } from '../items/item'
+import { isLineItem, itemWord, kindWords, lineKinds, type Item, type ItemKind } from '../items/item'
 import type { Edit } from './change-set'
 import { changedFields, changedPlace } from './compare-items'
 
@@ -25,9 +25,9 @@ function describeOne({ before, after }: Edit): string {
   if (!before && after) {
     if (after.kind === 'sheet-face') return 'set up the sheet face'
     if (after.kind === 'unit') return `added unit ${after.properties.label}`
-    return `${verbOfAdding(after.kind)} ${counted(1, after.kind)}${called(after)}`
+    return `${verbOfAdding(after.kind)} 1 ${named(after)}`
   }
-  if (before && !after) return `removed ${counted(1, before.kind)}${called(before)}`
+  if (before && !after) return `removed 1 ${named(before)}`
   if (!before || !after) return 'changed nothing'
   const parts = [describePlace(before, after), describeFields(before, after)]
   return parts.filter(Boolean).join('; ') || `changed ${counted(1, after.kind)}`
@@ -83,7 +83,7 @@ export function called(item: Item): string {
 }
 
 /** An item in a sentence: "fault Cormorant", "attitude 14". */
-export const named = (item: Item): string => `${kindWords[item.kind].one}${called(item)}`
+export const named = (item: Item): string => `${itemWord(item)}${called(item)}`
 
 function describePlace(before: Item, after: Item): string {
   const place = changedPlace(before, after)

@@ -10,6 +10,8 @@ import {
 import {
   attitudePropertiesSchema,
   lineationPropertiesSchema,
+  lineationWords,
+  placeWords,
   stationPropertiesSchema,
   unitLabelPropertiesSchema,
 } from './points'
@@ -49,6 +51,13 @@ export type PointItem = ItemOf<(typeof pointKinds)[number]>
 
 export const isLineItem = (item: Item): item is LineItem => item.geometry?.type === 'LineString'
 export const isPointItem = (item: Item): item is PointItem => item.geometry?.type === 'Point'
+
+/** What a person calls an item: a place and a lineation by its type, another by its kind. */
+export function itemWord(item: Item): string {
+  if (item.kind === 'station') return placeWords[item.properties.type]
+  if (item.kind === 'lineation') return lineationWords[item.properties.type]
+  return kindWords[item.kind].one
+}
 
 /** What a person calls one and several items of a kind. */
 export const kindWords: Record<ItemKind, { one: string; many: string }> = {

@@ -95,6 +95,22 @@ export const stationTypes = [
   'tops-direction',
 ] as const
 export type StationType = (typeof stationTypes)[number]
+
+/** What a person calls a line and a place of each type. */
+export const lineationWords: Record<LineationProperties['type'], string> = {
+  lineation: 'lineation',
+  'minor-fold-axis': 'minor fold axis',
+}
+export const placeWords: Record<StationType, string> = {
+  station: 'station',
+  sample: 'sample',
+  'fossil-locality': 'fossil locality',
+  borehole: 'borehole',
+  spring: 'spring',
+  quarry: 'quarry',
+  'mine-adit': 'mine adit',
+  'tops-direction': 'tops direction',
+}
 export const stationPropertiesSchema = z.strictObject({
   ...pointBasis,
   type: z.enum(stationTypes).default('station'),

@@ -1,19 +1,16 @@
-import type { LineationProperties } from '../items/points'
+import { lineationWords, type LineationProperties } from '../items/points'
 import { describeAttitude } from './attitude-words'
 import { azimuthFigure, compassWords } from './compass'
 
 /** What a lineation's words depend on. */
 export type DescribedLineation = Pick<LineationProperties, 'type' | 'trend' | 'plunge' | 'plane'>
 
-const names: Record<LineationProperties['type'], string> = {
-  lineation: 'Lineation',
-  'minor-fold-axis': 'Minor fold axis',
-}
+const upperFirst = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1)
 
 /** A lineation in words: `Lineation, plunges 35° toward 120° (south-east), on foliation that strikes 045°, dips 40° toward
  *  135° (south-east)`. */
 export function describeLineation({ type, trend, plunge, plane }: DescribedLineation): string {
-  const line = `${names[type]}, ${describePlunge(trend, plunge)}`
+  const line = `${upperFirst(lineationWords[type])}, ${describePlunge(trend, plunge)}`
   if (!plane) return line
   const words = describeAttitude(plane)
   return `${line}, on ${plane.type} that ${words === 'Horizontal' ? 'is horizontal' : lowerFirst(words)}`

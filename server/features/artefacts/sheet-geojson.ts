@@ -14,6 +14,7 @@ import { describeFold } from '@shared/structure/fold-words'
 import { sideWords, type ConvergenceAt } from '@shared/structure/line-side'
 import { describeLineation } from '@shared/structure/lineation-words'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
+import { describePlace } from '@shared/symbols/place-words'
 import type { LonLat, XY } from '@shared/units'
 import { breathe } from './breathe'
 
@@ -73,7 +74,7 @@ function members({ sheet, items, edition }: SheetData, units: ReadonlyMap<string
       approvedBy: edition.released?.approvedBy ?? null,
     },
     directions:
-      'Strikes and trends are degrees clockwise from true north, strikes by the right-hand rule. The side of a fault or ' +
+      'Strikes, trends and azimuths are degrees clockwise from true north, strikes by the right-hand rule. The side of a fault or ' +
       'fold is left or right of its line, seen along its coordinates.',
     legend: [...units].map(([id, unit]) => ({ id, ...unit })).toSorted((a, b) => a.rank - b.rank),
     caution: CAUTION,
@@ -113,6 +114,8 @@ function wordsOf(item: Item, unit: UnitProperties | undefined, convergenceAt: Co
       return describeAttitude(item.properties)
     case 'lineation':
       return describeLineation(item.properties)
+    case 'station':
+      return describePlace(item.properties)
     case 'axial-trace': {
       const side = sideWords(item.geometry.coordinates, item.properties.side, convergenceAt)
       return describeFold(item.properties, side)

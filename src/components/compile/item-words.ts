@@ -2,13 +2,12 @@ import { gridLength } from '@shared/geometry/bearings'
 import type { Item, ItemOf, LineItem } from '@shared/items/item'
 import type { UnitProperties } from '@shared/items/legend'
 import { describeAttitude } from '@shared/structure/attitude-words'
-import { azimuthFigure } from '@shared/structure/compass'
 import { describeFault } from '@shared/structure/fault-words'
 import { describeFold } from '@shared/structure/fold-words'
 import { sideWords } from '@shared/structure/line-side'
 import { describeLineation } from '@shared/structure/lineation-words'
-import { placeSymbolOf } from '@shared/symbols/draw-place'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
+import { describePlace } from '@shared/symbols/place-words'
 import type { Degrees, Metres, XY } from '@shared/units'
 
 /** What the words of an item need beside it. */
@@ -33,7 +32,7 @@ export function itemTitle(item: Item, context: WordsContext): string {
     case 'lineation':
       return describeLineation(item.properties)
     case 'station':
-      return placeTitle(item)
+      return describePlace(item.properties)
     case 'unit-label':
       return unitLabelTitle(context.unitOf(item.properties.unit), item.properties.identity)
     case 'unit':
@@ -56,13 +55,6 @@ function attitudeTitle({ properties }: ItemOf<'attitude'>): string {
   const words = describeAttitude(properties)
   const separator = words.startsWith('Horizontal') ? ', ' : ' '
   return `${type}${separator}${words.charAt(0).toLowerCase()}${words.slice(1)}`
-}
-
-function placeTitle(item: ItemOf<'station'>): string {
-  const { name, azimuth } = item.properties
-  const { title, azimuth: meaning } = placeSymbolOf(item.properties.type)
-  const toward = meaning && azimuth !== null ? `, ${meaning.toLowerCase()} ${azimuthFigure(azimuth)}°` : ''
-  return `${title}${name ? ` ${name}` : ''}${toward}`
 }
 
 const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)

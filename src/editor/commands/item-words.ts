@@ -1,4 +1,4 @@
-import { kindWords, type Item } from '@shared/items/item'
+import { itemWord as wordOf, kindWords, type Item } from '@shared/items/item'
 import { foldWords } from '@shared/items/lines'
 
 /** "unit" is spoken with a consonant. */
@@ -7,9 +7,9 @@ const startsWithVowel = /^(?!unit)[aeiou]/
 /** "a contact", "an axial trace", "an anticline". */
 export const withArticle = (word: string): string => `${startsWithVowel.test(word) ? 'an' : 'a'} ${word}`
 
-/** What an item is called in a sentence: a fold by its form, another by its kind, with its name where it has one. */
+/** What an item is called in a sentence: a fold by its form, another by its type or kind, with its name where it has one. */
 export function itemWord(item: Item): string {
-  const word = item.kind === 'axial-trace' ? foldWords[item.properties.form] : kindWords[item.kind].one
+  const word = item.kind === 'axial-trace' ? foldWords[item.properties.form] : wordOf(item)
   if (item.kind === 'unit') return `unit ${item.properties.label}`
   if ('name' in item.properties && item.properties.name !== '') return `${word} “${item.properties.name}”`
   return word

@@ -2,8 +2,10 @@ import type { FeatureCollection, LineString, Polygon, Position } from 'geojson'
 import { expect, it } from 'vitest'
 import { CAUTION } from '@shared/sheet-face/caution'
 import { itemSchema } from '@shared/items/item'
+import type { XY } from '@shared/units'
 import { sheetGeoJson } from '../../../../../server/features/artefacts/sheet-geojson'
 import { utmConvergence, utmDefinition } from '../../../../reference/geodesy'
+import { aPoint } from '../../../../support/sheet-items'
 import {
   aPrintedSheet,
   mapItems,
@@ -59,6 +61,41 @@ it('writes every line and point with its kind, properties and words, and the cau
   expect(data['sheet']).toMatchObject({ number: 'MI-14', scale: 24_000, crs: { srid: 32626 } })
   expect(data['edition']).toMatchObject({ number: 1, revision: 37, approvedBy: 'Edda Marr' })
   expect(data['legend']).toHaveLength(2)
+})
+
+it('writes lineations with their plane, places with their type, and what more is seen of a bed', async () => {
+  const at: XY = [286_000, 5_280_000]
+  const plane = { type: 'foliation', strike: 45, dip: 40, overturned: false } as const
+  const items = [
+    aPoint('lineation', at, { trend: 75, plunge: 23, plane }),
+    aPoint('station', at, { type: 'mine-adit', name: 'Long Geo', azimuth: 120 }),
+    aPoint('attitude', at, { strike: 45, dip: 40, topsKnown: true, undulating: true }),
+  ]
+  const { features }: FeatureCollection = JSON.parse(
+    await sheetGeoJson({ sheet: aPrintedSheet(), items, faces: [], edition: released }),
+  )
+  expect(features.map((feature) => feature.properties)).toMatchObject([
+    {
+      kind: 'lineation',
+      trend: 75,
+      plunge: 23,
+      plane,
+      words:
+        'Lineation, plunges 23° toward 075° (east), on foliation that strikes 045°, dips 40° toward 135° (south-east)',
+    },
+    {
+      kind: 'station',
+      type: 'mine-adit',
+      azimuth: 120,
+      words: 'Mine adit Long Geo, goes in toward 120°',
+    },
+    {
+      kind: 'attitude',
+      topsKnown: true,
+      undulating: true,
+      words: 'Strikes 045°, dips 40° toward 135° (south-east), undulating, tops known',
+    },
+  ])
 })
 
 it('winds rings as RFC 7946 asks: outer counter-clockwise, holes clockwise', async () => {
