@@ -23,8 +23,9 @@ export function queryRoom(line: MeasuredLine, at: Millimetres): Millimetres {
  *  wherever there is any room. */
 export function placeQueries(
   line: MeasuredLine,
-  { within, taken }: { within: Stretch; taken: readonly Stretch[] },
+  { within: whole, taken }: { within: Stretch; taken: readonly Stretch[] },
 ): Millimetres[] {
+  const within = withoutStubs(whole)
   const gaps = gapsBetween(within, taken).filter(([from, to]) => to - from >= MOST_ROOM - ROUNDING)
   const places = gaps.length === 1 ? shared(gaps[0]) : gaps.map(([from, to]) => (from + to) / 2)
   const wanted = Math.max(1, Math.round((within[1] - within[0]) / query.interval))
@@ -38,6 +39,12 @@ export function placeQueries(
   const room = Math.min(MOST_ROOM, within[1] - within[0])
   return [straightestPlace(line, { size: room, within, taken }) ?? []].flat()
 }
+
+/** Line that is left between a question mark and the end of the line: less would be a stub. */
+const STUB: Millimetres = 1.2
+
+const withoutStubs = ([from, to]: Stretch): Stretch =>
+  to - from >= MOST_ROOM + 2 * STUB ? [from + STUB, to - STUB] : [from, to]
 
 /** The free stretches. */
 function gapsBetween([from, to]: Stretch, taken: readonly Stretch[]): Stretch[] {
