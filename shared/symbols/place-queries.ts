@@ -6,7 +6,7 @@ import { capHeight, measureText } from './text-metrics'
 
 /** The question mark set in a line of questioned identity. Source of the size: 8 points, FGDC as cited in
  *  symbolization.md section 2; the interval is ours. */
-const query = { size: 2.8, weight: 700, interval: 24, gap: 0.55 } as const
+const query = { size: 2.8, weight: 700, interval: 20, gap: 0.55 } as const
 const width: Millimetres = measureText('?', query.size, query.weight)
 const height: Millimetres = capHeight(query.size, query.weight)
 
