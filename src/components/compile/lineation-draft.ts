@@ -50,11 +50,15 @@ export function readLineation(
   const north = readNorth(draft, convergence)
   if (north.outcome === 'refused') return north
   const turn = (azimuth: Degrees | null) => (azimuth === null ? null : north.toTrue(azimuth))
-  const { trend, plunge } = line
+  const trend = turn(line.trend)
   const plane = on && { strike: turn(on.strike), dip: on.dip, overturned: on.overturned }
   return {
     outcome: 'lineation',
-    line: { trend: turn(trend), plunge },
+    // A rake gives more decimals than anybody measured; it is kept with the reading.
+    line: {
+      trend: trend === null ? null : normalizeAzimuth(hundredths(trend)),
+      plunge: hundredths(line.plunge),
+    },
     plane: plane && { type: draft.planeType || 'foliation', ...plane },
     reading: {
       text: draft.text.trim(),
@@ -65,6 +69,8 @@ export function readLineation(
     warning: (on && offPlaneWarning(line, on)) ?? '',
   }
 }
+
+const hundredths = (degrees: Degrees): Degrees => Math.round(degrees * 100) / 100
 
 /** A lineation as a draft to go on with: its reading as it was written, and its plane written as the sheet does, against
  *  the same north.

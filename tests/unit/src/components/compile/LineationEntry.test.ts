@@ -75,6 +75,14 @@ describe('a new lineation', () => {
     })
   })
 
+  it('keeps no more than hundredths of a degree of what a rake gives', async () => {
+    const { entry, type, plane, added } = mountNew({ planeType: 'foliation' })
+    await type('rake 0.001')
+    await plane('000/40')
+    await entry.trigger('submit')
+    expect(added()).toMatchObject({ properties: { trend: 0, plunge: 0 } })
+  })
+
   it('asks for the plane of a rake', async () => {
     const { entry, type } = mountNew()
     await type('rake 40')
