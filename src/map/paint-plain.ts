@@ -1,6 +1,8 @@
 import type { LineItem } from '@shared/items/item'
 import { lineSymbolOf } from '@shared/symbols/draw-item'
 import { inkColour } from '@shared/symbols/ink'
+import { printedInk } from '@shared/symbols/one-ink'
+import type { Printing } from '@shared/symbols/unit-fill'
 import type { XY } from '@shared/units'
 import { LEAST_WIDTH_PX } from './drawing'
 import { toPx, type ViewFrame } from './view-frame'
@@ -10,7 +12,12 @@ import { toPx, type ViewFrame } from './view-frame'
 export function paintPlain(
   context: CanvasRenderingContext2D,
   lines: readonly LineItem[],
-  { view, ratio, symbolPx }: { view: ViewFrame; ratio: number; symbolPx: number },
+  {
+    view,
+    ratio,
+    symbolPx,
+    printing,
+  }: { view: ViewFrame; ratio: number; symbolPx: number; printing: Printing },
 ): void {
   const pens = new Map<string, { colour: string; width: number; lines: LineItem[] }>()
   for (const line of lines) {
@@ -19,7 +26,7 @@ export function paintPlain(
     const key = `${ink} ${width}`
     const pen = pens.get(key)
     if (pen) pen.lines.push(line)
-    else pens.set(key, { colour: inkColour(ink), width, lines: [line] })
+    else pens.set(key, { colour: inkColour(printedInk(ink, printing)), width, lines: [line] })
   }
   context.setTransform(ratio, 0, 0, ratio, 0, 0)
   context.lineJoin = context.lineCap = 'round'

@@ -53,7 +53,7 @@ export function* paintSheet(
     drawDrawing(context, drawing, { view, pxPerMm, ratio })
     yield
   }
-  paintPlain(context, notReady, { view, ratio, symbolPx })
+  paintPlain(context, notReady, { view, ratio, symbolPx, printing: scene.printing })
   context.restore()
   const frame = scene.frame(view.pxPerMetre / symbolPx, paint.settle)
   drawDrawing(context, frame, { view, pxPerMm: groundPxPerMm(view, frame.mmPerMetre), ratio })

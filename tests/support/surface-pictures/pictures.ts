@@ -29,6 +29,8 @@ export interface PictureRequest {
 /** The three surfaces as makers of pictures. */
 export interface SurfacePictures {
   draw(surface: SurfaceName, request: PictureRequest): Promise<PNG>
+  /** Draws on canvas as the map does. */
+  drawInView(...request: Parameters<typeof inPage.drawInView>): Promise<PNG>
   close(): Promise<void>
 }
 
@@ -43,7 +45,12 @@ export async function openSurfacePictures(): Promise<SurfacePictures> {
     svg: (request) => asSvg(page, request),
     pdf: asPdf,
   }
-  return { draw: (surface, request) => draw[surface](request), close: () => browser.close() }
+  return {
+    draw: (surface, request) => draw[surface](request),
+    drawInView: async (...request) =>
+      pictureAt(await page.evaluate((given) => drawings.drawInView(...given), request)),
+    close: () => browser.close(),
+  }
 }
 
 async function onCanvas(
@@ -54,8 +61,12 @@ async function onCanvas(
     (input) => drawings.drawOnCanvas(input.list, input.size, input.pxPerMm, input.ground),
     { list, size, pxPerMm, ground },
   )
-  return PNG.sync.read(Buffer.from(address.slice(address.indexOf(',') + 1), 'base64'))
+  return pictureAt(address)
 }
+
+/** The picture that a data address holds. */
+const pictureAt = (address: string): PNG =>
+  PNG.sync.read(Buffer.from(address.slice(address.indexOf(',') + 1), 'base64'))
 
 /** The bundle's name in the page. */
 declare const drawings: typeof inPage
