@@ -12,6 +12,9 @@ export interface Config {
   /** Address that people use, without a slash at its end. */
   url: string
   databaseUrl: string
+  /** Address of the same database for the role that owns its tables and migrates them; where it is not set, the
+   *  application's role does both. */
+  databaseOwnerUrl: string | undefined
   /** Folder for files: uploads, editions, the session secret. */
   dataFolder: string
   /** Folder of the built client. */
@@ -35,6 +38,7 @@ const environmentSchema = z.object({
   DATABASE_URL: z
     .string({ error: 'A PostgreSQL address is needed: run npm start, or set DATABASE_URL.' })
     .min(1),
+  DATABASE_OWNER_URL: z.string().min(1).optional(),
   SHEETWRIGHT_DATA: z.string().min(1).default('.data'),
   SHEETWRIGHT_DEMO: z.enum(['0', '1']).default('0'),
   /** The same for every process of one installation, if there are several. */
@@ -60,6 +64,7 @@ export function readConfig(environment: NodeJS.ProcessEnv = process.env): Config
     host: settings.SHEETWRIGHT_HOST,
     url: url.replace(/\/$/, ''),
     databaseUrl: settings.DATABASE_URL,
+    databaseOwnerUrl: settings.DATABASE_OWNER_URL,
     dataFolder: resolve(settings.SHEETWRIGHT_DATA),
     clientFolder: resolve(projectFolder, 'dist/client'),
     demo: settings.SHEETWRIGHT_DEMO === '1' && servesLoopbackOnly(settings.SHEETWRIGHT_HOST, url),

@@ -21,12 +21,12 @@ import { RestoreService } from './features/ledger/restore.service'
 import { handleReleases } from './features/review/review.jobs'
 import { ReviewService } from './features/review/review.service'
 import { SheetsService } from './features/sheets/sheets.service'
-import { createDataSource, migrate } from './platform/database'
+import { createDataSource, migrate, migrateAsOwner } from './platform/database'
 import { createSessions } from './platform/http/session'
 import { Jobs } from './platform/jobs'
 import { createLog } from './platform/log'
 import { SheetEvents } from './platform/sheet-events'
-import { folderStorage } from './platform/storage'
+import { folderStorage, type Storage } from './platform/storage'
 
 /** Connections that sessions are read and kept through. */
 const SESSION_POOL_SIZE = 4
@@ -40,8 +40,9 @@ export async function createServices(config: Config) {
   const uploadFolder = join(config.dataFolder, 'uploads')
   await mkdir(uploadFolder, { recursive: true })
   const secret = config.sessionSecret ?? (await keepSecret(join(config.dataFolder, 'session-secret')))
+  if (config.databaseOwnerUrl) await migrateAsOwner(config.databaseOwnerUrl, config.databaseUrl)
   const dataSource = await createDataSource(config.databaseUrl).initialize()
-  await migrate(dataSource)
+  if (!config.databaseOwnerUrl) await migrate(dataSource)
   const rooms = createRooms(config, dataSource, log)
   const pool = new Pool({ connectionString: config.databaseUrl, max: SESSION_POOL_SIZE })
   pool.on('error', (fault) => log.error({ err: fault }, 'A connection for sessions broke'))
@@ -66,7 +67,7 @@ export async function createServices(config: Config) {
 }
 
 function createRooms(config: Config, dataSource: DataSource, log: Logger) {
-  const storage = folderStorage(join(config.dataFolder, 'files'))
+  const storage = openStorage(config)
   const jobs = new Jobs(dataSource, config.databaseUrl, log)
   const events = new SheetEvents(config.databaseUrl, log)
   const accounts = new AccountsService(dataSource, config.demo)
@@ -98,6 +99,10 @@ function createRooms(config: Config, dataSource: DataSource, log: Logger) {
     review: new ReviewService(dataSource, jobs, sheets, history, editions),
   }
 }
+
+/** Where files are kept. */
+export const openStorage = ({ dataFolder }: Pick<Config, 'dataFolder'>): Storage =>
+  folderStorage(join(dataFolder, 'files'))
 
 /** The secret in a file that only this user may read; made at the first start. */
 async function keepSecret(path: string): Promise<string> {

@@ -3,6 +3,7 @@ import { CreateSheetsAndLedger20261201000002 } from './20261201000002-create-she
 import { CreateIntake20261201000003 } from './20261201000003-create-intake'
 import { CreateReviewAndEditions20261201000004 } from './20261201000004-create-review-and-editions'
 import { TellAndNameRevisions20261201000101 } from './20261201000101-tell-and-name-revisions'
+import { CreateAuditTrail20261201000102 } from './20261201000102-create-audit-trail'
 
 /** Every migration in order; each room appends its own. Never edit one that has been released. */
 export const migrations = [
@@ -11,4 +12,5 @@ export const migrations = [
   CreateIntake20261201000003,
   CreateReviewAndEditions20261201000004,
   TellAndNameRevisions20261201000101,
+  CreateAuditTrail20261201000102,
 ]

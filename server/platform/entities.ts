@@ -11,6 +11,8 @@ import { NamedRevisionRow } from '../features/ledger/named-revision.entity'
 import { RevisionRow } from '../features/ledger/revision.entity'
 import { SubmissionRow } from '../features/review/submission.entity'
 import { SheetRow } from '../features/sheets/sheet.entity'
+import { AuditEntryRow } from './audit-entry.entity'
+import { AuditHeadRow } from './audit-head.entity'
 import { JobRow } from './job.entity'
 import { SessionRow } from './session.entity'
 
@@ -21,6 +23,8 @@ export const entities = [
   Link,
   SessionRow,
   JobRow,
+  AuditEntryRow,
+  AuditHeadRow,
   SheetRow,
   RevisionRow,
   ItemVersionRow,

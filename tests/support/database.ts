@@ -4,32 +4,45 @@ import { createDataSource, migrate } from '../../server/platform/database'
 
 /** A database of one test file's own. */
 export interface TestDatabase {
+  /** Address for the application's own role, which has the rights of a real installation and no more. */
   url: string
+  /** Address for the superuser, who may do anything. */
+  superuserUrl: string
   drop(): Promise<void>
 }
 
 const TEMPLATE = 'sheetwright_template'
 /** Any number, the same for every test process. */
 const TEMPLATE_LOCK = 4_310_900
+/** The roles that every private cluster has. */
+const APP = 'sheetwright'
+const OWNER = 'sheetwright_owner'
+/** Of both roles, in tests only. */
+const PASSWORD = 'test'
 
 /** A database with all tables and nothing in them, copied from one that the first test has migrated. */
-export const migratedDatabase = async (): Promise<TestDatabase> => {
+export async function migratedDatabase(): Promise<TestDatabase> {
   await asSuperuser(makeTemplate)
-  return makeDatabase(`TEMPLATE ${TEMPLATE}`)
+  const name = await makeDatabase(`TEMPLATE ${TEMPLATE} OWNER ${OWNER}`)
+  // Rights on a database are not copied with it.
+  await asSuperuser((client) => client.query(`GRANT CREATE ON DATABASE ${name} TO ${APP}`))
+  return { url: addressOf(name, APP), superuserUrl: addressOf(name), drop: () => drop(name) }
 }
 
-/** A database with nothing in it. */
-export const emptyDatabase = (): Promise<TestDatabase> => makeDatabase('')
+/** A database with nothing in it, whose address is the superuser's. */
+export async function emptyDatabase(): Promise<TestDatabase> {
+  const name = await makeDatabase('')
+  return { url: addressOf(name), superuserUrl: addressOf(name), drop: () => drop(name) }
+}
 
-async function makeDatabase(options: string): Promise<TestDatabase> {
+async function makeDatabase(options: string): Promise<string> {
   const name = `test_${randomBytes(8).toString('hex')}`
   await asSuperuser((client) => client.query(`CREATE DATABASE ${name} ${options}`))
-  return {
-    url: addressOf(name),
-    drop: () =>
-      asSuperuser(async (client) => void (await client.query(`DROP DATABASE ${name} WITH (FORCE)`))),
-  }
+  return name
 }
+
+const drop = (name: string): Promise<void> =>
+  asSuperuser(async (client) => void (await client.query(`DROP DATABASE ${name} WITH (FORCE)`)))
 
 /** One test process makes the template, the others wait for it. */
 async function makeTemplate(client: Client): Promise<void> {
@@ -37,20 +50,24 @@ async function makeTemplate(client: Client): Promise<void> {
   const { rowCount } = await client.query('SELECT FROM pg_database WHERE datname = $1', [TEMPLATE])
   if (rowCount) return
   const part = `${TEMPLATE}_part`
+  for (const role of [APP, OWNER]) await client.query(`ALTER ROLE ${role} PASSWORD '${PASSWORD}'`)
   await client.query(`DROP DATABASE IF EXISTS ${part}`)
-  await client.query(`CREATE DATABASE ${part}`)
-  const dataSource = await createDataSource(addressOf(part)).initialize()
+  await client.query(`CREATE DATABASE ${part} OWNER ${OWNER}`)
+  await connected(addressOf(part), (inside) => inside.query('CREATE EXTENSION postgis'))
+  const owner = await createDataSource(addressOf(part, OWNER)).initialize()
   try {
-    await migrate(dataSource)
+    await migrate(owner, APP)
   } finally {
-    await dataSource.destroy()
+    await owner.destroy()
   }
   await client.query(`ALTER DATABASE ${part} RENAME TO ${TEMPLATE}`)
 }
 
+const asSuperuser = <T>(work: (client: Client) => Promise<T>): Promise<T> => connected(clusterUrl(), work)
+
 /** Runs something on a connection of its own, whose end also lets go of its locks. */
-async function asSuperuser<T>(work: (client: Client) => Promise<T>): Promise<T> {
-  const client = new Client({ connectionString: clusterUrl() })
+export async function connected<T>(url: string, work: (client: Client) => Promise<T>): Promise<T> {
+  const client = new Client({ connectionString: url })
   await client.connect()
   try {
     return await work(client)
@@ -59,9 +76,14 @@ async function asSuperuser<T>(work: (client: Client) => Promise<T>): Promise<T> 
   }
 }
 
-function addressOf(database: string): string {
+/** Address of a database for a role; for the superuser, if none is named. */
+function addressOf(database: string, role?: string): string {
   const url = new URL(clusterUrl())
   url.pathname = `/${database}`
+  if (role !== undefined) {
+    url.username = role
+    url.password = PASSWORD
+  }
   return url.href
 }
 

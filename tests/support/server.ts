@@ -9,7 +9,7 @@ import { createApp } from '../../server/app'
 import { readConfig, type Config } from '../../server/config'
 import { loadDemoAccounts } from '../../server/features/accounts/demo-accounts'
 import { createServices, type Services } from '../../server/services'
-import { migratedDatabase } from './database'
+import { connected, migratedDatabase } from './database'
 
 export { signIn, signInAs, type Agent, type Who } from './sign-in'
 export { aSheet, type TestSheet } from './sheets'
@@ -20,6 +20,8 @@ export interface TestServer {
   url: string
   dataSource: DataSource
   services: Services
+  /** Runs SQL as the database's superuser, who is held back by nothing but triggers. */
+  asSuperuser(sql: string, values?: unknown[]): Promise<unknown[]>
   close(): Promise<void>
 }
 
@@ -43,6 +45,8 @@ export async function startTestServer(overrides: Partial<Config> = {}): Promise<
     url,
     dataSource: services.dataSource,
     services,
+    asSuperuser: (sql, values) =>
+      connected(database.superuserUrl, async (client) => (await client.query(sql, values)).rows),
     async close() {
       const closed = new Promise((resolve) => server.close(resolve))
       await services.events.close()

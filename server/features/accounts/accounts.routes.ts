@@ -15,6 +15,7 @@ export function mountAccounts(
   passport: Passport,
 ): void {
   const limits = createLimits()
+  const addressOf = ({ ip }: Request): string => ip ?? 'an unknown address'
   const sessionOf = (request: Request): Session => ({
     account: request.user ?? null,
     csrfToken: tokenOf(request),
@@ -22,15 +23,20 @@ export function mountAccounts(
   })
 
   serve(router, getSession, ({ request }) => sessionOf(request))
-  serve(router, signIn, async ({ request, response }) => {
+  serve(router, signIn, async ({ body, request, response }) => {
     await limits.signIn(request, response)
     const account = await authenticate(passport, request, response)
-    if (!account)
+    const tried = { email: body.email.trim().toLowerCase(), address: addressOf(request) }
+    if (!account) {
+      await accounts.keepEvent({ kind: 'sign-in-refused', ...tried }, null)
       throw problem('wrong-credentials', 'There is no account with this e-mail and this password.')
+    }
+    await accounts.keepEvent({ kind: 'sign-in', ...tried }, account.id)
     await enter(request, account)
     return sessionOf(request)
   })
-  serve(router, signOut, async ({ request }) => {
+  serve(router, signOut, async ({ account, request }) => {
+    if (account) await accounts.keepEvent({ kind: 'sign-out', address: addressOf(request) }, account.id)
     await leave(request)
     return sessionOf(request)
   })

@@ -1,5 +1,7 @@
 import type { DataSource } from 'typeorm'
 import type { DemoAccount, Role } from '@shared/api/accounts'
+import type { AuditEvent } from '@shared/audit/audit-event'
+import { keepAudit } from '../../platform/audit'
 import type { AccessFinder, SheetIdentity, SignedIn } from '../../platform/http/access'
 import { Account } from './account.entity'
 import { findForSignIn, findSheetIdentity, listRolesOn } from './accounts.queries'
@@ -25,6 +27,13 @@ export class AccountsService implements AccessFinder {
   async findSignedIn(id: string): Promise<SignedIn | undefined> {
     const account = await this.dataSource.manager.findOneBy(Account, { id })
     return account && this.mayEnter(account) ? toSignedIn(account) : undefined
+  }
+
+  /** Keeps in the audit trail what changes nothing in the database: a session begun, refused or ended, a download. */
+  async keepEvent(event: AuditEvent, accountId: string | null, sheet?: string): Promise<void> {
+    await this.dataSource.transaction((em) =>
+      keepAudit(em, { event, accountId, ...(sheet ? { sheet } : {}) }),
+    )
   }
 
   /** Accounts to show on the sign-in page: none unless the demo is served on loopback. */

@@ -2,6 +2,7 @@ import { createHash, randomBytes } from 'node:crypto'
 import type { DataSource, EntityManager } from 'typeorm'
 import type { z } from 'zod'
 import type { acceptLink, getLink } from '@shared/api/accounts'
+import { keepAudit } from '../../platform/audit'
 import type { SignedIn } from '../../platform/http/access'
 import { problem } from '../../platform/problem'
 import { Account } from './account.entity'
@@ -59,6 +60,11 @@ export class LinksService {
         ? await acceptInvitation(em, link.accountId, person.email, named)
         : await makeFirstAdministrator(em, person.email, named)
       await em.update(Link, { id: link.id }, { usedAt: new Date() })
+      const { email } = account
+      await keepAudit(em, {
+        event: { kind: 'password-set', email, purpose: link.purpose },
+        accountId: account.id,
+      })
       return toSignedIn(account)
     })
   }

@@ -8,6 +8,7 @@ import { CAUTION } from '@shared/sheet-face/caution'
 import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { citation, type EditionStatement } from '@shared/sheet-face/edition-statement'
 import { announce } from '../../platform/announce'
+import { keepAudit } from '../../platform/audit'
 import type { Storage } from '../../platform/storage'
 import type { ReportProgress } from '../../platform/jobs'
 import { revisionDigest } from '../artefacts/digest'
@@ -108,6 +109,12 @@ export class ReleaseService {
         files.map((file) => ({ ...file, storageKey: `${folder}/${file.name}` })),
       )
       await announce(em, sheet.number, { event: 'state', state: 'drafting' })
+      const { revision, digest } = approved
+      await keepAudit(em, {
+        event: { kind: 'release', edition: edition.number, revision, digest },
+        accountId: approved.approver.id,
+        sheet: sheet.number,
+      })
     })
   }
 }

@@ -46,8 +46,8 @@ export function mountLedger(router: Router, services: LedgerServices): void {
   serve(router, nameRevision, ({ sheet, account, params, body }) =>
     names.put(sheet.id, account.id, params.revision, body),
   )
-  serve(router, unnameRevision, async ({ sheet, params }) => {
-    await names.remove(sheet.id, params.revision)
+  serve(router, unnameRevision, async ({ sheet, account, params }) => {
+    await names.remove(sheet.id, account.id, params.revision)
     return null
   })
 

@@ -1,5 +1,6 @@
 import type { DataSource } from 'typeorm'
 import type { NamedRevision } from '@shared/api/ledger'
+import { keepAudit } from '../../platform/audit'
 import { problem } from '../../platform/problem'
 import { lockSheet } from './ledger.queries'
 import { findByName, putName, removeName, selectNamedRevisions } from './named-revisions.queries'
@@ -31,6 +32,11 @@ export class NamedRevisionsService {
         throw problem('name-taken', detail, { errors: [{ pointer: '/name', detail }] })
       }
       await putName(em, sheetId, { revision, name, note, by: accountId })
+      await keepAudit(em, {
+        event: { kind: 'revision-named', revision, name },
+        accountId,
+        sheet: sheet.number,
+      })
       const [named] = await selectNamedRevisions(em, sheetId, [revision])
       if (!named) throw new Error(`Revision ${revision} of sheet ${sheet.number} was not named.`)
       return named
@@ -38,10 +44,16 @@ export class NamedRevisionsService {
   }
 
   /** Takes the name off a revision. */
-  async remove(sheetId: string, revision: number): Promise<void> {
+  async remove(sheetId: string, accountId: string, revision: number): Promise<void> {
     await this.dataSource.transaction(async (em) => {
+      const sheet = await lockSheet(em, sheetId)
       const name = await removeName(em, sheetId, revision)
       if (name === undefined) throw problem('not-found', `Revision ${revision} has no name.`)
+      await keepAudit(em, {
+        event: { kind: 'revision-unnamed', revision, name },
+        accountId,
+        sheet: sheet.number,
+      })
     })
   }
 }

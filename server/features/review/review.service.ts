@@ -3,8 +3,10 @@ import type { Role } from '@shared/api/accounts'
 import type { Person } from '@shared/api/common'
 import type { Job } from '@shared/api/jobs'
 import type { RevisionContents, Submission } from '@shared/api/review'
+import type { AuditEvent } from '@shared/audit/audit-event'
 import type { Item } from '@shared/items/item'
 import { announce } from '../../platform/announce'
+import { keepAudit } from '../../platform/audit'
 import type { Jobs } from '../../platform/jobs'
 import { problem } from '../../platform/problem'
 import { revisionDigest } from '../artefacts/digest'
@@ -86,7 +88,10 @@ export class ReviewService {
         message,
       })
       await this.enter(em, sheet, 'submitted')
-      return this.latestAnswer(em, sheetId, viewer)
+      const answer = await this.latestAnswer(em, sheetId, viewer)
+      const { digest } = answer
+      await this.audit(em, sheet, viewer, { kind: 'submission', revision, digest })
+      return answer
     })
   }
 
@@ -108,7 +113,10 @@ export class ReviewService {
       if (decision.decision === 'approved') await this.requirePrintable(em, submission, viewer.person.name)
       await decide(em, submission.id, { ...decision, by: viewer.person.id })
       await this.enter(em, sheet, decision.decision === 'approved' ? 'approved' : 'drafting')
-      return this.latestAnswer(em, sheetId, viewer)
+      const answer = await this.latestAnswer(em, sheetId, viewer)
+      const { revision, digest } = submission
+      await this.audit(em, sheet, viewer, { kind: 'decision', decision: decision.decision, revision, digest })
+      return answer
     })
   }
 
@@ -133,6 +141,7 @@ export class ReviewService {
       })
       await setReleaseJob(em, submission.id, job.id)
       await this.enter(em, sheet, 'releasing')
+      await this.audit(em, sheet, viewer, { kind: 'release-asked', revision: submission.revision })
       return job
     })
   }
@@ -197,6 +206,10 @@ export class ReviewService {
   private async findOpenJob({ jobId }: StoredSubmission): Promise<Job | undefined> {
     const job = jobId === null ? undefined : await this.jobs.find(jobId)
     return job?.state === 'waiting' || job?.state === 'running' ? job : undefined
+  }
+
+  private audit(em: EntityManager, sheet: LockedSheet, { person }: Viewer, event: AuditEvent): Promise<void> {
+    return keepAudit(em, { event, accountId: person.id, sheet: sheet.number })
   }
 
   private async enter(

@@ -29,6 +29,8 @@ export interface CallContext {
   access: AccessFinder
   /** Folder for uploads while a call reads them. */
   uploadFolder: string
+  /** Keeps in the audit trail that a member downloads what is not released. */
+  noteDownload(account: SignedIn, sheet: SheetIdentity, path: string): Promise<void>
   /** Whether answers are checked against their schema before they are sent: on in tests. */
   checkAnswers: boolean
 }

@@ -57,6 +57,9 @@ export function serve<
     const query = parseInput(endpoint.query, { ...request.query })
     const { body, file } = await readInput(endpoint, request, response)
     try {
+      if (endpoint.form === 'download' && caller.account && caller.sheet) {
+        await response.locals.context.noteDownload(caller.account, caller.sheet, request.originalUrl)
+      }
       const call = {
         ...caller,
         params,

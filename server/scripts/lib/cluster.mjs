@@ -8,16 +8,19 @@ import { run } from './run.mjs'
 import { say, Stop } from './say.mjs'
 
 const SUPERUSER = 'postgres'
-/** Role and database of the application: it owns its database and nothing else. */
+/** Role of the application, and the name of its database. */
 const APP = 'sheetwright'
+/** Role that owns the database and its tables: migrations run as it, so that the application's own role has no more
+ *  rights than it is given. */
+const OWNER = 'sheetwright_owner'
 
 /** What makes a throw-away cluster fast: it may lose everything when the machine goes down. */
 const THROW_AWAY = ['fsync=off', 'synchronous_commit=off', 'full_page_writes=off', 'max_connections=200']
 
 /** Starts the private cluster below a data folder on a loopback port, making it first if there is none.
  *  @param {{ dataFolder: string, throwAway?: boolean }} options
- *  @returns {Promise<{ url: string, superuserUrl: string, stop(): Promise<void> }>} addresses of the application's
- *    database and, for the superuser, of `postgres` */
+ *  @returns {Promise<{ url: string, ownerUrl: string, superuserUrl: string, stop(): Promise<void> }>} addresses of
+ *    the application's database, for the application and for its owner, and, for the superuser, of `postgres` */
 export async function startCluster({ dataFolder, throwAway = false }) {
   const newest = await findPostgres()
   const home = await prepareHome(dataFolder)
@@ -39,6 +42,7 @@ export async function startCluster({ dataFolder, throwAway = false }) {
   }
   return {
     url: address(APP, passwords.app, APP),
+    ownerUrl: address(OWNER, passwords.owner, APP),
     superuserUrl: address(SUPERUSER, passwords.superuser, 'postgres'),
     stop,
   }
@@ -53,11 +57,12 @@ function existingVersion(data) {
 /** Random passwords, made once and readable by the owner only. */
 function keepPasswords(folder) {
   const path = join(folder, 'passwords.json')
-  if (!existsSync(path)) {
-    const fresh = { superuser: randomBytes(24).toString('hex'), app: randomBytes(24).toString('hex') }
-    writeFileSync(path, JSON.stringify(fresh), { mode: 0o600 })
-  }
-  return JSON.parse(readFileSync(path, 'utf8'))
+  const kept = existsSync(path) ? JSON.parse(readFileSync(path, 'utf8')) : {}
+  const fresh = () => randomBytes(24).toString('hex')
+  // A cluster of an earlier version has no owner yet.
+  const passwords = { superuser: fresh(), app: fresh(), owner: fresh(), ...kept }
+  if (!kept.owner) writeFileSync(path, JSON.stringify(passwords), { mode: 0o600 })
+  return passwords
 }
 
 /** Made aside and moved into place, so that an interrupted start leaves nothing half made. */
@@ -144,17 +149,47 @@ async function stopCluster({ home, programs, data, throwAway }) {
   })
 }
 
-/** The application's role and database, with PostGIS, which only a superuser may create. */
+/** The database with its owner, the application's role, and PostGIS, which only a superuser may create. */
 async function prepareDatabase({ programs, port, passwords }) {
   const ask = (database, sql) => query({ programs, port, password: passwords.superuser, database, sql })
-  const known = await ask('postgres', `SELECT count(*) FROM pg_database WHERE datname = '${APP}'`)
-  if (known === '1') return
-  const hasRole = (await ask('postgres', `SELECT count(*) FROM pg_roles WHERE rolname = '${APP}'`)) === '1'
-  await ask('postgres', `${hasRole ? 'ALTER' : 'CREATE'} ROLE ${APP} LOGIN PASSWORD '${passwords.app}'`)
+  const known = await ask(
+    'postgres',
+    `SELECT rolname FROM pg_database JOIN pg_roles ON pg_roles.oid = datdba WHERE datname = '${APP}'`,
+  )
+  if (known === OWNER) return
+  const roles = await ask('postgres', 'SELECT rolname FROM pg_roles')
+  for (const [role, password] of [
+    [APP, passwords.app],
+    [OWNER, passwords.owner],
+  ]) {
+    const verb = roles.split('\n').includes(role) ? 'ALTER' : 'CREATE'
+    await ask('postgres', `${verb} ROLE ${role} LOGIN PASSWORD '${password}'`)
+  }
+  if (known !== '') return takeOver(ask)
   await ask('postgres', `DROP DATABASE IF EXISTS ${APP}_part`)
-  await ask('postgres', `CREATE DATABASE ${APP}_part OWNER ${APP}`)
+  await ask('postgres', `CREATE DATABASE ${APP}_part OWNER ${OWNER}`)
   await ask(`${APP}_part`, 'CREATE EXTENSION postgis')
   await ask('postgres', `ALTER DATABASE ${APP}_part RENAME TO ${APP}`)
+}
+
+/** Gives what the application's role owned in a database of an earlier version to the owner; the queue's own schema stays
+ *  the application's. */
+async function takeOver(ask) {
+  await ask(
+    APP,
+    `DO $$
+     DECLARE thing record;
+     BEGIN
+       FOR thing IN SELECT format('TABLE %I', tablename) AS name FROM pg_tables
+           WHERE schemaname = 'public' AND tableowner = '${APP}'
+         UNION ALL SELECT format('FUNCTION %s', oid::regprocedure) FROM pg_proc
+           WHERE pronamespace = 'public'::regnamespace AND proowner = '${APP}'::regrole
+       LOOP
+         EXECUTE format('ALTER %s OWNER TO ${OWNER}', thing.name);
+       END LOOP;
+     END $$`,
+  )
+  await ask('postgres', `ALTER DATABASE ${APP} OWNER TO ${OWNER}`)
 }
 
 async function query({ programs, port, password, database, sql }) {

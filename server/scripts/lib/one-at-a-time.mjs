@@ -20,7 +20,7 @@ export function holdFolder(dataFolder) {
 /** The number of a process that has ended may belong to another program now. */
 function isOurs(pid) {
   try {
-    return /server\/scripts\/(start|dev)\.mjs/.test(readFileSync(`/proc/${pid}/cmdline`, 'utf8'))
+    return /server\/scripts\/(start|dev|verify)\.mjs/.test(readFileSync(`/proc/${pid}/cmdline`, 'utf8'))
   } catch {
     return false
   }

@@ -35,7 +35,11 @@ export async function openDatabase() {
   try {
     const cluster = await startCluster({ dataFolder })
     return {
-      settings: { DATABASE_URL: cluster.url, SHEETWRIGHT_DEMO: process.env.SHEETWRIGHT_DEMO || '1' },
+      settings: {
+        DATABASE_URL: cluster.url,
+        DATABASE_OWNER_URL: cluster.ownerUrl,
+        SHEETWRIGHT_DEMO: process.env.SHEETWRIGHT_DEMO || '1',
+      },
       async stop() {
         await cluster.stop()
         letGo()

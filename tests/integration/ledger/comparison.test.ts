@@ -177,7 +177,7 @@ describe('what a comparison costs', () => {
        FROM generate_series(1, 20000) AS n`,
       [id],
     )
-    await dataSource.query('ANALYZE item_version')
+    await desk.server.asSuperuser('ANALYZE item_version')
     await desk.post(desk.editor, [put(aContact({}, randomUUID())), put(anAttitude())])
     const span = { sheetId: id, from: 1, to: 2 }
     const plans = await plansOf(dataSource, async (em) => {

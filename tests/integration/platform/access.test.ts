@@ -29,11 +29,10 @@ afterAll(() => server.close())
 
 /** Somebody with an account who belongs to no sheet. */
 async function signInStranger(): Promise<Agent> {
-  const { link } = await server.services.administration.invite({
-    email: 'stranger@merrow.example',
-    name: 'Sam Strand',
-    administrator: false,
-  })
+  const { link } = await server.services.administration.invite(
+    { email: 'stranger@merrow.example', name: 'Sam Strand', administrator: false },
+    null,
+  )
   const token = link.split('/').at(-1) ?? ''
   const password = 'quite a long password'
   await server.services.links.accept(token, {

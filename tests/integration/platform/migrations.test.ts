@@ -36,7 +36,7 @@ describe('migrations', () => {
 
   it('run once, also when several processes start together', async () => {
     const others = await Promise.all([1, 2, 3].map(() => createDataSource(database.url).initialize()))
-    await Promise.all(others.map(migrate))
+    await Promise.all(others.map((other) => migrate(other)))
     await Promise.all(others.map((other) => other.destroy()))
     const [row] = await dataSource.query<{ count: number }[]>(
       'SELECT count(*)::integer AS count FROM migrations',

@@ -153,7 +153,12 @@ describe('what nobody foresaw', () => {
   const app = express()
   app.use(logRequests(createLog('silent')))
   app.use((_request, response, next) => {
-    response.locals.context = { access: server.services.accounts, uploadFolder: folder, checkAnswers: true }
+    response.locals.context = {
+      access: server.services.accounts,
+      uploadFolder: folder,
+      checkAnswers: true,
+      noteDownload: () => Promise.resolve(),
+    }
     next()
   })
   serve(app, broken, () => {

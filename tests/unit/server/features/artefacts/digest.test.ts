@@ -1,5 +1,6 @@
 import { expect, it } from 'vitest'
-import { canonicalJson, revisionDigest } from '../../../../../server/features/artefacts/digest'
+import { revisionDigest } from '../../../../../server/features/artefacts/digest'
+import { canonicalJson } from '../../../../../server/platform/canonical-json'
 import { aPrintedSheet, mapItems, unitItems } from '../../../../support/printed-sheet'
 
 it('writes equal content as equal text, whatever the order of keys', () => {
