@@ -1,7 +1,7 @@
 import type { Metres } from '@shared/units'
 import { wave } from './curves'
 import type { Land } from './terrain'
-import { slope, type Surface } from './vectors'
+import type { Surface } from './vectors'
 
 /** What lies on the rock and hides it. The sea hides even what is known beneath. */
 export type CoverKind = 'sea' | 'alluvium' | 'peat' | 'talus'
@@ -43,17 +43,16 @@ const peat =
     const [x, y] = xy
     const swell = wave(x + 0.35 * y, 3900, 0.3) * wave(y - 0.25 * x, 5100, 1.9)
     const frayed =
-      0.17 * wave(x, 1430) * wave(y, 1190, 1) + 0.07 * wave(x + y, 710) + 0.12 * wave(x - y, 9100, 1)
+      0.17 * wave(x, 1430) * wave(y, 1190, 1) + 0.07 * wave(x + y, 710) + 0.2 * wave(x - y, 9100, 1)
     const edge = 0.25 * Math.exp(-((land.inland(xy) / 2500) ** 2))
     return swell + frayed + 0.75 * Math.min(1, land.fromValley(xy)) - edge - 1.27
   }
 
-/** Blocks at the foot of the steepest slopes. */
+/** Blocks on the sides of the great valleys, here and there. */
 const talus =
   (land: Land): Surface =>
   (xy) => {
     const [x, y] = xy
-    const steepness = Math.hypot(...slope(land.ground, xy, 140))
-    const patches = 0.1 * wave(x - 0.4 * y, 2700, 2) * wave(y + 0.4 * x, 2900, 0.5)
-    return steepness + patches - 0.475
+    const patches = wave(x - 0.4 * y, 2700, 2) * wave(y + 0.4 * x, 2900, 0.5) + 0.2 * wave(x + y, 890)
+    return land.flank(xy) + 0.55 * patches - 1.45
   }

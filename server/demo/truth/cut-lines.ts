@@ -1,6 +1,6 @@
 import type { Metres, XY } from '@shared/units'
 import type { Line } from './contours'
-import { ontoBothZero, type Surface } from './vectors'
+import { bisect, ontoBothZero, ontoZero, type Surface } from './vectors'
 
 /** A piece of a line on one side of a surface's zero, with the places where it was cut. */
 export interface Piece {
@@ -15,11 +15,11 @@ export function cutLine(line: Line, own: Surface, cutter: Surface): { pieces: Pi
   const nodes: XY[] = []
   let current: XY[] = []
   let positive = cutter(line[0] ?? [0, 0]) > 0
-  line.forEach((place, index) => {
+  withHiddenCrossings(line, own, cutter).forEach((place, index, places) => {
     const value = cutter(place)
-    const before = line[index - 1]
+    const before = places[index - 1]
     if (before && value > 0 !== positive) {
-      const node = ontoBothZero(own, cutter, between(before, place, cutter(before), value))
+      const node = nodeBetween(before, place, own, cutter)
       nodes.push(node)
       pieces.push({ line: [...current, node], positive })
       current = [node]
@@ -31,9 +31,27 @@ export function cutLine(line: Line, own: Surface, cutter: Surface): { pieces: Pi
   return { pieces: joinClosed(line, pieces), nodes }
 }
 
-function between(from: XY, to: XY, valueFrom: number, valueTo: number): XY {
-  const fraction = valueFrom / (valueFrom - valueTo)
-  return [from[0] + (to[0] - from[0]) * fraction, from[1] + (to[1] - from[1]) * fraction]
+/** The line with a further place in each piece whose middle lies across the cutter though both its ends do not. */
+function withHiddenCrossings(line: Line, own: Surface, cutter: Surface): Line {
+  return line.flatMap((place, index) => {
+    const next = line[index + 1]
+    if (!next) return [place]
+    const middle: XY = [(place[0] + next[0]) / 2, (place[1] + next[1]) / 2]
+    const [from, to, between] = [cutter(place) > 0, cutter(next) > 0, cutter(middle) > 0]
+    return from === to && between !== from ? [place, ontoZero(own, middle)] : [place]
+  })
+}
+
+/** Where a piece of a line of `own` passes the cutter's zero, near the piece and exactly on both. */
+function nodeBetween(from: XY, to: XY, own: Surface, cutter: Surface): XY {
+  const at = (share: number): XY => [from[0] + (to[0] - from[0]) * share, from[1] + (to[1] - from[1]) * share]
+  const [before, after] = [cutter(from), cutter(to)]
+  const start = at(before / (before - after))
+  const node = ontoBothZero(own, cutter, start)
+  const length = Math.hypot(to[0] - from[0], to[1] - from[1])
+  if (Math.hypot(node[0] - start[0], node[1] - start[1]) <= length) return node
+  // Where the two nearly touch, Newton's method may run off to another place at which they meet.
+  return ontoZero(own, at(bisect((share) => cutter(ontoZero(own, at(share))), 0, 1)))
 }
 
 /** The first and last piece of a closed line are one piece if the line was cut at all. */

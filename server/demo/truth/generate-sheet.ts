@@ -13,6 +13,7 @@ import { PointItems } from './point-items'
 import { seededRandom } from './random'
 import { cellsNear, rasterize } from './raster'
 import { axisDirection, beddingNormal, dipAt, FreePlaces, type Measured, type Station } from './stations'
+import { labelsForRest, withoutSlivers } from './tidy'
 import type { Truth } from './truth'
 import { legendUnits } from './units'
 
@@ -59,11 +60,14 @@ const CLEAR: Metres = 90
 export function generateSheet(options: SheetOptions): DemoSheet {
   const { seed, truth, extent, apart, noise = noNoise, cells = { lines: 40, areas: 25 } } = options
   const bounds = new MapBounds(truth, layLattice(extent, cells.lines, truth.ground))
-  const { lines, leftOut } = makeLinework(bounds)
+  const linework = makeLinework(bounds)
+  const { lines, leftOut: slivers } = withoutSlivers(linework.lines, extent)
   const traces = makeTraces(bounds)
   const raster = rasterize(bounds, cells.areas)
   const across = [...traces.map(({ line }) => line), ...lines.filter(boundsNothing).map(({ line }) => line)]
-  const labels = makeLabels(bounds, raster, across, leftOut)
+  const leftOut = [...linework.leftOut, ...slivers]
+  const found = makeLabels(bounds, raster, across, leftOut)
+  const labels = [...found, ...labelsForRest(bounds, lines, found, leftOut)]
   const near = cellsNear(raster, across, Math.round(CLEAR / cells.areas))
   const places = new FreePlaces(truth, raster, near, CLEAR, seededRandom(seed + 1), apart)
   for (const { at } of labels) places.occupy(at)

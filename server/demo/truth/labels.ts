@@ -14,12 +14,14 @@ export interface Label {
 const BETWEEN_LABELS: Metres = 3200
 /** A place for a label that is free of the area's edge. */
 const CLEAR: Metres = 130
+/** Areas of fewer cells may be patches so small that no line was drawn around them. */
+const FEWEST_CELLS = 4
 /** Least distance of any label from its area's edge: drawn lines depart a little from the true ones. */
 const WITHIN: Metres = 5
 /** Labels stand at least so far from lines that cross their area. */
 const OFF_LINES: Metres = 130
 
-/** At least one label in each area, as far from the area's edge as can be.
+/** At least one label in each area of some size, as far from the area's edge as can be.
  *  @param lines traces, dikes and marker beds, beside which no label stands if that can be helped
  *  @param leftOut closed lines that are not drawn */
 export function makeLabels(
@@ -41,6 +43,7 @@ export function makeLabels(
   }
   const near = cellsNear(raster, lines, Math.round(OFF_LINES / raster.cell))
   return areasOf(raster).flatMap((cells) => {
+    if (cells.length < FEWEST_CELLS) return []
     const free = cells.filter((cell) => !leftOut.some((ring) => isInside(ring, raster.centreOf(cell))))
     return spread(raster, near, free, isWithin).map((cell) => ({
       at: raster.centreOf(cell),

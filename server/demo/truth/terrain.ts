@@ -10,6 +10,8 @@ export interface Land {
   inland(xy: XY): Metres
   /** Place across the great valleys: 0 on a valley's middle line, 1 on the divide. */
   fromValley(xy: XY): number
+  /** How high the side of a great valley rises at a place, about 0 to 1; highest halfway up. */
+  flank(xy: XY): number
   /** Distance along the coast, by which one valley differs from another, metres. */
   alongCoast(xy: XY): Metres
 }
@@ -50,6 +52,10 @@ export function land(axes: FoldAxes): Land {
   return {
     inland,
     fromValley: (xy) => Math.abs(valleyPhase(...axes.toOwn(xy))),
+    flank(xy) {
+      const sine = valleyPhase(...axes.toOwn(xy))
+      return 2 * Math.abs(sine) * Math.sqrt(1 - sine * sine)
+    },
     alongCoast: (xy) => axes.toOwn(xy)[0],
     ground(xy) {
       const [along, across] = axes.toOwn(xy)

@@ -7,10 +7,10 @@ export type Surface = (xy: XY) => number
 const STEP: Metres = 0.05
 
 /** Slope of a surface toward east and north, by central differences. */
-export function slope(surface: Surface, [x, y]: XY, step: Metres = STEP): XY {
+export function slope(surface: Surface, [x, y]: XY): XY {
   return [
-    (surface([x + step, y]) - surface([x - step, y])) / (2 * step),
-    (surface([x, y + step]) - surface([x, y - step])) / (2 * step),
+    (surface([x + STEP, y]) - surface([x - STEP, y])) / (2 * STEP),
+    (surface([x, y + STEP]) - surface([x, y - STEP])) / (2 * STEP),
   ]
 }
 
