@@ -81,8 +81,8 @@ const sampleLines: Record<LineationCase, { trend: number | null; plunge: number 
   vertical: { trend: null, plunge: 90 },
 }
 /** A plane that lies along the row, and a line on it. */
-const samplePlane = { strike: 75, dip: 40, overturned: false }
-const sampleLineOnPlane = { trend: 105, plunge: 23 }
+const samplePlane = { strike: 60, dip: 40, overturned: false }
+const sampleLineOnPlane = { trend: 105, plunge: 31 }
 
 type DescribedLine = ItemOf<'lineation'>['properties']
 const lineationId = (line: Pick<DescribedLine, 'type' | 'trend' | 'plunge' | 'plane'>): string =>
