@@ -58,7 +58,8 @@ function recordingSurface(): Surface & { steps: Step[] } {
 /** Draws it where its origin falls in the view.
  *  @param pxPerMm size of the list's millimetre on screen, px
  *  @param ratio device pixels per px
- *  @param patternPxPerMm size of a pattern's millimetre, px, where patterns do not shrink and grow with the ground */
+ *  @param pattern size of a pattern's millimetre, px, where patterns do not shrink and grow with the ground, and whether they
+ *  must be made for just this size */
 export function drawDrawing(
   context: CanvasRenderingContext2D,
   drawing: Drawing,
@@ -66,8 +67,13 @@ export function drawDrawing(
     view,
     pxPerMm,
     ratio,
-    patternPxPerMm,
-  }: { view: ViewFrame; pxPerMm: number; ratio: number; patternPxPerMm?: number },
+    pattern,
+  }: {
+    view: ViewFrame
+    pxPerMm: number
+    ratio: number
+    pattern?: { pxPerMm: number; settle: boolean }
+  },
 ): void {
   const [x, y] = toPx(view, drawing.origin)
   const scale = pxPerMm * ratio
@@ -85,7 +91,10 @@ export function drawDrawing(
         }
         break
       case 'tile':
-        fillTiled(context, step.tiling, step.path, patternPxPerMm && patternPxPerMm * ratio)
+        fillTiled(context, step.tiling, {
+          path: step.path,
+          ...(pattern ? { scale: pattern.pxPerMm * ratio, settle: pattern.settle } : {}),
+        })
         break
       case 'text':
         // Letters would stand on their heads in a frame with y up.

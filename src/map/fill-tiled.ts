@@ -1,6 +1,6 @@
 import type { Tiling } from '@shared/symbols/interpreter'
 import { canvasPaths } from './canvas-paths'
-import { LONGEST_SIDE, tilePicture } from './tile-pictures'
+import { LONGEST_CELL, readyPicture, tilePicture } from './tile-pictures'
 
 /** How the cells lie on a canvas, device pixels. */
 interface Laid {
@@ -15,12 +15,12 @@ interface Laid {
 /** Fills a path with a tiling, its cells in whole device pixels: as crisp as its marks drawn one by one. The pattern hangs
  *  on the tiling's corner, so areas of one anchor share it without a break, and it moves with the sheet pixel by pixel.
  *  @param path the path; without one, the context's current path
- *  @param scale device pixels to the tiling's unit where they are not the context's own */
+ *  @param scale device pixels to the tiling's unit where they are not the context's own
+ *  @param settle false where a picture made for another size will do for now, stretched */
 export function fillTiled(
   context: CanvasRenderingContext2D,
   tiling: Tiling,
-  path?: Path2D,
-  scale?: number,
+  { path, scale, settle = true }: { path?: Path2D; scale?: number; settle?: boolean } = {},
 ): void {
   const { a, d, e, f } = context.getTransform()
   const laid: Laid = {
@@ -28,7 +28,7 @@ export function fillTiled(
     scale: scale ?? Math.abs(a),
     flip: d < 0,
   }
-  if (Math.max(tiling.width, tiling.height) * laid.scale > LONGEST_SIDE) {
+  if (Math.max(tiling.width, tiling.height) * laid.scale > LONGEST_CELL) {
     context.save()
     if (path) context.clip(path, 'evenodd')
     else context.clip('evenodd')
@@ -36,13 +36,15 @@ export function fillTiled(
     context.restore()
     return
   }
-  const picture = tilePicture(tiling, laid.scale, laid.flip)
+  const ready = settle ? undefined : readyPicture(tiling, laid.flip)
+  const picture = ready ?? tilePicture(tiling, laid.scale, laid.flip)
   if (!picture) return
+  const stretch = ready ? laid.scale / ready.scale : 1
   const left = Math.round(laid.corner.x)
-  const top = Math.round(laid.flip ? laid.corner.y - picture.height : laid.corner.y)
+  const top = Math.round(laid.flip ? laid.corner.y - picture.height * stretch : laid.corner.y)
   // The context's own scale must not stretch the picture: it is undone.
-  picture.pattern.setTransform({ a: 1 / a, d: 1 / d, e: (left - e) / a, f: (top - f) / d })
-  context.imageSmoothingEnabled = false
+  picture.pattern.setTransform({ a: stretch / a, d: stretch / d, e: (left - e) / a, f: (top - f) / d })
+  context.imageSmoothingEnabled = stretch !== 1
   context.fillStyle = picture.pattern
   if (path) context.fill(path, 'evenodd')
   else context.fill('evenodd')

@@ -38,7 +38,8 @@ export function* paintSheet(
     const drawing = paint.isFaceHidden(face.unit) ? undefined : scene.areaOf(face)
     if (!drawing) continue
     const pxPerMm = groundPxPerMm(view, drawing.mmPerMetre)
-    drawDrawing(context, drawing, { view, pxPerMm, ratio, patternPxPerMm: symbolPx })
+    const pattern = { pxPerMm: symbolPx, settle: paint.settle }
+    drawDrawing(context, drawing, { view, pxPerMm, ratio, pattern })
     yield
   }
   const notReady: LineItem[] = []

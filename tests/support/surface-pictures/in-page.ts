@@ -29,7 +29,12 @@ export function drawInView(
   const drawing = makeDrawing(list, { origin: [0, 0], mmPerMetre: 1 })
   // One metre to the millimetre: the view's place and scale are then those of the list.
   const view = { ...size, center: at, pxPerMetre: pxPerMm }
-  drawDrawing(context, drawing, { view, pxPerMm, ratio: 1, patternPxPerMm })
+  drawDrawing(context, drawing, {
+    view,
+    pxPerMm,
+    ratio: 1,
+    pattern: { pxPerMm: patternPxPerMm, settle: true },
+  })
   return canvas.toDataURL('image/png')
 }
 
