@@ -15,6 +15,9 @@ const PROGRAMS = {
   pdfinfo: 'poppler-utils',
   pdffonts: 'poppler-utils',
   pdftoppm: 'poppler-utils',
+  gdalinfo: 'gdal-bin',
+  gdallocationinfo: 'gdal-bin',
+  ogrinfo: 'gdal-bin',
   pdftocairo: 'poppler-utils',
 }
 

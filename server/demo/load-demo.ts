@@ -2,10 +2,12 @@ import type { DataSource, EntityManager } from 'typeorm'
 import type { Role } from '@shared/api/accounts'
 import type { LedgerService, ServerEntry } from '../features/ledger/ledger.service'
 import type { SheetsService } from '../features/sheets/sheets.service'
+import type { Storage } from '../platform/storage'
 import { Account } from '../features/accounts/account.entity'
 import { Membership } from '../features/accounts/membership.entity'
 import { SheetRow } from '../features/sheets/sheet.entity'
-import { gannetHead, makeSheet, merrowSheets, type MerrowSheet } from './merrow-island'
+import { gannetHead, makeSheet, merrowSheets, merrowTruth, type MerrowSheet } from './merrow-island'
+import { terrainFile } from './terrain-file'
 import { longStory, shortStory, type Chapter } from './story'
 
 /** What the demo is loaded through. */
@@ -13,6 +15,7 @@ export interface DemoServices {
   dataSource: DataSource
   sheets: SheetsService
   ledger: LedgerService
+  storage: Storage
 }
 
 const HOUR_MS = 3_600_000
@@ -21,8 +24,20 @@ const DEMO_LOCK = 4_310_014
 
 type People = Record<Role | 'administrator', string>
 
-/** Makes the demo sheets with their members and their ledgers, unless they are there. The demo accounts must exist. */
+/** Makes the demo sheets with their members, ledgers and elevation models, unless they are there. The demo accounts must exist. */
 export async function loadDemo(services: DemoServices): Promise<void> {
+  await loadSheets(services)
+  for (const { sheet, extent } of merrowSheets) {
+    const key = terrainKey(sheet.number)
+    if (await services.storage.has(key)) continue
+    await services.storage.put(key, terrainFile(merrowTruth.ground, extent))
+  }
+}
+
+/** Where a demo sheet's elevation model lies in the storage. */
+export const terrainKey = (sheetNumber: string): string => `demo/terrain/${sheetNumber}.tif`
+
+async function loadSheets(services: DemoServices): Promise<void> {
   await services.dataSource.transaction(async (em) => {
     await em.query('SELECT pg_advisory_xact_lock($1)', [DEMO_LOCK])
     const people: People = {
