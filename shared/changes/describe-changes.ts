@@ -1,4 +1,6 @@
 import { isLineItem, itemWord, kindWords, lineKinds, type Item, type ItemKind } from '../items/item'
+import { carryingPlaneSchema } from '../items/points'
+import { formatAttitude } from '../structure/attitude-words'
 import type { Edit } from './change-set'
 import { changedFields, changedPlace } from './compare-items'
 
@@ -126,6 +128,8 @@ export function valueWords(value: unknown): string {
   if (value === null || value === undefined || value === '') return 'none'
   if (typeof value === 'boolean') return value ? 'yes' : 'no'
   if (typeof value === 'number') return String(value)
+  const plane = carryingPlaneSchema.safeParse(value).data
+  if (plane) return `${plane.type} ${formatAttitude(plane, 'strike-dip')}`
   const text = typeof value === 'string' ? value : JSON.stringify(value)
   return text.length > LONGEST_VALUE ? `${text.slice(0, LONGEST_VALUE - 1)}…` : text
 }

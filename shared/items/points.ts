@@ -52,7 +52,7 @@ export const lineationReadingSchema = readingSchema.extend({ convention: z.enum(
 export type LineationReading = z.infer<typeof lineationReadingSchema>
 
 /** The plane that a lineation lies on. */
-const carryingPlaneSchema = z
+export const carryingPlaneSchema = z
   .strictObject({
     type: z.enum(planeTypes).default('foliation'),
     /** As an attitude's: null only for a horizontal plane. */

@@ -16,3 +16,10 @@ it('says in the ledger what kind of place was placed', () => {
   expect(describeChanges([{ before: null, after: spring }])).toBe('placed 1 spring Cold Well')
   expect(describeChanges([{ before: spring, after: null }])).toBe('removed 1 spring Cold Well')
 })
+
+it('says in the ledger which plane a line lies on', () => {
+  const line = aPoint('lineation', [0, 0], { trend: 10, plunge: 5, station: '14' })
+  const plane = { type: 'cleavage', strike: 45, dip: 40, overturned: false } as const
+  const after = { ...line, properties: { ...line.properties, plane } }
+  expect(describeChanges([{ before: line, after }])).toBe('plane of lineation 14: none → cleavage 045/40')
+})
