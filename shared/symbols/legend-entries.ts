@@ -86,12 +86,12 @@ interface Size {
   height: Millimetres
 }
 
-/** The sample of an entry at its true size, in a box with its origin at the lower left: a line across its middle, a point at
- *  its centre. What is higher or wider than the box is not cut. */
+/** The sample of an entry at its true size, in a box with its origin at the lower left: a point at its centre, a line across
+ *  its middle, or as far off it as what stands on one side needs. What is higher or wider than the box is not cut. */
 export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
   if (isPointEntry(entry)) return centred(drawPointEntry(entry), size)
   const middle = size.height / 2
-  return drawLine(
+  const list = drawLine(
     lineSymbolOf(entry),
     [
       [0, middle],
@@ -103,6 +103,10 @@ export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
       attributes: { side: 1 },
     },
   )
+  const box = boundsOf(list)
+  if (!box) return list
+  const [over, under] = [Math.max(0, box.y + box.height - size.height), Math.max(0, -box.y)]
+  return over === under ? list : placeMarks(list, ([x, y]) => [x, y + under - over])
 }
 
 const isPointEntry = (entry: LegendEntry): entry is PointEntry => entry.group === 'points'
