@@ -117,9 +117,12 @@ function describeFields(before: Item, after: Item): string {
   return [...words, ...(more > 0 ? [`${more} more fields`] : [])].join(', ')
 }
 
+/** Fields whose name is no word for what they say. */
+const fieldNames: Partial<Record<string, string>> = { doubly: 'double plunge' }
+
 /** locationConfidence → location confidence. */
 export const fieldWords = (key: string): string =>
-  key.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`)
+  fieldNames[key] ?? key.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`)
 
 const LONGEST_VALUE = 60
 

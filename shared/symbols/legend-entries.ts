@@ -13,6 +13,7 @@ import { lineSymbolOf, lineSymbols } from './draw-item'
 import { drawLine } from './draw-line'
 import type { LegendEntry, LegendKind, PointEntry } from './legend-entry'
 import { boundsOf, placeMarks } from './place-marks'
+import { keptInRow } from './sample-row'
 import { drawPointEntry, pointEntries, pointEntryIdOf } from './point-entries'
 
 export type { LegendEntry, LegendKind } from './legend-entry'
@@ -103,10 +104,7 @@ export function drawEntry(entry: LegendEntry, size: Size): DisplayList {
       attributes: { side: 1 },
     },
   )
-  const box = boundsOf(list)
-  if (!box) return list
-  const [over, under] = [Math.max(0, box.y + box.height - size.height), Math.max(0, -box.y)]
-  return over === under ? list : placeMarks(list, ([x, y]) => [x, y + under - over])
+  return keptInRow(list, size.height)
 }
 
 const isPointEntry = (entry: LegendEntry): entry is PointEntry => entry.group === 'points'

@@ -1,9 +1,11 @@
 import type { Item, LineItem } from '../items/item'
 import type { Millimetres, MM } from '../units'
+import type { LineSymbol } from './definition'
 import type { DisplayList } from './display-list'
 import { lineSymbols } from './draw-item'
 import { drawLine } from './draw-line'
 import type { LineDrawing } from './line-drawing'
+import { keptInRow } from './sample-row'
 
 /** Something that may stand on lines of several symbols and is explained once for all of them. */
 export interface LineMark {
@@ -104,10 +106,14 @@ export function drawMark(
         [0, height / 2],
         [width, height / 2],
       ]
-  return drawLine(symbol, line, {
+  // The mark alone: what the symbol itself shows has its own row.
+  const plain: LineSymbol = { ...symbol }
+  delete plain.decoration
+  const list = drawLine(plain, line, {
     locationConfidence: 'certain',
     identity: 'certain',
     attributes: { side: -1 },
     ...drawing,
   })
+  return keptInRow(list, height)
 }
