@@ -12,9 +12,6 @@ export interface NumeralType {
   gap: Millimetres
 }
 
-/** Finest step in which a figure is moved out until it is clear. */
-const STEP: Millimetres = 0.05
-
 /** A figure would sooner stand twice as far away than be turned by this. */
 const TURN_AS_FAR: Degrees = 90
 
@@ -33,23 +30,19 @@ export interface NumeralPlace {
 
 /** An upright figure beside a symbol: as near to `from` as its ink allows, straight away from it in one direction. */
 export function numeralBeside(text: string, place: NumeralPlace, type: NumeralType & { ink: Ink }): TextMark {
-  const { from, ink, furthest, turns = [0] } = place
+  const { from, furthest, turns = [0] } = place
   const half: MM = [measureText(text, type.size, type.weight) / 2, capHeight(type.size, type.weight) / 2]
-  const lines = inkPoints(ink)
-  const isClear = (middle: MM): boolean =>
-    lines.every(({ points, halfWidth }) => {
-      const box: MM = [half[0] + type.gap + halfWidth, half[1] + type.gap + halfWidth]
-      return points.every((point, index) => !crossesBox(points[index - 1] ?? point, point, middle, box))
-    })
+  const pieces = inkPoints(place.ink).flatMap(({ points, halfWidth }) =>
+    points.map((to, index): Piece => {
+      const grown: MM = [half[0] + type.gap + halfWidth, half[1] + type.gap + halfWidth]
+      return { from: points[index - 1] ?? to, to, half: grown }
+    }),
+  )
   const ways = turns.map((turn) => {
     const away = turnTo(turn, [0, 0])(place.away)
-    const pointAt = (distance: Millimetres): MM => [
-      from[0] + away[0] * distance,
-      from[1] + away[1] * distance,
-    ]
-    let distance = type.gap
-    while (distance < furthest && !isClear(pointAt(distance))) distance += STEP
-    return { at: pointAt(distance), effort: distance * (1 + Math.abs(turn) / TURN_AS_FAR) }
+    const distance = Math.min(furthest, firstClear(pieces, { from, away }, type.gap))
+    const at: MM = [from[0] + away[0] * distance, from[1] + away[1] * distance]
+    return { at, effort: distance * (1 + Math.abs(turn) / TURN_AS_FAR) }
   })
   const [first] = ways.toSorted((a, b) => a.effort - b.effort)
   return {
@@ -63,19 +56,58 @@ export function numeralBeside(text: string, place: NumeralPlace, type: NumeralTy
   }
 }
 
-/** Whether a straight piece enters a box, by clipping it against the box's four sides. Source: Liang and Barsky 1984. */
-export function crossesBox(a: MM, b: MM, middle: MM, half: MM): boolean {
-  let [enter, leave] = [0, 1]
-  for (const axis of [0, 1] as const) {
-    const start = a[axis] - middle[axis]
-    const run = b[axis] - a[axis]
+/** A straight piece of ink, and half the box of a figure with its white space and half the stroke. */
+interface Piece {
+  from: MM
+  to: MM
+  half: MM
+}
+
+/** A way out from a place, by a unit vector. */
+interface Way {
+  from: MM
+  away: MM
+}
+
+/** The least distance along a way, from `least` on, at which a figure meets no piece. */
+function firstClear(pieces: readonly Piece[], way: Way, least: Millimetres): Millimetres {
+  const blocks = pieces.flatMap((piece) => {
+    const block = blockOf(piece, way)
+    return block ? [block] : []
+  })
+  let distance = least
+  for (const [enter, leave] of blocks.toSorted((a, b) => a[0] - b[0])) {
+    if (enter >= distance) return distance
+    distance = Math.max(distance, leave)
+  }
+  return distance
+}
+
+/** From which to which distance along a way a figure's box meets a piece; undefined where it never does. It meets it while
+ *  the figure's middle is inside the piece grown by the box, a convex hexagon, which a straight way crosses once.
+ *  Source: Minkowski sum, derived; clipping between pairs of sides as by Liang and Barsky 1984. */
+function blockOf(
+  { from: a, to: b, half }: Piece,
+  { from, away }: Way,
+): [Millimetres, Millimetres] | undefined {
+  let [enter, leave] = [-Infinity, Infinity]
+  for (const [x, y] of [
+    [1, 0],
+    [0, 1],
+    [a[1] - b[1], b[0] - a[0]],
+  ] as const) {
+    if (x === 0 && y === 0) continue
+    const reach = Math.abs(x) * half[0] + Math.abs(y) * half[1]
+    const [first, second] = [x * a[0] + y * a[1], x * b[0] + y * b[1]]
+    const [low, high] = [Math.min(first, second) - reach, Math.max(first, second) + reach]
+    const [start, run] = [x * from[0] + y * from[1], x * away[0] + y * away[1]]
     if (run === 0) {
-      if (Math.abs(start) >= half[axis]) return false
+      if (start <= low || start >= high) return undefined
       continue
     }
-    const [first, second] = [(-half[axis] - start) / run, (half[axis] - start) / run]
-    enter = Math.max(enter, Math.min(first, second))
-    leave = Math.min(leave, Math.max(first, second))
+    const [one, other] = [(low - start) / run, (high - start) / run]
+    enter = Math.max(enter, Math.min(one, other))
+    leave = Math.min(leave, Math.max(one, other))
   }
-  return enter < leave || (a[0] === b[0] && a[1] === b[1])
+  return enter < leave ? [enter, leave] : undefined
 }
