@@ -3,7 +3,7 @@ import type { Box } from '../geometry/box'
 import { boxAround, boxesMeet, edgeMeetsBox, grown, isInRings } from '../geometry/box-edges'
 import type { ItemOf } from '../items/item'
 import type { UnitProperties } from '../items/legend'
-import { unitLabelSize, unitLabelText, type LabelStand } from '../symbols/draw-unit-label'
+import { leaderStart, unitLabelSize, unitLabelText, type LabelStand } from '../symbols/draw-unit-label'
 import { toMm, type DrawingFrame } from '../symbols/frame'
 import type { Millimetres, MM } from '../units'
 
@@ -15,6 +15,8 @@ const AIR: Millimetres = 0.35
 const REACH = { within: 7, outside: 14 } as const
 const STEP: Millimetres = 0.8
 const DIRECTIONS = 16
+/** Shortest leader that is seen as one. */
+const LEAST_LEADER: Millimetres = 2
 /** What a place outside the area costs beside its distance: for each boundary and each other label beneath the letters, and
  *  for lying in no area, as off the sheet. */
 const COST = { boundary: 4, letters: 25, offSheet: 40 } as const
@@ -38,8 +40,9 @@ export function standLabels(
   const areas = faces.map((face) => areaOf(face, frame))
   const letters = labels.map((label) => {
     const place = toMm(frame, label.geometry.coordinates)
-    const size = unitLabelSize(unitLabelText(label.properties, unitOf))
-    return { id: label.id, place, size, box: grown(boxAround(place, size), AIR) }
+    const text = unitLabelText(label.properties, unitOf)
+    const size = unitLabelSize(text)
+    return { id: label.id, text, place, size, box: grown(boxAround(place, size), AIR) }
   })
   const moved = new Map<string, LabelStand>()
   for (const each of letters) {
@@ -100,6 +103,7 @@ function offsets(from: Millimetres, to: Millimetres): MM[] {
 }
 
 interface Letters {
+  text: string
   place: MM
   size: { width: Millimetres; height: Millimetres }
 }
@@ -114,17 +118,24 @@ function within(letters: Letters, area: Area, taken: readonly Box[]): LabelStand
   return offset && { offset, leader: false }
 }
 
+/** From the letters, about a middle, to their place. */
+function leaderLength({ text, place }: Letters, middle: MM): Millimetres {
+  const [x, y] = leaderStart(text, middle, place)
+  return Math.hypot(x - place[0], y - place[1])
+}
+
 /** The place outside that covers least; without any, the letters stay where they are. */
 function outside(letters: Letters, area: Area, areas: readonly Area[], taken: readonly Box[]): LabelStand {
   const window = grown(boxAt(letters, [0, 0]), REACH.outside)
   const nearAreas = areas.filter(({ box }) => boxesMeet(box, window))
   const nearLetters = taken.filter((box) => boxesMeet(box, window))
   let best: { offset: MM; cost: number } | undefined
-  for (const offset of offsets(letters.size.height * 1.5, REACH.outside)) {
+  for (const offset of offsets(letters.size.height, REACH.outside)) {
     const distance = Math.hypot(...offset)
     if (best && distance >= best.cost) break
     const box = boxAt(letters, offset)
     const middle = shift(letters.place, offset)
+    if (leaderLength(letters, middle) < LEAST_LEADER) continue
     if (isInRings(area.rings, middle) || edgesThrough(area, box) > 0) continue
     const boundaries = nearAreas.filter((other) => edgesThrough(other, box) > 0).length
     const covered = nearLetters.filter((other) => boxesMeet(other, box)).length

@@ -18,6 +18,11 @@ export interface LabelStand {
 /** Line of a leader, the dot it ends with in the area, and the air between it and the letters. */
 const leaderType = { width: 0.16, dot: 0.32, gap: 0.5 } as const
 
+/** Where a leader to a label's place leaves its letters.
+ *  @param at middle of the letters */
+export const leaderStart = (text: string, at: MM, place: MM): MM =>
+  leaveBox(grown(boxAround(at, unitLabelSize(text)), leaderType.gap), place)
+
 /** The letters of a label: its unit's, queried where they are doubted; `?` where the unit is gone. */
 export function unitLabelText(
   { unit, identity }: ItemOf<'unit-label'>['properties'],
@@ -47,7 +52,7 @@ export function drawUnitLabel(text: string, place: MM, stand?: LabelStand): Disp
     halo: unitLabelType.halo,
   }
   if (!stand?.leader) return [letters]
-  const from = leaveBox(grown(boxAround(at, unitLabelSize(text)), leaderType.gap), place)
+  const from = leaderStart(text, at, place)
   return [
     { mark: 'stroke', path: polyline([from, place]), width: leaderType.width, ink: 'black' },
     { mark: 'fill', path: circle(place, leaderType.dot), ink: 'black' },

@@ -59,6 +59,10 @@ describe('where the letters of a unit stand', () => {
     const box = boxOf([15, 15], stand)
     expect(boxesMeet(box, { x: 14, y: 14, width: 2, height: 2 })).toBe(false)
     expect(Math.hypot(...(stand?.offset ?? [99, 99]))).toBeLessThan(8)
+    const [leader] = drawUnitLabel('Dr', [15, 15], stand)
+    const [from] = leader?.mark === 'stroke' ? leader.path : []
+    // Long enough to be seen as one.
+    expect(Math.hypot(Number(from?.[1]) - 15, Number(from?.[2]) - 15)).toBeGreaterThanOrEqual(2)
   })
 
   it('is on no boundary and no other letters, if there is room beside them', () => {
