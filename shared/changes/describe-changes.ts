@@ -1,8 +1,9 @@
 import { isLineItem, itemWord, kindWords, lineKinds, type Item, type ItemKind } from '../items/item'
 import { carryingPlaneSchema } from '../items/points'
+import { reversedLine } from '../items/reversed-line'
 import { formatAttitude } from '../structure/attitude-words'
 import type { Edit } from './change-set'
-import { changedFields, changedPlace } from './compare-items'
+import { changedFields, changedPlace, type FieldChange } from './compare-items'
 
 const LONGEST = 300
 
@@ -66,11 +67,17 @@ function describeGroup({ kind, did, edits }: Group): string {
     : `${did} ${counted(edits.length, kind)}`
 }
 
+/** Fields that were changed; of a line that was turned round, those that say something else of the ground than before. */
+function fieldsChanged(before: Item, after: Item): FieldChange[] {
+  const isReversed = isLineItem(before) && changedPlace(before, after)?.how === 'reversed'
+  return changedFields(isReversed ? reversedLine(before) : before, after)
+}
+
 function whatWasDone({ before, after }: Edit, kind: ItemKind): string {
   if (!before) return verbOfAdding(kind)
   if (!after) return 'removed'
   const place = changedPlace(before, after)
-  const fields = changedFields(before, after)
+  const fields = fieldsChanged(before, after)
   if (place) return fields.length > 0 ? `${place.how} and changed` : place.how
   const told = toldOf(fields)
   return told.length === 1 && told[0] ? `changed ${fieldWords(told[0].field)} of` : 'changed'
@@ -105,7 +112,7 @@ const toldOf = <F extends { field: string }>(fields: readonly F[]): readonly F[]
 const MOST_FIELDS = 3
 
 function describeFields(before: Item, after: Item): string {
-  const told = toldOf(changedFields(before, after))
+  const told = toldOf(fieldsChanged(before, after))
   const words = told
     .slice(0, MOST_FIELDS)
     .map(({ field, before: from, after: to }) =>

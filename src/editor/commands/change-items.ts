@@ -1,9 +1,8 @@
 import type { Edit } from '@shared/changes/change-set'
-import { isLineItem, type Item, type LineItem } from '@shared/items/item'
-import { otherSide, reversedSide } from '@shared/items/lines'
+import { isLineItem, type Item } from '@shared/items/item'
+import { reversedLine } from '@shared/items/reversed-line'
 import { drafted, refused, type Drafted, type EditorView } from './change-draft'
 import { itemsWord } from './item-words'
-import { withLine } from './line-nodes'
 
 const existing = (view: EditorView, ids: readonly string[]): Item[] =>
   ids.flatMap((id) => view.item(id) ?? [])
@@ -43,17 +42,6 @@ export function reverseLines(view: EditorView, ids: readonly string[]): Drafted 
   if (lines.length === 0) return refused('Select a line to reverse it.')
   return drafted(
     `reversed ${itemsWord(lines)}`,
-    lines.map((before) => ({ before, after: reversed(before) })),
+    lines.map((before) => ({ before, after: reversedLine(before) })),
   )
-}
-
-function reversed(item: LineItem): LineItem {
-  const turned = withLine(item, item.geometry.coordinates.toReversed())
-  if (turned.kind === 'fault') {
-    return { ...turned, properties: { ...turned.properties, side: reversedSide(turned.properties) } }
-  }
-  if (turned.kind === 'axial-trace') {
-    return { ...turned, properties: { ...turned.properties, side: otherSide(turned.properties.side) } }
-  }
-  return turned
 }

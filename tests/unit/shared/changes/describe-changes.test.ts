@@ -80,6 +80,13 @@ describe('describeChanges', () => {
     expect(to([[1, 1], [10, 3], path[2] ?? []])).toBe('moved 2 vertices of contact')
     expect(to([...path, [30, 5]])).toBe('reshaped contact')
     expect(to(path.toReversed())).toBe('reversed contact')
+    // Its side is renamed so that it names the same ground: nothing that a person did.
+    const fault = (side: string, coordinates: number[][]) =>
+      line('fault', coordinates, { type: 'normal', side }, id)
+    const turned = (side: string) =>
+      describeChanges([{ before: fault('left', path), after: fault(side, path.toReversed()) }])
+    expect(turned('right')).toBe('reversed fault')
+    expect(turned('left')).toBe('reversed fault; side of fault: right → left')
   })
 
   it('says when a point has moved', () => {

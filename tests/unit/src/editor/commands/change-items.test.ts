@@ -50,6 +50,13 @@ describe('reversing a line', () => {
     })
   })
 
+  it('renames the side of a fold, and keeps that of a rotational fault, whose start moves to the other end', () => {
+    expect(afterOf(reverseLines(view, [axis.id]))?.properties).toMatchObject({ side: 'left' })
+    const rotational = { ...fault, properties: { ...fault.properties, type: 'rotational' as const } }
+    const turned = afterOf(reverseLines({ item: () => rotational }, [fault.id]))
+    expect(turned?.properties).toMatchObject({ side: 'left' })
+  })
+
   it('twice gives the line as it was', () => {
     const once = afterOf(reverseLines(view, [fault.id]))
     const twice = afterOf(reverseLines({ item: () => once ?? undefined }, [fault.id]))
