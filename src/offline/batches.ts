@@ -89,6 +89,12 @@ export function decideItems(
   return [settled, ...later].filter((batch) => batch.edits.length > 0)
 }
 
+/** Batches without the edits of some items; empty batches go. */
+export const dropItems = (batches: readonly Batch[], ids: ReadonlySet<string>): Batch[] =>
+  batches
+    .map((batch) => ({ ...batch, edits: batch.edits.filter((edit) => !ids.has(editedId(edit))) }))
+    .filter((batch) => batch.edits.length > 0)
+
 /** All ids that batches touch. */
 export const touchedIds = (batches: readonly Batch[]): string[] => [
   ...new Set(batches.flatMap((batch) => batch.edits.map(editedId))),

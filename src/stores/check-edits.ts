@@ -1,4 +1,5 @@
 import { editedId, type Edit } from '@shared/changes/change-set'
+import { findUnreachable, unreachableSentence } from '@shared/items/find-unreachable'
 import { itemSchema, type Item } from '@shared/items/item'
 import { snapItem } from '@shared/items/snap-item'
 
@@ -10,10 +11,12 @@ export interface EditError {
   detail: string
 }
 
-/** Edits as they may be stored: snapped, checked with the items' schemas, and on top of what is shown now. */
+/** Edits as they may be stored: snapped, checked with the items' schemas, within reach of the sheet's system where one is
+ *  given, and on top of what is shown now. */
 export function checkEdits(
   edits: readonly Edit[],
   current: (id: string) => Item | undefined,
+  crs?: { srid: number; proj4: string },
 ): { outcome: 'ok'; edits: Edit[] } | { outcome: 'refused'; errors: EditError[] } {
   const errors: EditError[] = []
   const checked = edits.flatMap((edit): Edit[] => {
@@ -31,5 +34,14 @@ export function checkEdits(
     )
     return []
   })
+  const placed = checked.flatMap(({ after }) => after ?? [])
+  const beyond = crs ? findUnreachable(placed, crs.proj4) : []
+  errors.push(
+    ...beyond.map((item) => ({
+      item: item.id,
+      pointer: '/geometry/coordinates',
+      detail: unreachableSentence(item, crs?.srid ?? 0),
+    })),
+  )
   return errors.length > 0 ? { outcome: 'refused', errors } : { outcome: 'ok', edits: checked }
 }

@@ -7,6 +7,7 @@ import {
   advanceBase,
   countWaiting,
   decideItems,
+  dropItems,
   thawFirst,
   touchedIds,
   type Batch,
@@ -120,7 +121,9 @@ export class SheetExchange {
     void this.keep(addEdits(this.batches, { base: this.revision, label, edits }))
     this.show(edits.map(editedId))
     if (editsShapeFaces(edits)) this.ports.facesChanged('here')
-    this.sender.nudge()
+    // What was refused may be mended, or taken back, by this very change.
+    if (this.problem?.type.endsWith('/invalid-input')) this.sender.resume()
+    else this.sender.nudge()
   }
 
   /** A revision was announced, by number only. */
@@ -146,6 +149,13 @@ export class SheetExchange {
     const foreign = new Set(this.foreignEntries.keys())
     await this.keep(decideItems(this.batches, { revision: this.revision, decisions, foreign }))
     this.show(touched)
+    this.retry()
+  }
+
+  /** Gives up what waits of some items, and sends the rest. */
+  async giveUp(ids: readonly string[]): Promise<void> {
+    await this.keep(dropItems(this.batches, new Set(ids)))
+    this.show(ids)
     this.retry()
   }
 

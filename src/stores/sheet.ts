@@ -196,7 +196,7 @@ export const useSheetStore = defineStore('sheet', () => {
 
   function put(label: string, edits: readonly Edit[]): ReturnType<typeof checkEdits> {
     if (!now || readOnly.value) return refusal(readOnly.value ?? 'No sheet is open.')
-    const checked = checkEdits(edits, get)
+    const checked = checkEdits(edits, get, sheet.value?.crs)
     if (checked.outcome === 'ok' && checked.edits.length > 0) now.exchange.put(label, checked.edits)
     return checked
   }
@@ -235,6 +235,9 @@ export const useSheetStore = defineStore('sheet', () => {
     await now?.exchange.settle(decided)
     return { outcome: 'done' }
   }
+
+  /** Gives up what waits of some items, which the server will never take, and sends the rest. */
+  const giveUp = async (ids: readonly string[]): Promise<void> => now?.exchange.giveUp(ids)
 
   /** Gives up everything that waits, after a refusal that no retry can change. */
   async function discardWaiting(): Promise<void> {
@@ -280,6 +283,7 @@ export const useSheetStore = defineStore('sheet', () => {
     undo,
     redo,
     settleConflict,
+    giveUp,
     discardWaiting,
     retry,
   }

@@ -14,6 +14,8 @@ const people = {
 export class FakeLedger {
   readonly items = new Map<string, Item>()
   readonly received: { key: string; body: ChangeSet }[] = []
+  /** Items that the ledger never takes, whoever sends them. */
+  readonly unfit = new Set<string>()
   /** What happens to the next posts, in order; 'ok' when there is nothing more. */
   readonly weather: ('ok' | 'lost before' | 'lost after' | 'held')[] = []
   private readonly changedAt = new Map<string, number>()
@@ -44,6 +46,10 @@ export class FakeLedger {
     if (weather === 'held') await new Promise<void>((resolve) => (this.release = resolve))
     const answered = this.answers.get(key)
     if (answered) return { outcome: 'done', answer: answered }
+    const unfit = body.changes.flatMap((change) =>
+      change.op === 'put' && this.unfit.has(change.item.id) ? [change.item.id] : [],
+    )
+    if (unfit.length > 0) return { outcome: 'refused', problem: unfitProblem(unfit) }
     const conflicts = body.changes
       .map((change) => (change.op === 'put' ? change.item.id : change.id))
       .filter((id) => (this.changedAt.get(id) ?? 0) > body.base)
@@ -94,6 +100,16 @@ export const conflictProblem = (ids: readonly string[]) => ({
   instance: 'urn:uuid:00000000-0000-4000-8000-000000000000',
   todo: 'Compare both versions and choose.',
   items: ids.map((id) => ({ id })),
+})
+
+export const unfitProblem = (ids: readonly string[]) => ({
+  type: '/problems/invalid-input',
+  title: 'Something in the request is not right',
+  status: 400,
+  detail: 'This line cannot be stored.',
+  instance: 'urn:uuid:00000000-0000-4000-8000-000000000000',
+  todo: 'Correct it.',
+  errors: ids.map((item) => ({ pointer: '/changes/0', detail: 'This line cannot be stored.', item })),
 })
 
 /** A clock that only moves when it is told to. */

@@ -2,7 +2,7 @@ import type { EntityManager } from 'typeorm'
 import type { Person } from '@shared/api/common'
 import type { LedgerEntry } from '@shared/api/sheets'
 import type { ItemKind } from '@shared/items/item'
-import type { Bounds } from './bounds'
+import type { Bounds } from '@shared/items/item-bounds'
 import type { LockedSheet } from './ledger.queries'
 
 export interface NewEntry {

@@ -6,7 +6,7 @@ import { mergeItem } from '@shared/changes/merge-item'
 import type { Item } from '@shared/items/item'
 import { problem } from '../../platform/problem'
 import { changedId, findConflicts, isEditorsItem, type Conflict, type SheetRows } from './check-changes'
-import { findUnreachable } from './find-unreachable'
+import { findUnreachable, unreachableSentence } from '@shared/items/find-unreachable'
 import {
   countLabelsOfUnits,
   findLatestVersions,
@@ -35,10 +35,10 @@ export function requireWithinSystem(sheet: LockedSheet, changes: readonly Change
   const items = changes.flatMap((change) => (change.op === 'put' ? [change.item] : []))
   const beyond = findUnreachable(items, sheet.proj4)
   if (beyond.length === 0) return
-  const errors = beyond.slice(0, 100).map(({ id, at }) => ({
-    pointer: `/changes/${changes.findIndex((change) => changedId(change) === id)}/item/geometry/coordinates`,
-    detail: `The place ${at[0]} ${at[1]} lies outside the region that the sheet’s coordinate system (EPSG:${sheet.srid}) is made for.`,
-    item: id,
+  const errors = beyond.slice(0, 100).map((item) => ({
+    pointer: `/changes/${changes.findIndex((change) => changedId(change) === item.id)}/item/geometry/coordinates`,
+    detail: unreachableSentence(item, sheet.srid),
+    item: item.id,
   }))
   throw problem('invalid-input', errors[0]?.detail ?? '', { errors })
 }

@@ -8,7 +8,7 @@ import type { Item, ItemKind } from '@shared/items/item'
 import { snapItem } from '@shared/items/snap-item'
 import { announce } from '../../platform/announce'
 import { problem } from '../../platform/problem'
-import { boundsOf } from './bounds'
+import { boundsOf } from '@shared/items/item-bounds'
 import { changedId, findFaults, type SheetRows } from './check-changes'
 import { findEntryByKey, insertEntry, selectEntries } from './entries.queries'
 import {

@@ -4,6 +4,7 @@ import {
   advanceBase,
   countWaiting,
   decideItems,
+  dropItems,
   freezeFirst,
   messageOf,
   thawFirst,
@@ -72,6 +73,13 @@ describe('batches of unsent edits', () => {
   it('leaves the base of a frozen batch alone', () => {
     const frozen = freezeFirst(addEdits([], move), 'key')
     expect(advanceBase(frozen, { from: 7, to: 9, foreign: new Set() })).toEqual(frozen)
+  })
+
+  it('drops the edits of items that were given up, keeps the base of the others, and no empty batch', () => {
+    const other = { ...contact, id: '00000000-0000-4000-8000-00000000eeee' }
+    const both = addEdits(addEdits([], move), { ...drew, edits: [{ before: null, after: other }] })
+    expect(dropItems(both, new Set([contact.id]))).toMatchObject([{ base: 7, edits: [{ after: other }] }])
+    expect(dropItems(both, new Set([contact.id, other.id]))).toEqual([])
   })
 
   it('drops the edits of items decided to be as the others left them, and a batch that has none left', () => {

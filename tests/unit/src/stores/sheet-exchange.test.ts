@@ -138,6 +138,42 @@ describe('sending', () => {
   })
 })
 
+describe('what the ledger will never take', () => {
+  async function withUnfit() {
+    const [unfit, good] = [aContact(), aContact()]
+    ledger.unfit.add(unfit.id)
+    const exchange = open()
+    exchange.put('drew a contact', [{ before: null, after: unfit }])
+    await settle()
+    expect(exchange.saved.state).toBe('stopped')
+    exchange.put('drew a contact', [{ before: null, after: good }])
+    await settle()
+    return { exchange, unfit, good }
+  }
+
+  it('stops the sender, with the good work after it kept', async () => {
+    const { exchange, good } = await withUnfit()
+    expect(exchange.saved).toMatchObject({ state: 'stopped', waiting: 2 })
+    expect(exchange.items.get(good.id)).toEqual(good)
+  })
+
+  it('is given up alone, and the rest is saved', async () => {
+    const { exchange, unfit, good } = await withUnfit()
+    await exchange.giveUp([unfit.id])
+    await settle()
+    expect(exchange.saved).toEqual({ state: 'saved', revision: 8, waiting: 0 })
+    expect([...ledger.items.keys()]).toEqual([good.id])
+    expect(exchange.items.get(unfit.id)).toBeUndefined()
+  })
+
+  it('is sent again once it is changed, and forgotten once it is taken back', async () => {
+    const { exchange, unfit } = await withUnfit()
+    exchange.put('took back: drew a contact', [{ before: unfit, after: null }])
+    await settle()
+    expect(exchange.saved).toEqual({ state: 'saved', revision: 8, waiting: 0 })
+  })
+})
+
 describe('other people’s changes', () => {
   it('come in beneath the own waiting ones, and merge where they touch other items', async () => {
     const [mine, theirs] = [aContact(), aContact()]

@@ -1,5 +1,5 @@
-import type { Item } from '@shared/items/item'
-import type { XY } from '@shared/units'
+import type { XY } from '../units'
+import type { Item } from './item'
 
 /** West, south, east and north, sheet metres. */
 export type Bounds = readonly [number, number, number, number]

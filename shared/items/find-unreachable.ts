@@ -1,8 +1,8 @@
-import { findOutOfReach } from '@shared/geometry/system-reach'
-import { sheetProjection } from '@shared/geometry/projection'
-import type { Item } from '@shared/items/item'
-import type { XY } from '@shared/units'
-import { boundsOf, verticesOf, type Bounds } from './bounds'
+import { sheetProjection } from '../geometry/projection'
+import { findOutOfReach } from '../geometry/system-reach'
+import type { XY } from '../units'
+import type { Item } from './item'
+import { boundsOf, verticesOf, type Bounds } from './item-bounds'
 
 /** An item with a place that the sheet's projected system is not made for. */
 export interface Unreachable {
@@ -10,6 +10,11 @@ export interface Unreachable {
   /** The first vertex out there, sheet metres. */
   at: XY
 }
+
+/** Why such a place is not taken, as a sentence.
+ *  @param srid EPSG code of the sheet's system */
+export const unreachableSentence = ({ at }: Unreachable, srid: number): string =>
+  `The place ${at[0]} ${at[1]} lies outside the region that the sheet’s coordinate system (EPSG:${srid}) is made for.`
 
 /** Items that reach beyond the region of a sheet's system. What lies within four corners that are in reach is in reach
  *  itself, so that usually four places are looked at and not every vertex.
