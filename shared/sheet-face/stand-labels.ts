@@ -11,8 +11,9 @@ type Label = ItemOf<'unit-label'>
 
 /** Air that letters keep from the edges of areas, and from other letters. */
 const AIR: Millimetres = 0.35
-/** How far letters may be moved within their area, and how far out of it. */
-const REACH = { within: 7, outside: 14 } as const
+/** How far the middle of letters may be moved within their area, and how far out of it: they stay within a symbol's reach
+ *  (`SYMBOL_REACH`). */
+const REACH = { within: 7, outside: 9.2 } as const
 const STEP: Millimetres = 0.8
 const DIRECTIONS = 16
 /** Shortest leader that is seen as one. */

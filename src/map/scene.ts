@@ -10,13 +10,13 @@ import { facePathOf } from '@shared/sheet-face/compose-face'
 import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { drawFace } from '@shared/symbols/draw-face'
 import { drawItem } from '@shared/symbols/draw-item'
-import type { LabelStand } from '@shared/symbols/draw-unit-label'
+import { unitLabelSize, unitLabelText, type LabelStand } from '@shared/symbols/draw-unit-label'
 import { arrowOf } from '@shared/symbols/draw-lineation'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '@shared/symbols/frame'
 import { printed } from '@shared/symbols/one-ink'
 import { simplifyStrokes } from '@shared/symbols/simplify'
 import { unitFills, type Printing, type UnitFill } from '@shared/symbols/unit-fill'
-import type { Metres, Millimetres, XY } from '@shared/units'
+import type { Metres, Millimetres, MM, XY } from '@shared/units'
 import { makeDrawing, type Drawing } from './drawing'
 import { ItemIndex, type GroundBox } from './item-index'
 import { KeptDrawings } from './kept-drawings'
@@ -159,12 +159,23 @@ export class Scene {
     return this.frameDrawing
   }
 
-  /** The arrow of a lineation on the ground, at the size its symbol is shown; undefined for what has none. */
+  /** What a symbol has beside its place, as a line on the ground at the size it is shown: the arrow of a lineation, and unit
+   *  letters that stand elsewhere with their leader; undefined for what has neither. */
   arrowOf(item: PointItem, metresPerMm: Metres): XY[] | undefined {
-    if (item.kind !== 'lineation') return undefined
     const [east, north] = item.geometry.coordinates
-    const arrow = arrowOf(item.properties, this.projection.convergenceAt([east, north]))
-    return arrow?.map(([x, y]): XY => [east + x * metresPerMm, north + y * metresPerMm])
+    return this.besideOf(item)?.map(([x, y]): XY => [east + x * metresPerMm, north + y * metresPerMm])
+  }
+
+  private besideOf(item: PointItem): readonly MM[] | undefined {
+    if (item.kind === 'lineation') {
+      return arrowOf(item.properties, this.projection.convergenceAt(item.geometry.coordinates))
+    }
+    const stand = item.kind === 'unit-label' ? this.standOf(item.id) : undefined
+    if (!stand || item.kind !== 'unit-label') return undefined
+    const text = unitLabelText(item.properties, (id) => this.units.get(id))
+    const half = unitLabelSize(text).width / 2
+    const [x, y] = stand.offset
+    return [[0, 0], ...[x - half, x + half].map((end): MM => [end, y])]
   }
 
   /** The neatline as a path to clip to, in the frame's millimetres. */
