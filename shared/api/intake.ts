@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { formatNames } from '../intake/formats'
 import { mappingSchema } from '../intake/mapping'
 import { columnSchema, proposalNoteSchema, refusalSchema } from '../intake/report'
 import { itemKinds } from '../items/item'
@@ -14,7 +15,7 @@ export const intakeSchema = z
     file: z.string(),
     bytes: z.number().int(),
     sha256: z.string(),
-    reader: z.enum(['geojson', 'kml']),
+    reader: z.enum(formatNames),
     state: z.enum(['read', 'taken-in', 'discarded']),
     at: timestamp,
     by: personSchema,
@@ -72,7 +73,8 @@ export const uploadIntake = endpoint({
   room: 'intake',
   method: 'post',
   path: '/sheets/{sheet}/intakes',
-  summary: 'Bring a field file (GeoJSON or KML): it is read, nothing is taken in yet',
+  summary:
+    'Bring a field file (GeoJSON, KML, KMZ, GPX, CSV or zipped shapefile): it is read, nothing is taken in yet',
   access: { to: 'members', roles: writers },
   params: sheetParams,
   query: nothing,

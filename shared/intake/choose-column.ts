@@ -72,7 +72,8 @@ export const isNumeric = (column: IntakeColumn, least: number, greatest: number)
 
 export const isWordy = (column: IntakeColumn): boolean => column.samples.some((text) => /\p{L}/u.test(text))
 
-const plainName = (name: string): string =>
+/** A column's name in lower case, with everything but letters and digits as one underscore. */
+export const plainName = (name: string): string =>
   name
     .replace(/(\p{Ll})(\p{Lu})/gu, '$1_$2')
     .toLowerCase()

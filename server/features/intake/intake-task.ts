@@ -67,7 +67,7 @@ export function runTask(task: IntakeTask): TaskAnswers[IntakeTask['task']] {
   const read = readFieldFile(bytes, name, crs)
   if (read.outcome !== 'read') return read
   if (task.task === 'read') return readOf(read)
-  const from = crs ? `EPSG:${crs.srid}, by way of WGS 84,` : undefined
+  const from = read.system === undefined ? undefined : `${read.system}, by way of WGS 84,`
   const ground = sheetGround(task.sheet.crs, task.sheet.neatline, from)
   const applied = applyMapping(read.records, name, { mapping: task.mapping, ground, newId: randomUUID })
   return task.task === 'preview'

@@ -1,3 +1,4 @@
+import { formatsInWords } from '@shared/intake/formats'
 import { lineAndColumn } from './text-position'
 import { unreadable, type Unreadable } from './read-outcome'
 
@@ -11,13 +12,9 @@ const signatures: readonly (readonly [name: string, bytes: readonly number[]])[]
   ['a TIFF picture', [0x49, 0x49, 0x2a, 0x00]],
   ['a TIFF picture', [0x4d, 0x4d, 0x00, 0x2a]],
   ['a PDF document', [0x25, 0x50, 0x44, 0x46]],
-  [
-    'a zip archive (KMZ and zipped shapefiles are such): unpack it and bring the KML file inside',
-    [0x50, 0x4b, 0x03, 0x04],
-  ],
   ['a gzip archive: unpack it first', [0x1f, 0x8b]],
   ['a SQLite database (GeoPackages are such)', [0x53, 0x51, 0x4c, 0x69, 0x74, 0x65]],
-  ['a shapefile', [0x00, 0x00, 0x27, 0x0a]],
+  ['a part of a shapefile: bring all its files as one zip archive', [0x00, 0x00, 0x27, 0x0a]],
   ['an old office document', [0xd0, 0xcf, 0x11, 0xe0]],
 ]
 
@@ -26,7 +23,7 @@ const signatures: readonly (readonly [name: string, bytes: readonly number[]])[]
 export function decodeText(bytes: Uint8Array): DecodedText {
   if (bytes.length === 0) return unreadable('The file is empty.')
   const known = signatures.find(([, start]) => start.every((byte, index) => bytes[index] === byte))
-  if (known) return unreadable(`The file is ${known[0]}. GeoJSON and KML are read here.`)
+  if (known) return unreadable(`The file is ${known[0]}. ${formatsInWords} are read here.`)
   const encoding = encodingOf(bytes)
   const decoded = decodeAs(bytes, encoding)
   if (decoded.outcome === 'unreadable') return decoded

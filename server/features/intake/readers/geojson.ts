@@ -1,5 +1,5 @@
 import { sheetProjection } from '@shared/geometry/projection'
-import type { FilePosition, IntakeRecord, RecordPart } from '@shared/intake/records'
+import type { IntakeRecord, RecordPart } from '@shared/intake/records'
 import { cleanAttributes } from './clean-attributes'
 import { readGeometry } from './geojson-geometry'
 import { namedCrs } from './geojson-crs'
@@ -7,6 +7,7 @@ import { findJsonFault } from './json-fault'
 import { isJsonObject, type JsonObject } from './json-object'
 import { unreadable, type AsksCrs, type FileCrs, type ReadOutcome, type Unreadable } from './read-outcome'
 import { lineAndColumn } from './text-position'
+import { toDegrees } from './to-degrees'
 
 const geometryTypes: readonly unknown[] = [
   'Point',
@@ -33,7 +34,13 @@ export function readGeoJson(text: string, crs: FileCrs | null): ReadOutcome | As
     return { outcome: 'read', reader: 'geojson', records: read, notes: named.notes }
   }
   const note = `The file names EPSG:${crs.srid}; its coordinates were converted to longitude and latitude (WGS 84).`
-  return { outcome: 'read', reader: 'geojson', records: toDegrees(read, crs), notes: [...named.notes, note] }
+  return {
+    outcome: 'read',
+    reader: 'geojson',
+    records: toDegrees(read, sheetProjection(crs.proj4)),
+    notes: [...named.notes, note],
+    system: `EPSG:${crs.srid}`,
+  }
 }
 
 function parseJson(text: string): { outcome: 'json'; value: unknown } | Unreadable {
@@ -86,19 +93,4 @@ function attributesOf(feature: JsonObject): Record<string, unknown> {
   return cleanAttributes(
     id === undefined || Object.hasOwn(properties, 'id') ? properties : { ...properties, id },
   )
-}
-
-function toDegrees(records: readonly IntakeRecord[], crs: FileCrs): IntakeRecord[] {
-  const projection = sheetProjection(crs.proj4)
-  const convert = (position: FilePosition): FilePosition => {
-    const [east, north, ...rest] = position
-    if (east === undefined || north === undefined) return position
-    if (!Number.isFinite(east) || !Number.isFinite(north)) return [NaN, NaN]
-    return [...projection.toLonLat([east, north]), ...rest]
-  }
-  const convertPart = (part: RecordPart): RecordPart => {
-    if (part.form === 'point') return { form: 'point', position: convert(part.position) }
-    return part.form === 'line' ? { form: 'line', positions: part.positions.map(convert) } : part
-  }
-  return records.map((record) => ({ ...record, parts: record.parts.map(convertPart) }))
 }

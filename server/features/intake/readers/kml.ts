@@ -1,9 +1,10 @@
 import toGeoJSON from '@mapbox/togeojson'
-import { DOMParser, onErrorStopParsing, ParseError, type Document, type Element } from '@xmldom/xmldom'
+import type { Document, Element } from '@xmldom/xmldom'
 import type { IntakeRecord } from '@shared/intake/records'
 import { cleanAttributes } from './clean-attributes'
 import { readGeometry } from './geojson-geometry'
-import { unreadable, type ReadOutcome, type Unreadable } from './read-outcome'
+import { unreadable, type ReadOutcome } from './read-outcome'
+import { parseXml } from './xml'
 
 /** Things of KML that are neither points nor lines of a record. */
 const passedOver = ['GroundOverlay', 'PhotoOverlay', 'ScreenOverlay', 'NetworkLink', 'Model'] as const
@@ -12,44 +13,13 @@ const passedOver = ['GroundOverlay', 'PhotoOverlay', 'ScreenOverlay', 'NetworkLi
  *  around it become the column `folder`. Nothing that the file points to is fetched.
  *  Source: OGC KML 2.2 by way of @mapbox/togeojson, one placemark at a time. */
 export function readKml(text: string): ReadOutcome {
-  // Inside comments and CDATA these are mere text; anywhere else `<!` can only open a declaration.
-  const markup = text.replace(/<!--[\s\S]*?-->|<!\[CDATA\[[\s\S]*?\]\]>/g, '')
-  if (/<!(DOCTYPE|ENTITY)/i.test(markup)) {
-    return unreadable(
-      'The file declares a document type or entities of its own. KML needs none, and such files are not read.',
-    )
-  }
-  const parsed = parseXml(text)
+  const parsed = parseXml(text, 'kml', 'KML')
   if (parsed.outcome === 'unreadable') return parsed
   const { document } = parsed
   const placemarks = [...document.getElementsByTagName('Placemark')]
   if (placemarks.length === 0) return unreadable('The file is KML, but holds no placemarks.')
   const records = placemarks.map((placemark, index) => toRecord(placemark, index + 1, document))
   return { outcome: 'read', reader: 'kml', records, notes: notesOf(document) }
-}
-
-function parseXml(text: string): { outcome: 'xml'; document: Document } | Unreadable {
-  try {
-    const document = new DOMParser({ onError: onErrorStopParsing }).parseFromString(text, 'text/xml')
-    const root = document.documentElement?.nodeName ?? ''
-    if (root === 'kml') return { outcome: 'xml', document }
-    return unreadable(`The file is XML, but not KML: its first element is <${root.slice(0, 40)}>.`)
-  } catch (cause) {
-    if (!(cause instanceof ParseError)) throw cause
-    const cutOff = !/<\/kml\s*>\s*$/.test(text.slice(-200))
-    if (cutOff)
-      return unreadable('The file is not whole: it does not end with </kml>, so it seems to be cut off.')
-    const { lineNumber } = lineOf(cause.locator)
-    const place = lineNumber > 0 ? ` near line ${lineNumber}` : ''
-    return unreadable(`The file is not whole XML: its elements do not fit together${place}.`)
-  }
-}
-
-/** xmldom does not type its locator. */
-function lineOf(locator: unknown): { lineNumber: number } {
-  const line =
-    typeof locator === 'object' && locator !== null && 'lineNumber' in locator ? locator.lineNumber : 0
-  return { lineNumber: typeof line === 'number' ? line : 0 }
 }
 
 function toRecord(placemark: Element, number: number, document: Document): IntakeRecord {

@@ -1,3 +1,4 @@
+import type { Format } from '@shared/intake/formats'
 import type { IntakeRecord } from '@shared/intake/records'
 
 /** What a reader makes of a file: its records in order, or a plain sentence why it cannot. */
@@ -5,10 +6,12 @@ export type ReadOutcome = FileRead | Unreadable
 
 export interface FileRead {
   outcome: 'read'
-  reader: 'geojson' | 'kml'
+  reader: Format
   records: IntakeRecord[]
   /** What a person should know about how the file was read. */
   notes: string[]
+  /** Name of the system that positions were converted from, if they were not in degrees. */
+  system?: string
 }
 
 export interface Unreadable {
