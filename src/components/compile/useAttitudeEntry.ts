@@ -1,4 +1,5 @@
 import { computed, ref } from 'vue'
+import { isSame } from '@shared/changes/same-value'
 import type { ItemOf } from '@shared/items/item'
 import type { AttitudeProperties } from '@shared/items/points'
 import type { XY } from '@shared/units'
@@ -43,8 +44,11 @@ export function useAttitudeEntry(source: () => AttitudeSource) {
       const said = read(draft)
       if (said.outcome === 'refused') return 'unread'
       const { undulating, topsKnown } = draft
-      const values = { ...said.plane, undulating, topsKnown, reading: said.reading }
       const { item, place, start } = source()
+      // What is seen of the plane beside its reading leaves the reading as it is.
+      const isReadAlike = item && isSame(read(draftOf(item.properties, convention())), said)
+      if (isReadAlike) return change(item, { undulating, topsKnown })
+      const values = { ...said.plane, undulating, topsKnown, reading: said.reading }
       if (item) return change(item, values)
       const { type, station } = start
       return add({

@@ -137,6 +137,45 @@ describe('a new reading', () => {
   })
 })
 
+describe('what else is seen of a plane', () => {
+  const tick = (entry: ReturnType<typeof mountNew>['entry'], words: string) =>
+    entry
+      .findAll('label')
+      .find((label) => label.text() === words)
+      ?.get('input')
+
+  it('is ticked beside the reading, echoed, and placed with it', async () => {
+    const { sheet, entry } = mountNew()
+    await type(entry, '045/40')
+    await tick(entry, 'tops known')?.setValue(true)
+    await tick(entry, 'undulating')?.setValue(true)
+    expect(entry.get('.words').text()).toBe(
+      'Strikes 045°, dips 40° toward 135° (south-east), undulating, tops known',
+    )
+    await entry.trigger('submit')
+    expect(added(sheet)).toMatchObject({ properties: { strike: 45, topsKnown: true, undulating: true } })
+  })
+
+  it.each([
+    ['bedding', ['overturned', 'tops known', 'undulating']],
+    ['foliation', ['crenulated']],
+    ['joint', []],
+  ] as const)('is asked of %s only as far as its symbol shows it', (plane, asked) => {
+    const entry = mount(AttitudeEntry, { props: { place: PLACE, start: { ...start, type: plane } } })
+    const words = entry.findAll('label').filter((label) => label.find('input[type=checkbox]').exists())
+    expect(words.map((label) => label.text())).toEqual(asked)
+  })
+
+  it('is taken at once on an attitude that is on the sheet', async () => {
+    const sheet = useSheetFake()
+    sheet.start([attitude, sheetFace('strike-dip')])
+    const entry = mount(AttitudeEntry, { props: { place: PLACE, start, item: attitude } })
+    await tick(entry, 'tops known')?.setValue(true)
+    expect(sheet.get(attitude.id)?.properties).toEqual({ ...attitude.properties, topsKnown: true })
+    expect(sheet.committed).toHaveLength(1)
+  })
+})
+
 describe('the reading of an attitude on the sheet', () => {
   function mountExisting() {
     const sheet = useSheetFake()
