@@ -34,6 +34,14 @@ describe('warnings about a unit', () => {
     expect(unitWarnings(unit('1', 'Dr', '#5a3030'), [])).toHaveLength(1)
   })
 
+  it('says that an age is none of the geologic time scale, as a mistyped one is not', () => {
+    const units: LegendUnit[] = []
+    expect(unitWarnings(unit('1', 'Qa', '#f4ecc8', 'Quartenary'), units)).toEqual([
+      expect.stringContaining('“Quartenary” names no period'),
+    ])
+    expect(unitWarnings(unit('1', 'Qa', '#f4ecc8', 'Lower Quaternary'), units)).toEqual([])
+  })
+
   it('says nothing of a unit that stands out', () => {
     expect(unitWarnings(unit('1', 'Dr', '#cf9d88'), [unit('2', 'Sv', '#b5cbc4')])).toEqual([])
   })

@@ -261,7 +261,10 @@ describe('the units, for an editor', () => {
     await margin.get('.add').trigger('click')
     await type(margin, 'Label', 'Sv')
     await margin.get('form').trigger('submit')
-    expect(margin.get('form > [role=alert]').text()).toBe('A unit needs a name.')
+    expect(margin.get('form [role=alert]').text()).toBe('A unit needs a name.')
+    expect(margin.get<HTMLInputElement>('[aria-invalid=true]').attributes('placeholder')).toBe(
+      'name of the unit',
+    )
     expect(sheet.committed).toEqual([])
   })
 
