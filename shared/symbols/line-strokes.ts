@@ -47,7 +47,7 @@ function dashedRuns(
 const CORNER: Degrees = 50
 /** Length over which a corner turns, and the step in which corners are looked for. */
 const CORNER_WIDTH: Millimetres = 2
-const STEP: Millimetres = 0.25
+const STEP: Millimetres = 0.5
 /** Fewest periods of the pattern between two places that stand on a dash because of a corner: a shorter run would be
  *  stretched or shrunk so much that it looks like another pattern. */
 const FEWEST_PERIODS = 2.5
