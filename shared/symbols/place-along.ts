@@ -112,8 +112,8 @@ export function straightestPlace(
 
 /** Places tried on either side of the middle when looking for the straightest: enough for any line that could be read. */
 const MOST_TRIED = 400
-/** Turns nearer than this are equal. */
-const LEAST_GAIN: Degrees = 0.01
+/** Turns nearer than this are equal: a place nearer to the middle is worth more. */
+const LEAST_GAIN: Degrees = 3
 
 const stepFor = (size: Millimetres): Millimetres => Math.max(0.1, Math.min(size / 4, 0.5))
 
