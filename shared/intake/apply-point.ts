@@ -45,7 +45,14 @@ function attitudeItem(
 ): PartOutcome {
   const read = readReading(record, mapping.points)
   if (read.outcome === 'refused') return read
-  const overturned = target.overturned || read.overturned
+  const column = mapping.points.overturnedColumn
+  const stated = mappedText(record, column)
+  const isStated = readYesOrNo(stated)
+  if (column !== null && isStated === undefined) {
+    const reason = 'This does not say whether the bed is overturned: yes or no is understood.'
+    return { outcome: 'refused', field: column, value: stated, reason }
+  }
+  const overturned = target.overturned || read.overturned || isStated === true
   if (overturned && read.strike === null) {
     return {
       outcome: 'refused',
@@ -83,6 +90,12 @@ function attitudeItem(
     item: { kind: 'attitude', ...point, properties },
     conversions: [...conversions, ...read.conversions, ...(turned?.conversions ?? []), ...tops],
   }
+}
+
+/** Source: common practice of tables and forms. */
+function readYesOrNo(text: string): boolean | undefined {
+  if (/^(yes|y|true|t|1|overturned|inverted)$/i.test(text)) return true
+  return /^(no|n|false|f|0|normal|upright|)$/i.test(text) ? false : undefined
 }
 
 function placeItem(

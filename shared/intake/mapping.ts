@@ -75,6 +75,8 @@ export const mappingSchema = z
       azimuthColumn: column,
       dipColumn: column,
       convention: z.enum(attitudeConventions),
+      /** Column that says whether a bed is overturned, beside what its type says. */
+      overturnedColumn: column,
       /** Trend of lineations; azimuth of places that have one. */
       trendColumn: column,
       plungeColumn: column,

@@ -22,7 +22,7 @@ const leaveOut: LineTarget = { kind: 'leave-out' }
 /** Names that say "what it is" where no value is understood. */
 const typeNames = [/^(line_|fault_|fold_)?type$/, /^(kind|class|category|legend.*|feature)$/]
 const nameNames = [/^name$/, /^(fault|fold|line)_name$/, /^title$/]
-const noteNames = [/^(notes?|remarks?|comments?)$/, /^descr.*$/]
+const noteNames = [/^(notes?|remarks?|comments?)$/, /^(descr.*|desc|cmt)$/]
 const plungeNames = [/^plunge(_val(ue)?)?$/]
 const trendNames = [/^trend(_val(ue)?)?$/, /^plunge_(dir|direction|azimuth)$/]
 

@@ -30,8 +30,12 @@ const azimuthNames = [/^azim(ut|uth)?$/, /^(az|bearing|direction|orientation)$/]
 const dipNames = [/^dip(_?(val|value|angle|amount|deg))?$/]
 const trendNames = [/^trend(_?(val|value))?$/, /^plunge_?(dir|direction|azimuth)$/]
 const plungeNames = [/^plunge(_?(val|value|angle|amount))?$/]
-const stationNames = [/^(station|stn|site|outcrop|locality|stop)(_?(id|no|name|number))?$/, /^name$/]
-const noteNames = [/^(notes?|remarks?|comments?)$/, /^descr.*$/]
+const stationNames = [
+  /^(station|stn|site|outcrop|locality|stop)(_?(id|no|name|number))?$/,
+  /^name(_[a-z]{2})?$/,
+]
+const overturnedNames = [/^(is_)?(overturned|inverted)$/]
+const noteNames = [/^(notes?|remarks?|comments?)$/, /^(descr.*|desc|cmt)$/]
 const typeNames = [/^(point_|plane_|structure_)?type$/, /^(kind|class|category|legend.*|feature)$/]
 
 /** What the points of a file become, proposed from its columns. */
@@ -51,6 +55,8 @@ export function proposePoints(
       ...readings,
       ...line,
       ...type,
+      overturnedColumn:
+        columnNamed(free, overturnedNames, (column) => column.values.length > 0)?.name ?? null,
       stationColumn: columnNamed(free, stationNames, (column) => column.filled > 0)?.name ?? null,
       noteColumn: columnNamed(free, noteNames, isWordy)?.name ?? null,
     },
@@ -141,7 +147,8 @@ function proposeTypes(
 ): Pick<Points, 'typeColumn' | 'types' | 'otherwise'> {
   const fit = columnByValues(columns, 'points', (value) => readPointType(value) !== undefined, 0.3)
   const named = columnNamed(columns, typeNames, (column) => column.values.length > 0 && isWordy(column))
-  const column = fit?.column ?? named
+  // A column that only is called so may say of stations what they lie in; of readings it has to be answered.
+  const column = fit?.column ?? (usual.target.kind === 'station' ? undefined : named)
   const field = 'points.typeColumn'
   if (!column) {
     notes.push({
@@ -201,6 +208,7 @@ const noPoints: Points = {
   azimuthColumn: null,
   dipColumn: null,
   convention: 'strike-dip',
+  overturnedColumn: null,
   trendColumn: null,
   plungeColumn: null,
   stationColumn: null,

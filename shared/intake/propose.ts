@@ -1,5 +1,6 @@
 import type { Mapping } from './mapping'
 import { proposeLines } from './propose-lines'
+import { proposeNorth } from './propose-north'
 import { proposePoints } from './propose-points'
 import type { IntakeColumn, ProposalNote } from './report'
 
@@ -25,20 +26,8 @@ export function proposeMapping(columns: readonly IntakeColumn[], counts: FormCou
     points.proposed.readingColumn ??
     points.proposed.trendColumn ??
     lines.proposed.trendColumn
-  if (azimuths !== null) notes.push(northNote)
-  return {
-    mapping: {
-      northReference: 'true',
-      declination: null,
-      lines: lines.proposed,
-      points: points.proposed,
-    },
-    notes,
-  }
-}
-
-const northNote: ProposalNote = {
-  weight: 'check',
-  field: 'northReference',
-  text: 'The file does not say what its azimuths are counted from; true north is proposed.',
+  const { north, note } = proposeNorth(columns)
+  const counted = azimuths === null ? { northReference: 'true' as const, declination: null } : north
+  if (azimuths !== null) notes.push(note)
+  return { mapping: { ...counted, lines: lines.proposed, points: points.proposed }, notes }
 }

@@ -56,6 +56,7 @@ export function aMapping(given: {
       azimuthColumn: null,
       dipColumn: null,
       convention: 'strike-dip',
+      overturnedColumn: null,
       trendColumn: null,
       plungeColumn: null,
       stationColumn: null,

@@ -103,6 +103,23 @@ describe('attitudes', () => {
     expect(items[0]?.provenance.conversions).toContain('tops unknown in the file: drawn as not overturned')
   })
 
+  it('are overturned where a column says yes, and refused where it says neither yes nor no', () => {
+    const mapped = { overturnedColumn: 'ot' }
+    const rows = [
+      { strike: 45, dip: 40, ot: 'Yes' },
+      { strike: 45, dip: 40, ot: 'no' },
+      { strike: 45, dip: 40 },
+      { strike: 45, dip: 40, ot: 'perhaps' },
+    ]
+    const result = attitudes(rows, mapped)
+    expect(propertiesOf(result).map((item) => 'overturned' in item && item.overturned)).toEqual([
+      true,
+      false,
+      false,
+    ])
+    expect(result.refusals).toMatchObject([{ record: 4, field: 'ot', value: 'perhaps' }])
+  })
+
   it('carry the traits that their type is mapped to', () => {
     const otherwise = { ...aBed, undulating: true, topsKnown: true }
     expect(propertiesOf(attitudes([{ strike: 45, dip: 40 }], { otherwise }))[0]).toMatchObject({

@@ -63,6 +63,85 @@ describe('readings', () => {
   })
 })
 
+describe('points without readings', () => {
+  it('are stations, even where a column that is called type says something else of them', () => {
+    const { mapping } = proposalFor(points([{ name_en: 'K 12', type: 'road' }, { type: 'stream' }]))
+    expect(mapping.points).toMatchObject({
+      typeColumn: null,
+      otherwise: { kind: 'station', type: 'station' },
+      stationColumn: 'name_en',
+    })
+  })
+
+  it('are lineations where they have trend and plunge', () => {
+    const { mapping } = proposalFor(points([{ trend: 120, plunge: 35 }]))
+    expect(mapping.points).toMatchObject({
+      otherwise: { kind: 'lineation', type: 'lineation' },
+      trendColumn: 'trend',
+      plungeColumn: 'plunge',
+    })
+  })
+})
+
+describe('a column of points whose values nobody understands', () => {
+  it('is not passed over where the points have readings', () => {
+    const { mapping } = proposalFor(points([{ type: 'S2', strike: 210, dip: 40 }]))
+    expect(mapping.points).toMatchObject({
+      typeColumn: 'type',
+      types: { S2: { kind: 'leave-out' } },
+      otherwise: { kind: 'leave-out' },
+    })
+  })
+
+  it('called overturned says which beds are', () => {
+    const { mapping } = proposalFor(points([{ strike: 210, dip: 40, overturned: 'yes' }]))
+    expect(mapping.points.overturnedColumn).toBe('overturned')
+  })
+})
+
+describe('north', () => {
+  const northOf = (rows: Record<string, unknown>[]) => {
+    const { mapping, notes } = proposalFor(points(rows.map((row) => ({ strike: 210, dip: 40, ...row }))))
+    const note = notes.find(({ field }) => field === 'northReference')
+    return { north: mapping.northReference, declination: mapping.declination, note }
+  }
+
+  it('is what a column says in every record, with the declination beside it', () => {
+    expect(northOf([{ north: 'magnetic', declination: -8.5 }])).toEqual({
+      north: 'magnetic',
+      declination: -8.5,
+      note: {
+        weight: 'reason',
+        field: 'northReference',
+        text: '“north” states magnetic north, and the declination as -8.5°, in every record.',
+      },
+    })
+    expect(northOf([{ Reference: 'Grid north' }])).toMatchObject({ north: 'grid', declination: null })
+  })
+
+  it('is true north, to be looked at, where records differ or say nothing', () => {
+    expect(northOf([{ north: 'magnetic' }, { north: 'true' }])).toMatchObject({
+      north: 'true',
+      note: { weight: 'check', text: expect.stringContaining('does not state the same north') },
+    })
+    expect(northOf([{ north: 5_281_250 }])).toMatchObject({
+      north: 'true',
+      note: {
+        weight: 'check',
+        text: expect.stringContaining('does not say what its azimuths are counted from'),
+      },
+    })
+  })
+
+  it('takes no declination that differs from record to record', () => {
+    const rows = [
+      { north: 'magnetic', declination: -8.5 },
+      { north: 'magnetic', declination: -8.6 },
+    ]
+    expect(northOf(rows)).toMatchObject({ north: 'magnetic', declination: null })
+  })
+})
+
 describe('types', () => {
   it('finds the column whose values say what lines are, whatever its name', () => {
     const { mapping } = proposalFor(
