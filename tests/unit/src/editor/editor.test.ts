@@ -49,17 +49,28 @@ describe('selecting', () => {
 })
 
 describe('placing', () => {
-  it('asks for the reading of an attitude instead of placing one without', () => {
-    const { bench, map, host } = aWorkbench([], {
-      kind: 'attitude',
-      title: 'Bedding',
-      properties: { type: 'bedding' },
-    })
+  it.each([
+    ['attitude', { type: 'bedding' }],
+    ['lineation', { type: 'lineation' }],
+  ] as const)('asks for the reading of %s instead of placing one without', (kind, properties) => {
+    const { bench, map, host } = aWorkbench([], { kind, title: 'Pen', properties })
     const editor = new Editor(map, host, vi.fn())
     editor.take('draw')
     editor.click(at(12.34567, 5))
     expect(bench.places).toEqual([[12.346, 5]])
     expect(bench.commits).toEqual([])
+  })
+
+  it('places a spring at once, and calls it one', () => {
+    const pen = { kind: 'station', title: 'Spring', properties: { type: 'spring' } } as const
+    const { bench, map, host } = aWorkbench([], pen)
+    const editor = new Editor(map, host, vi.fn())
+    editor.take('draw')
+    editor.click(at(7, 8))
+    expect(bench.commits[0]).toMatchObject({
+      label: 'placed a spring',
+      edits: [{ after: { kind: 'station', properties: { type: 'spring', azimuth: null } } }],
+    })
   })
 
   it('places a unit’s label at once', () => {
