@@ -1,6 +1,6 @@
 import { mixColours } from '../colour'
 import type { SheetFaceProperties, UnitProperties } from '../items/legend'
-import { lithologyPattern } from './definitions/lithology'
+import { findPattern } from './definitions/lithology'
 import type { Ink, Tile } from './display-list'
 import { inkColour } from './ink'
 
@@ -22,9 +22,9 @@ const greys: readonly (Ink | undefined)[] = [undefined, '#d2d2d2', '#ededed', '#
 /** A unit's fill in colour. */
 export function colourFill({ colour, pattern }: Pick<UnitProperties, 'colour' | 'pattern'>): UnitFill {
   const ground: Ink = `#${colour.slice(1)}`
-  if (pattern === 'none') return { ground }
-  const ink = mixColours(inkColour('black'), colour, PATTERN_STRENGTH)
-  return { ground, pattern: { tile: lithologyPattern(pattern).tile, ink } }
+  const tile = findPattern(pattern)?.tile
+  if (!tile) return { ground }
+  return { ground, pattern: { tile, ink: mixColours(inkColour('black'), colour, PATTERN_STRENGTH) } }
 }
 
 /** Fills of all units of a legend, by their ids: in colour, or in one ink by pattern and grey alone. */
@@ -32,12 +32,13 @@ export function unitFills(
   units: readonly { id: string; properties: Pick<UnitProperties, 'colour' | 'pattern' | 'rank'> }[],
   printing: Printing,
 ): Map<string, UnitFill> {
-  if (printing === 'colour') return new Map(units.map(({ id, properties }) => [id, colourFill(properties)]))
+  if (printing !== 'one-ink') return new Map(units.map(({ id, properties }) => [id, colourFill(properties)]))
   let plain = 0
   const inOrder = units.toSorted((a, b) => a.properties.rank - b.properties.rank)
   return new Map(
     inOrder.map(({ id, properties: { pattern } }): [string, UnitFill] => {
-      if (pattern !== 'none') return [id, { pattern: { tile: lithologyPattern(pattern).tile, ink: 'black' } }]
+      const tile = findPattern(pattern)?.tile
+      if (tile) return [id, { pattern: { tile, ink: 'black' } }]
       const ground = greys[plain++ % greys.length]
       return [id, ground === undefined ? {} : { ground }]
     }),

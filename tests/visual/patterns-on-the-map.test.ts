@@ -1,7 +1,7 @@
 import type { PNG } from 'pngjs'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { rectangle } from '@shared/sheet-face/rectangle'
-import { lithologyPattern } from '@shared/symbols/definitions/lithology'
+import { findPattern } from '@shared/symbols/definitions/lithology'
 import type { Mark, PatternMark } from '@shared/symbols/display-list'
 import { marksOverCells } from '@shared/symbols/tile'
 import { openSurfacePictures, type SurfacePictures } from '../support/surface-pictures/pictures'
@@ -12,7 +12,9 @@ beforeAll(async () => {
 })
 afterAll(() => pictures.close())
 
-const { tile } = lithologyPattern('conglomerate')
+const conglomerate = findPattern('conglomerate')
+if (!conglomerate) throw new Error('There is no pattern of conglomerate.')
+const { tile } = conglomerate
 const area = (x: number, width: number): PatternMark => ({
   mark: 'pattern',
   path: rectangle(x, -40, width, 80),

@@ -1,4 +1,4 @@
-import type { Lithology } from '../../items/lithology'
+import type { UnitProperties } from '../../items/legend'
 import { beddedPatterns } from './lithology/bedded'
 import { depositPatterns } from './lithology/deposits'
 import { igneousPatterns } from './lithology/igneous'
@@ -14,13 +14,10 @@ export const lithologyPatterns: readonly LithologyPattern[] = [
   ...depositPatterns,
 ]
 
-const patternsById: ReadonlyMap<Lithology, LithologyPattern> = new Map(
+const patternsById: ReadonlyMap<UnitProperties['pattern'], LithologyPattern> = new Map(
   lithologyPatterns.map((pattern) => [pattern.id, pattern]),
 )
 
-/** The pattern of a lithology. */
-export function lithologyPattern(id: Lithology): LithologyPattern {
-  const found = patternsById.get(id)
-  if (!found) throw new RangeError(`There is no pattern for ${id}.`)
-  return found
-}
+/** The pattern that a unit states; undefined where it has none, as units written before there were patterns. */
+export const findPattern = (pattern: UnitProperties['pattern']): LithologyPattern | undefined =>
+  patternsById.get(pattern)
