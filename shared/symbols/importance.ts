@@ -27,12 +27,25 @@ const STATION_RANK = 5
 /** What a plane gains by its steepness, and by being unlike its neighbours, at most. */
 const STEEPNESS_WORTH = 8
 const DISTINCTNESS_WORTH = 22
+/** What the only symbol of its sort on a sheet gains; of several each gains less. */
+const RARITY_WORTH = 24
+
+/** How a symbol stands among the others of its sheet. */
+export interface Standing {
+  /** Smallest angle to the like planes nearest to it, degrees, 0–90. */
+  distinctness: Degrees
+  /** How many symbols of the sheet look like it, itself among them. */
+  alike: number
+}
 
 /** How much a symbol matters where there is no room for all of them; the greater number stays. Overturned and vertical
- *  bedding come first; of two of a sort the steeper one, and the one that tells more than its neighbours do already.
- *  Source: common practice; the numbers are ours.
- *  @param distinctness smallest angle to the like planes nearest to it, degrees, 0–90 */
-export function importanceOf(item: PointItem, distinctness: Degrees): number {
+ *  bedding come first; of two of a sort the steeper one, and the one that tells more than its neighbours do already;
+ *  and what is rare on the sheet before what is repeated. Source: common practice; the numbers are ours. */
+export function importanceOf(item: PointItem, standing: Standing): number {
+  return ownImportance(item, standing.distinctness) + RARITY_WORTH / Math.sqrt(standing.alike)
+}
+
+function ownImportance(item: PointItem, distinctness: Degrees): number {
   switch (item.kind) {
     case 'attitude': {
       const { type, dip, topsKnown } = item.properties

@@ -1,12 +1,14 @@
 import Flatbush from 'flatbush'
 import type { Item, PointItem } from '@shared/items/item'
-import { importanceOf, planesApart } from '@shared/symbols/importance'
+import { importanceOf, planesApart, type Standing } from '@shared/symbols/importance'
+import { pointEntryIdOf } from '@shared/symbols/point-entries'
 import { mmPerMetreAtScale } from '@shared/symbols/frame'
 import type { Degrees, Metres, Millimetres } from '@shared/units'
 
-/** Two symbols nearer than this crowd each other: a strike line is 5.6 mm long. Near print size, where everything is shown
+/** Two symbols nearer than this crowd each other: a strike line is 5.6 mm long and its figure stands
+ *  beside it. Near print size, where everything is shown
  *  however crowded, only the nearest give way. */
-const CLEAR: Millimetres = 5
+const CLEAR: Millimetres = 7
 const clearAt = (step: number): Millimetres => CLEAR * Math.min(1, 0.2 + 0.2 * step)
 /** Steps to the octave at which symbols drop out when one zooms out. */
 const STEPS_PER_OCTAVE = 4
@@ -14,6 +16,9 @@ const STEPS_PER_OCTAVE = 4
 const MOST_STEPS = 28
 /** Neighbours of the same sort that a plane is compared with. */
 const NEIGHBOURS = 3
+
+/** Every point but unit labels: each area keeps its letters. */
+type ThinnedPoint = Exclude<PointItem, { kind: 'unit-label' }>
 
 /** The step of a zoom: 0 from the print's size on, where everything is shown; then growing with every step farther out.
  *  @param relative ground millimetres in symbol millimetres, as a share of those of the print */
@@ -25,7 +30,7 @@ export const thinningStep = (relative: number): number =>
  *  inward, each step keeping what the one before showed, so a symbol once shown stays shown when one zooms in.
  *  @param scale denominator of the printed scale */
 export function thinOut(points: readonly PointItem[], scale: number): Map<Item, number> {
-  const places = points.filter((item) => item.kind !== 'unit-label')
+  const places = points.filter((item): item is ThinnedPoint => item.kind !== 'unit-label')
   const waiting = byImportance(places)
   const steps = new Map<Item, number>()
   const shown = new Neighbourhood()
@@ -49,17 +54,24 @@ const clearanceAt = (step: number, scale: number): Metres =>
   (clearAt(step) / mmPerMetreAtScale(scale)) * 2 ** (step / STEPS_PER_OCTAVE)
 
 /** The most important first; of equals, always the same one. */
-function byImportance(places: readonly PointItem[]): PointItem[] {
+function byImportance(places: readonly ThinnedPoint[]): ThinnedPoint[] {
   const distinctness = distinctnessOf(places)
+  const sorts = new Map(places.map((item) => [item, pointEntryIdOf(item)]))
+  const counts = new Map<string, number>()
+  for (const sort of sorts.values()) counts.set(sort, (counts.get(sort) ?? 0) + 1)
+  const standingOf = (item: ThinnedPoint): Standing => ({
+    distinctness: distinctness.get(item) ?? 0,
+    alike: counts.get(sorts.get(item) ?? '') ?? 1,
+  })
   return places
-    .map((item) => ({ item, importance: importanceOf(item, distinctness.get(item) ?? 0) }))
+    .map((item) => ({ item, importance: importanceOf(item, standingOf(item)) }))
     .toSorted((a, b) => b.importance - a.importance || (a.item.id < b.item.id ? -1 : 1))
     .map(({ item }) => item)
 }
 
 /** How far each attitude is from the like ones nearest to it; one that stands alone is as distinct as can be. */
-function distinctnessOf(places: readonly PointItem[]): Map<PointItem, Degrees> {
-  const found = new Map<PointItem, Degrees>()
+function distinctnessOf(places: readonly ThinnedPoint[]): Map<ThinnedPoint, Degrees> {
+  const found = new Map<ThinnedPoint, Degrees>()
   const attitudes = places.filter((item) => item.kind === 'attitude')
   for (const type of new Set(attitudes.map((item) => item.properties.type))) {
     const like = attitudes.filter((item) => item.properties.type === type)

@@ -277,3 +277,21 @@ describe('the units, for an editor', () => {
     expect(workplace.drawWith).toEqual({ unit: rill.id })
   })
 })
+
+describe('crowded symbols', () => {
+  it('are counted in their row and above the legend, never hidden in silence', async () => {
+    const { workplace, margin, row } = open([
+      aPoint('attitude', place, { strike: 45, dip: 40 }),
+      aPoint('attitude', place, { strike: 50, dip: 40 }),
+      aPoint('attitude', place, { strike: 55, dip: 40 }),
+    ])
+    workplace.thinned = new Map([['attitude.bedding.inclined', 2]])
+    await nextTick()
+    const count = row('Bedding, inclined').get('.count')
+    expect(count.text()).toBe('1 of 3')
+    expect(count.attributes('aria-label')).toBe('1 of 3 shown at this scale')
+    expect(margin.get('.hidden-note').text().replaceAll('\u00a0', ' ')).toBe(
+      '2 crowded symbols hidden until 100 %.',
+    )
+  })
+})
