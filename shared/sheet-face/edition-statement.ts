@@ -1,3 +1,5 @@
+import { groupThousands } from './figures'
+
 /** Which state of a sheet a printed page or download shows. */
 export interface EditionStatement {
   /** Number of the edition; of a draft, the number that it goes toward. */
@@ -47,5 +49,5 @@ export function citation(
   const year = new Date(statement.released.at).getUTCFullYear()
   const title = `Geologic map of ${sheet.title}`
   const head = authors === '' ? `${title}, ${year}.` : `${authors}, ${year}. ${title}.`
-  return `${head} Sheet ${sheet.number}, scale 1:${sheet.scale}, edition ${statement.edition}.`
+  return `${head} Sheet ${sheet.number}, scale 1:${groupThousands(sheet.scale)}, edition ${statement.edition}.`
 }

@@ -21,8 +21,10 @@ const DIP = `\\s*[/\\\\,;:|-]?\\s*${NUMBER}?\\s*([A-Z]+)?`
 
 const azimuthForm = new RegExp(`^${NUMBER}${SEPARATOR}${NUMBER}\\s*([A-Z]+)?$`)
 const quadrantForm = new RegExp(`^([NS])\\s*${NUMBER}\\s*([EW])${DIP}$`)
-/** Both ends of a strike: `E-W`, `NS`, `NE-SW`. */
-const twoEndedForm = new RegExp(`^([NESW]{1,3})\\s*-?\\s*([NESW]{1,3})(?![A-Z])${DIP}$`)
+/** Both ends of a strike: `E-W`, `NS`, `NE-SW`. Letters after it belong to a dip: “see sketch” is not a strike. */
+const twoEndedForm = new RegExp(
+  `^([NESW]{1,3})\\s*-?\\s*([NESW]{1,3})(?![A-Z])(?:\\s*[/\\\\,;:|-]?\\s*${NUMBER}\\s*([A-Z]+)?)?$`,
+)
 const oneNumber = new RegExp(`^${NUMBER}$`)
 
 /** Reads an attitude as it stands in a notebook: `045/40` in the sheet's convention, `N45E 40SE`, `E-W 20N`, with a dip

@@ -5,6 +5,7 @@ import type { Item } from '@shared/items/item'
 import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { composeSheet } from '@shared/sheet-face/compose-sheet'
 import { citation, type EditionStatement } from '@shared/sheet-face/edition-statement'
+import { groupThousands } from '@shared/sheet-face/figures'
 import { problem } from '../../platform/problem'
 import type { ReportProgress } from '../../platform/jobs'
 import { manifest, sha256 } from './manifest'
@@ -79,7 +80,7 @@ function pdfFacts({ sheet, items, statement }: EditionSource) {
   return {
     title: `Geologic map of ${sheet.title}`,
     author: sheetFaceOf(items).authors,
-    subject: `Sheet ${sheet.number}, scale 1:${sheet.scale}, edition ${statement.edition}, revision ${statement.revision}`,
+    subject: `Sheet ${sheet.number}, scale 1:${groupThousands(sheet.scale)}, edition ${statement.edition}, revision ${statement.revision}`,
     at: new Date(statement.released?.at ?? 0),
   }
 }

@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto'
 import type { DataSource, EntityManager } from 'typeorm'
 import type { Crs, LedgerEntry, NewSheet, Sheet } from '@shared/api/sheets'
 import { sheetProjection, type SheetProjection } from '@shared/geometry/projection'
+import { groupThousands } from '@shared/sheet-face/figures'
 import { faceSize, fitsPage, proposePage } from '@shared/sheet-face/page-layout'
 import { sheetArea } from '@shared/sheets/sheet-area'
 import type { LonLat, XY } from '@shared/units'
@@ -152,7 +153,7 @@ function neatlineOf(
 
 function requireFit({ scale, page }: NewSheet, neatline: XY[]): void {
   const face = faceSize(neatline, scale)
-  const size = `${Math.round(face.width)} × ${Math.round(face.height)} mm at 1:${scale}`
+  const size = `${Math.round(face.width)} × ${Math.round(face.height)} mm at 1:${groupThousands(scale)}`
   if (face.width < SMALLEST_FACE_MM || face.height < SMALLEST_FACE_MM) {
     throw invalid('/area', `The map face would be ${size}: choose a larger area or a larger scale.`)
   }

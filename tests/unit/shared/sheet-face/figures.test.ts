@@ -44,7 +44,7 @@ it('names the edition and how to cite it', () => {
   expect(editionLine('MI-14', released)).toContain('edition 1, 1 December 2026')
   expect(editionLine('MI-14', { ...released, released: null })).toContain('draft toward edition 1')
   expect(citation(sheet, 'Kelp, R.', released)).toBe(
-    'Kelp, R., 2026. Geologic map of Gannet Head. Sheet MI-14, scale 1:24000, edition 1.',
+    'Kelp, R., 2026. Geologic map of Gannet Head. Sheet MI-14, scale 1:24\u00a0000, edition 1.',
   )
   expect(citation(sheet, '', released)).toMatch(/^Geologic map of Gannet Head, 2026\. Sheet MI-14/)
 })

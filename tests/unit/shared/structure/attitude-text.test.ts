@@ -274,3 +274,9 @@ function upwardPole(strike: number, dip: number): [number, number, number] {
   const [s, d] = [(strike * Math.PI) / 180, (dip * Math.PI) / 180]
   return [Math.sin(d) * Math.cos(s), -Math.sin(d) * Math.sin(s), Math.cos(d)]
 }
+
+it('takes no remark for a strike', () => {
+  const read = parseAttitude('see sketch', 'strike-dip')
+  expect(read.outcome).toBe('refused')
+  expect(JSON.stringify(read)).not.toContain('opposite ends')
+})
