@@ -32,15 +32,24 @@ export function edgeMeetsBox([x1, y1]: MM, [x2, y2]: MM, box: Box): boolean {
   return !(sides.every((side) => side > 0) || sides.every((side) => side < 0))
 }
 
-/** Whether a place lies within closed rings, holes left out. Source: the even-odd rule, common practice. */
-export function isInRings(rings: readonly (readonly MM[])[], [x, y]: MM): boolean {
+/** One straight side of an area. */
+export type Edge = readonly [from: MM, to: MM]
+
+/** The sides of closed rings. */
+export const edgesOf = (rings: readonly (readonly MM[])[]): Edge[] =>
+  rings.flatMap((ring) =>
+    ring.slice(1).flatMap((to, index): Edge[] => {
+      const from = ring[index]
+      return from ? [[from, to]] : []
+    }),
+  )
+
+/** Whether a place lies within an area, holes left out. Only sides at its height and to its right count.
+ *  Source: the even-odd rule, common practice. */
+export function isInside(edges: readonly Edge[], [x, y]: MM): boolean {
   let inside = false
-  for (const ring of rings) {
-    for (let index = 0, before = ring.length - 1; index < ring.length; before = index++) {
-      const [a, b] = [ring[index], ring[before]]
-      if (!a || !b || a[1] > y === b[1] > y) continue
-      if (x < ((b[0] - a[0]) * (y - a[1])) / (b[1] - a[1]) + a[0]) inside = !inside
-    }
+  for (const [[x1, y1], [x2, y2]] of edges) {
+    if (y1 > y !== y2 > y && x < ((x2 - x1) * (y - y1)) / (y2 - y1) + x1) inside = !inside
   }
   return inside
 }

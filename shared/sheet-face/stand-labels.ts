@@ -1,6 +1,14 @@
 import type { Face } from '../api/faces'
 import type { Box } from '../geometry/box'
-import { boxAround, boxesMeet, edgeMeetsBox, grown, isInRings } from '../geometry/box-edges'
+import {
+  boxAround,
+  boxesMeet,
+  edgeMeetsBox,
+  edgesOf,
+  grown,
+  isInside,
+  type Edge,
+} from '../geometry/box-edges'
 import type { ItemOf } from '../items/item'
 import type { UnitProperties } from '../items/legend'
 import { leaderStart, unitLabelSize, unitLabelText, type LabelStand } from '../symbols/draw-unit-label'
@@ -23,7 +31,7 @@ const LEAST_LEADER: Millimetres = 2
 const COST = { boundary: 4, letters: 25, offSheet: 40 } as const
 
 interface Area {
-  rings: MM[][]
+  edges: readonly Edge[]
   box: Box
 }
 
@@ -47,10 +55,13 @@ export function standLabels(
   })
   const moved = new Map<string, LabelStand>()
   for (const each of letters) {
-    const area = areas.find(({ box, rings }) => isInBox(box, each.place) && isInRings(rings, each.place))
+    const area = areas.find(({ box, edges }) => isInBox(box, each.place) && isInside(edges, each.place))
     if (!area || fits(each.box, area)) continue
-    const taken = letters.flatMap((other) => (other === each ? [] : [other.box]))
-    const stand = within(each, area, taken) ?? outside(each, area, areas, taken)
+    const window = grown(each.box, Math.max(REACH.within, REACH.outside))
+    const own = partNear(area, window)
+    const near = areas.filter(({ box }) => boxesMeet(box, window)).map((other) => partNear(other, window))
+    const taken = letters.flatMap(({ id, box }) => (id !== each.id && boxesMeet(box, window) ? [box] : []))
+    const stand = within(each, own, taken) ?? outside(each, own, near, taken)
     each.box = grown(boxAround(shift(each.place, stand.offset), each.size), AIR)
     moved.set(each.id, stand)
   }
@@ -66,30 +77,32 @@ function areaOf(face: Face, frame: DrawingFrame): Area {
     bottom = Math.min(bottom, y)
     top = Math.max(top, y)
   }
-  return { rings, box: { x: left, y: bottom, width: right - left, height: top - bottom } }
+  return { edges: edgesOf(rings), box: { x: left, y: bottom, width: right - left, height: top - bottom } }
 }
+
+/** The part of an area that matters within a window: sides at its height, from its left edge on. */
+const partNear = ({ edges, box }: Area, { x, y, height }: Box): Area => ({
+  box,
+  edges: edges.filter(
+    ([from, to]) =>
+      Math.max(from[0], to[0]) >= x &&
+      Math.max(from[1], to[1]) >= y &&
+      Math.min(from[1], to[1]) <= y + height,
+  ),
+})
 
 const shift = ([x, y]: MM, [dx, dy]: MM): MM => [x + dx, y + dy]
 
 const isInBox = (box: Box, [x, y]: MM): boolean =>
   x >= box.x && x <= box.x + box.width && y >= box.y && y <= box.y + box.height
 
-/** Number of an area's edges that run through a box. */
-function edgesThrough({ rings, box: bounds }: Area, box: Box): number {
-  if (!boxesMeet(bounds, box)) return 0
-  let count = 0
-  for (const ring of rings) {
-    for (let index = 1; index < ring.length; index++) {
-      const [from, to] = [ring[index - 1], ring[index]]
-      if (from && to && edgeMeetsBox(from, to, box)) count++
-    }
-  }
-  return count
-}
+/** Whether a side of an area runs through a box. */
+const isCut = (box: Box, { edges, box: bounds }: Area): boolean =>
+  boxesMeet(bounds, box) && edges.some(([from, to]) => edgeMeetsBox(from, to, box))
 
 /** Whether letters lie in an area whole. */
 const fits = (box: Box, area: Area): boolean =>
-  isInRings(area.rings, [box.x + box.width / 2, box.y + box.height / 2]) && edgesThrough(area, box) === 0
+  !isCut(box, area) && isInside(area.edges, [box.x + box.width / 2, box.y + box.height / 2])
 
 /** Ways out from a place, the nearest first; of one distance, to the right first, then round. */
 function offsets(from: Millimetres, to: Millimetres): MM[] {
@@ -126,10 +139,7 @@ function leaderLength({ text, place }: Letters, middle: MM): Millimetres {
 }
 
 /** The place outside that covers least; without any, the letters stay where they are. */
-function outside(letters: Letters, area: Area, areas: readonly Area[], taken: readonly Box[]): LabelStand {
-  const window = grown(boxAt(letters, [0, 0]), REACH.outside)
-  const nearAreas = areas.filter(({ box }) => boxesMeet(box, window))
-  const nearLetters = taken.filter((box) => boxesMeet(box, window))
+function outside(letters: Letters, area: Area, near: readonly Area[], taken: readonly Box[]): LabelStand {
   let best: { offset: MM; cost: number } | undefined
   for (const offset of offsets(letters.size.height, REACH.outside)) {
     const distance = Math.hypot(...offset)
@@ -137,10 +147,10 @@ function outside(letters: Letters, area: Area, areas: readonly Area[], taken: re
     const box = boxAt(letters, offset)
     const middle = shift(letters.place, offset)
     if (leaderLength(letters, middle) < LEAST_LEADER) continue
-    if (isInRings(area.rings, middle) || edgesThrough(area, box) > 0) continue
-    const boundaries = nearAreas.filter((other) => edgesThrough(other, box) > 0).length
-    const covered = nearLetters.filter((other) => boxesMeet(other, box)).length
-    const isOff = !nearAreas.some(({ rings }) => isInRings(rings, middle))
+    if (isInside(area.edges, middle) || isCut(box, area)) continue
+    const boundaries = near.filter((other) => isCut(box, other)).length
+    const covered = taken.filter((other) => boxesMeet(other, box)).length
+    const isOff = !near.some(({ edges }) => isInside(edges, middle))
     const cost = distance + boundaries * COST.boundary + covered * COST.letters + (isOff ? COST.offSheet : 0)
     if (!best || cost < best.cost) best = { offset, cost }
   }

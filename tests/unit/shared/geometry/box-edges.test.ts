@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { edgeMeetsBox, isInRings, leaveBox } from '@shared/geometry/box-edges'
+import { edgeMeetsBox, edgesOf, isInside, leaveBox } from '@shared/geometry/box-edges'
 
 const box = { x: 0, y: 0, width: 4, height: 2 }
 
@@ -16,7 +16,7 @@ describe('an edge and a box', () => {
   })
 })
 
-describe('a place in rings', () => {
+describe('a place in an area', () => {
   const outer: [number, number][] = [
     [0, 0],
     [10, 0],
@@ -33,9 +33,9 @@ describe('a place in rings', () => {
   ]
 
   it('is within the outer ring and not in a hole', () => {
-    expect(isInRings([outer, hole], [2, 5])).toBe(true)
-    expect(isInRings([outer, hole], [5, 5])).toBe(false)
-    expect(isInRings([outer, hole], [12, 5])).toBe(false)
+    expect(isInside(edgesOf([outer, hole]), [2, 5])).toBe(true)
+    expect(isInside(edgesOf([outer, hole]), [5, 5])).toBe(false)
+    expect(isInside(edgesOf([outer, hole]), [12, 5])).toBe(false)
   })
 })
 
