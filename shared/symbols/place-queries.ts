@@ -27,7 +27,7 @@ export function placeQueries(
 ): Millimetres[] {
   const within = withoutStubs(whole)
   const gaps = gapsBetween(within, taken).filter(([from, to]) => to - from >= MOST_ROOM - ROUNDING)
-  const places = gaps.length === 1 ? shared(gaps[0]) : gaps.map(([from, to]) => (from + to) / 2)
+  const places = gaps.flatMap(shared)
   const wanted = Math.max(1, Math.round((within[1] - within[0]) / query.interval))
   const chosen = everyNth(places, wanted, favouredWay(line))
   const good = chosen.flatMap((middle) => {
@@ -56,9 +56,7 @@ function gapsBetween([from, to]: Stretch, taken: readonly Stretch[]): Stretch[] 
 }
 
 /** Even places in one free stretch. */
-function shared(gap: Stretch | undefined): Millimetres[] {
-  if (!gap) return []
-  const [from, to] = gap
+function shared([from, to]: Stretch): Millimetres[] {
   const count = Math.max(1, Math.round((to - from) / query.interval))
   return Array.from({ length: count }, (_, index) => from + ((to - from) * (index + 0.5)) / count)
 }
