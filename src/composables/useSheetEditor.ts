@@ -1,11 +1,12 @@
 import { onScopeDispose, watch } from 'vue'
-import { legendEntryOf } from '@shared/symbols/legend-entries'
+import { legendEntries, legendEntryOf, type LegendEntry } from '@shared/symbols/legend-entries'
 import type { XY } from '@shared/units'
 import { Editor } from '@/editor/editor'
 import type { EditorHost, Pen } from '@/editor/host'
 import type { CursorShape, MapPort } from '@/editor/map-port'
 import type { SheetMap } from '@/map/sheet-map'
 import { newId } from '@/offline/new-id'
+import { keepSketch, readKeptSketch } from '@/stores/kept-sketch'
 import { useSheetStore } from '@/stores/sheet'
 import { isUnitPen, useWorkplaceStore } from '@/stores/workplace'
 
@@ -24,6 +25,7 @@ export function useSheetEditor(map: SheetMap) {
   const workplace = useWorkplaceStore()
 
   const neatline = (sheet.sheet?.neatline ?? []).map(([east, north]): XY => [east, north])
+  const number = sheet.sheet?.number ?? ''
   const port: MapPort = {
     metresPerPx: () => map.metresPerPx(),
     linesNear: (at, radius) => [
@@ -35,6 +37,11 @@ export function useSheetEditor(map: SheetMap) {
     pick: (at) => map.pick(at).map((item) => item.id),
     show: (sketch) => map.setMarks({ sketch }),
     cursor: (shape) => map.setCursor(cursors[shape]),
+  }
+
+  const heldEntry = (): LegendEntry | null => {
+    const held = workplace.drawWith
+    return held && !isUnitPen(held) ? held : null
   }
 
   function pen(): Pen | null {
@@ -67,6 +74,14 @@ export function useSheetEditor(map: SheetMap) {
       return outcome.outcome === 'done' ? null : outcome.errors.map((error) => error.detail).join(' ')
     },
     pen,
+    keepSketch(line) {
+      const entry = heldEntry()
+      if (entry) keepSketch(number, line.length > 0 ? { entry: entry.id, line: [...line] } : null)
+    },
+    keptSketch() {
+      const kept = readKeptSketch(number)
+      return kept && kept.entry === heldEntry()?.id ? kept.line : []
+    },
     askReading: (at) => (workplace.pendingReadingPlace = at),
     say: (sentence) => (workplace.hint = sentence),
     isSnapping: () => workplace.snapping,
@@ -81,6 +96,16 @@ export function useSheetEditor(map: SheetMap) {
     workplace.choose('select')
   })
   watch([() => workplace.tool, () => workplace.drawWith], () => editor.take(workplace.tool))
+  takeUp()
+
+  /** Goes on with the instrument that is held, or with the line that was left unfinished. */
+  function takeUp(): void {
+    const kept = sheet.readOnly === null ? readKeptSketch(number) : null
+    const entry = kept && legendEntries.find(({ id }) => id === kept.entry)
+    if (entry && heldEntry()?.id !== entry.id) workplace.draw(entry)
+    else if (workplace.tool !== 'select') editor.take(workplace.tool)
+  }
+
   watch([() => sheet.itemsVersion, () => workplace.selected], () => editor.refresh())
   onScopeDispose(() => editor.close())
   return editor

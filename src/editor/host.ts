@@ -18,6 +18,10 @@ export interface EditorHost extends EditorView {
   /** Hands a finished change to the one door; answers null, or why it was refused. */
   commit(draft: ChangeDraft): string | null
   pen(): Pen | null
+  /** Keeps the vertices of the line that is being drawn, so that leaving the map loses nothing; none: it is done with. */
+  keepSketch(line: readonly XY[]): void
+  /** The line that was left unfinished with the pen that is held; empty where there is none. */
+  keptSketch(): readonly XY[]
   /** A place was chosen for an attitude or a lineation; its reading is asked for elsewhere. */
   askReading(at: XY): void
   /** One plain sentence to the person. */

@@ -32,6 +32,7 @@ export function aWorkbench(items: readonly Item[] = [], pen: Pen | null = null) 
     snapping: true,
     readOnly: null as string | null,
     refusal: null as string | null,
+    kept: [] as readonly XY[],
     get sketch(): Sketch | null | undefined {
       return bench.sketches.at(-1)
     },
@@ -70,6 +71,8 @@ export function aWorkbench(items: readonly Item[] = [], pen: Pen | null = null) 
       return null
     },
     pen: () => bench.pen,
+    keepSketch: (line) => void (bench.kept = line),
+    keptSketch: () => bench.kept,
     askReading: (place) => void bench.places.push(place),
     say: (sentence) => void bench.said.push(sentence),
     isSnapping: () => bench.snapping,

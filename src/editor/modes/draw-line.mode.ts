@@ -31,11 +31,17 @@ export class DrawLineMode extends QuietMode {
 
   begin(): void {
     this.map.cursor('crosshair')
-    this.tellBeginning()
+    const kept = this.host.keptSketch()
+    if (kept.length === 0) return this.tellBeginning()
+    this.steps.go('drawing')
+    this.vertices = kept.map((at) => ({ at, to: null, id: null }))
+    this.host.say(`Your unfinished line is still here: click on, or Esc gives it up.`)
+    this.show(null)
   }
 
+  /** What is unfinished stays kept: whoever comes back goes on. */
   end(): void {
-    this.clear()
+    this.map.show(null)
     this.host.say('')
   }
 
@@ -74,6 +80,7 @@ export class DrawLineMode extends QuietMode {
   override undoStep(): boolean {
     if (!this.steps.is('drawing')) return false
     this.vertices.pop()
+    this.keep()
     if (this.vertices.length === 0) this.clear()
     else this.show(this.pointer ? this.place(this.pointer) : null)
     return true
@@ -88,6 +95,7 @@ export class DrawLineMode extends QuietMode {
   private add(vertex: Snapped): void {
     if (this.steps.is('waiting')) this.steps.go('drawing')
     this.vertices.push(vertex)
+    this.keep()
     this.host.say('Click on; double click or Enter ends, Backspace takes the last vertex back, Esc gives up.')
     this.show(null)
   }
@@ -111,8 +119,13 @@ export class DrawLineMode extends QuietMode {
   private clear(): void {
     if (this.steps.is('drawing')) this.steps.go('waiting')
     this.vertices = []
+    this.keep()
     this.map.show(null)
     this.tellBeginning()
+  }
+
+  private keep(): void {
+    this.host.keepSketch(this.vertices.map(({ at }) => at))
   }
 
   private tellBeginning(): void {

@@ -168,3 +168,33 @@ describe('drawing a line', () => {
     expect(drawn()?.geometry.coordinates[0]).toEqual([14, 18])
   })
 })
+
+describe('a line that is left unfinished', () => {
+  it('is there again when one comes back, and goes on where it was', () => {
+    const { bench, map, host } = aWorkbench([], pen)
+    const before = new DrawLineMode(map, host, pen)
+    before.begin()
+    before.click(at(0, 0))
+    before.click(at(100, 0))
+    before.end()
+    expect(bench.sketch).toBeNull()
+    const after = new DrawLineMode(map, host, pen)
+    after.begin()
+    expect(bench.sketch?.line).toEqual([
+      [0, 0],
+      [100, 0],
+    ])
+    after.click(at(100, 80))
+    after.key(key('Enter'))
+    expect(bench.commits).toHaveLength(1)
+    expect(bench.kept).toEqual([])
+  })
+
+  it('is forgotten once it is given up', () => {
+    const { bench, mode } = drawing()
+    mode.click(at(0, 0))
+    expect(bench.kept).toEqual([[0, 0]])
+    mode.key(key('Escape'))
+    expect(bench.kept).toEqual([])
+  })
+})
