@@ -5,7 +5,7 @@ export const formats = {
   kmz: { words: 'KMZ', endings: ['kmz'] },
   gpx: { words: 'GPX', endings: ['gpx'] },
   csv: { words: 'CSV', endings: ['csv', 'tsv', 'txt'] },
-  shapefile: { words: 'zipped shapefile', endings: ['zip'] },
+  shapefile: { words: 'Shapefile', endings: ['zip'] },
 } as const satisfies Record<string, { words: string; endings: readonly string[] }>
 
 export type Format = keyof typeof formats

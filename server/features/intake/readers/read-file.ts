@@ -74,5 +74,5 @@ function nameNotes(name: string, format: Format): string[] {
   const { words, endings } = formats[format]
   const fits: readonly string[] = endings
   if (ending === undefined || fits.includes(ending)) return []
-  return [`The name ends in .${ending}, but the file is ${words}; it was read as that.`]
+  return [`The name ends in .${ending}, but the file was read as what it is: ${words}.`]
 }

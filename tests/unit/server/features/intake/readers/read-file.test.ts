@@ -10,7 +10,7 @@ describe('a file is read by what is in it', () => {
   it('whatever its name says, and that is noted', () => {
     expect(read(feature, 'traverse.kml')).toMatchObject({
       reader: 'geojson',
-      notes: ['The name ends in .kml, but the file is GeoJSON; it was read as that.'],
+      notes: ['The name ends in .kml, but the file was read as what it is: GeoJSON.'],
     })
     expect(read(kml(placemark), 'traverse.kml')).toMatchObject({ reader: 'kml', notes: [] })
   })
