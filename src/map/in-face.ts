@@ -1,6 +1,7 @@
 import { booleanPointInPolygon } from '@turf/turf'
 import type { Face } from '@shared/api/faces'
 import type { XY } from '@shared/units'
+import type { GroundBox } from './item-index'
 
 type Ring = readonly (readonly [number, number])[]
 
@@ -18,6 +19,12 @@ export function isInFace(face: Face, at: XY): boolean {
   const [west, south, east, north] = boundsOf(face)
   if (at[0] < west || at[0] > east || at[1] < south || at[1] > north) return false
   return isInRings(face.rings, at)
+}
+
+/** Whether a unit's area may reach into a box: its bounds do. */
+export function mayReach(face: Face, { min, max }: GroundBox): boolean {
+  const [west, south, east, north] = boundsOf(face)
+  return west <= max[0] && east >= min[0] && south <= max[1] && north >= min[1]
 }
 
 /** The pointer asks for every area at every move: bounds are worked out once. */

@@ -3,6 +3,7 @@ import { isLineItem, type Item, type LineItem } from '@shared/items/item'
 import { SYMBOL_REACH } from '@shared/symbols/symbol-reach'
 import { tracePath } from './canvas-paths'
 import { drawDrawing, groundPxPerMm } from './drawing'
+import { mayReach } from './in-face'
 import { paintPlain } from './paint-plain'
 import type { Scene } from './scene'
 import { thinningStep } from './thinning'
@@ -34,8 +35,10 @@ export function* paintSheet(
   const [band, step] = [bandOf(relative.scale), thinningStep(relative.scale)]
   context.save()
   clipToFace(context, scene, paint)
+  const ground = groundInView(view, 0)
   for (const face of scene.faces) {
-    const drawing = paint.isFaceHidden(face.unit) ? undefined : scene.areaOf(face)
+    const isShown = mayReach(face, ground) && !paint.isFaceHidden(face.unit)
+    const drawing = isShown ? scene.areaOf(face) : undefined
     if (!drawing) continue
     const pxPerMm = groundPxPerMm(view, drawing.mmPerMetre)
     const pattern = { pxPerMm: symbolPx, settle: paint.settle }
