@@ -90,10 +90,13 @@ function distinctnessOf(places: readonly ThinnedPoint[]): Map<ThinnedPoint, Degr
   return found
 }
 
+/** One number for a square: rows and columns of a sheet's metres fit in 26 bits each. */
+const squareKey = (column: number, row: number): number => column * 2 ** 26 + row
+
 /** Places by squares of the ground, to ask whether one is near. */
 class Neighbourhood {
   private readonly places: (readonly [number, number])[] = []
-  private squares = new Map<string, (readonly [number, number])[]>()
+  private squares = new Map<number, (readonly [number, number])[]>()
   private size: Metres = 1
 
   /** Sets the squares' size; questions reach one square around. */
@@ -112,15 +115,15 @@ class Neighbourhood {
     const [column, row] = [Math.floor(east / this.size), Math.floor(north / this.size)]
     for (let x = column - 1; x <= column + 1; x++) {
       for (let y = row - 1; y <= row + 1; y++) {
-        const near = this.squares.get(`${x} ${y}`)
-        if (near?.some(([e, n]) => Math.hypot(e - east, n - north) < reach)) return true
+        const near = this.squares.get(squareKey(x, y))
+        if (near?.some(([e, n]) => (e - east) ** 2 + (n - north) ** 2 < reach * reach)) return true
       }
     }
     return false
   }
 
   private put(place: readonly [number, number]): void {
-    const key = `${Math.floor(place[0] / this.size)} ${Math.floor(place[1] / this.size)}`
+    const key = squareKey(Math.floor(place[0] / this.size), Math.floor(place[1] / this.size))
     const known = this.squares.get(key)
     if (known) known.push(place)
     else this.squares.set(key, [place])
