@@ -1,6 +1,7 @@
 import { normalizeAzimuth, toDegrees, toRadians, type Azimuth, type Degrees } from '../units'
 import { dipFigure, formatAttitude } from './attitude-words'
 import { azimuthFigure } from './compass'
+import { dipDirection, dot, lineDirection, poleDirection, strikeDirection } from './directions'
 import type { Plane } from './plane'
 
 /** The attitude of a line: azimuth of its down-going end from true north, null for a vertical line; plunge 0–90. */
@@ -9,36 +10,9 @@ export interface Line {
   plunge: Degrees
 }
 
-/** Unit vector: east, north, up. */
-type Vector = readonly [number, number, number]
-
 /** Furthest that a line may lie off the plane it is stated to lie on before the two contradict. A hand-held compass reads
  *  a line and a plane to a few degrees each. Source: common practice; the limit is ours. */
 export const FURTHEST_OFF_PLANE: Degrees = 5
-
-const sin = (degrees: Degrees): number => Math.sin(toRadians(degrees))
-const cos = (degrees: Degrees): number => Math.cos(toRadians(degrees))
-const dot = (a: Vector, b: Vector): number => a[0] * b[0] + a[1] * b[1] + a[2] * b[2]
-
-/** Down along a line. Source: orientation.md section 2. */
-const lineVector = ({ trend, plunge }: Line): Vector => [
-  cos(plunge) * sin(trend ?? 0),
-  cos(plunge) * cos(trend ?? 0),
-  -sin(plunge),
-]
-/** Along a plane's strike, and down its dip. Source: orientation.md section 2. */
-const strikeVector = ({ strike }: Plane): Vector => [sin(strike ?? 0), cos(strike ?? 0), 0]
-const dipVector = ({ strike, dip }: Plane): Vector => [
-  cos(dip) * cos(strike ?? 0),
-  -cos(dip) * sin(strike ?? 0),
-  -sin(dip),
-]
-/** Up along a plane's normal. Source: orientation.md section 2. */
-const poleVector = ({ strike, dip }: Plane): Vector => [
-  sin(dip) * cos(strike ?? 0),
-  -sin(dip) * sin(strike ?? 0),
-  cos(dip),
-]
 
 /** A line whose horizontal part is shorter than this share of it has no trend that anybody could measure. */
 const NO_TREND = 1e-9
@@ -46,8 +20,9 @@ const NO_TREND = 1e-9
 /** The line at a rake on a plane: v = cos r · strike line + sin r · dip line. Source: orientation.md section 6.
  *  @param rake degrees from the strike by the right-hand rule toward down dip, 0–180 */
 export function lineAtRake(plane: Plane, rake: Degrees): Line {
-  const [along, down] = [strikeVector(plane), dipVector(plane)]
-  const part = (axis: 0 | 1 | 2): number => cos(rake) * along[axis] + sin(rake) * down[axis]
+  const [along, down] = [strikeDirection(plane), dipDirection(plane)]
+  const [cos, sin] = [Math.cos(toRadians(rake)), Math.sin(toRadians(rake))]
+  const part = (axis: 0 | 1 | 2): number => cos * along[axis] + sin * down[axis]
   const [east, north, up] = [part(0), part(1), part(2)]
   const plunge = toDegrees(Math.asin(Math.min(1, Math.max(0, -up))))
   const isVertical = Math.hypot(east, north) < NO_TREND
@@ -57,8 +32,9 @@ export function lineAtRake(plane: Plane, rake: Degrees): Line {
 /** Rake of a line on a plane, or of its projection onto it: degrees from the strike by the right-hand rule toward down dip,
  *  0–180. Source: orientation.md section 6. */
 export function rakeOf(plane: Plane, line: Line): Degrees {
-  const vector = lineVector(line)
-  const rake = toDegrees(Math.atan2(dot(vector, dipVector(plane)), dot(vector, strikeVector(plane))))
+  const direction = lineDirection(line)
+  const [along, down] = [dot(direction, strikeDirection(plane)), dot(direction, dipDirection(plane))]
+  const rake = toDegrees(Math.atan2(down, along))
   // A line that leaves the plane upward by a rounding error is at one of the strike's ends, not beyond it.
   return rake < 0 ? (rake > -90 ? 0 : 180) : rake
 }
@@ -66,7 +42,7 @@ export function rakeOf(plane: Plane, line: Line): Degrees {
 /** Angle between a line and a plane, degrees 0–90; 0 where it lies on it. Source: orientation.md section 8, 90 − angle to
  *  the pole. */
 export const angleToPlane = (line: Line, plane: Plane): Degrees =>
-  toDegrees(Math.asin(Math.min(1, Math.abs(dot(lineVector(line), poleVector(plane))))))
+  toDegrees(Math.asin(Math.min(1, Math.abs(dot(lineDirection(line), poleDirection(plane))))))
 
 /** Why a line and the plane it is stated to lie on contradict each other, as a sentence with the figures of both; undefined
  *  within {@link FURTHEST_OFF_PLANE}. */

@@ -1,5 +1,6 @@
 import type { ItemOf, PointItem } from '../items/item'
-import { toRadians, toDegrees, type Degrees } from '../units'
+import { dot, poleDirection } from '../structure/directions'
+import { toDegrees, type Degrees } from '../units'
 import { attitudeCaseOf } from './draw-attitude'
 
 /** How much a kind of plane says about the structure of a sheet. Source: common practice: bedding first, then what was
@@ -64,18 +65,11 @@ function ownImportance(item: PointItem, distinctness: Degrees): number {
 
 /** Angle between two planes, degrees, 0–90: that between their poles. */
 export function planesApart(a: Plane, b: Plane): Degrees {
-  const [p, q] = [pole(a), pole(b)]
-  const cosine = Math.abs(p[0] * q[0] + p[1] * q[1] + p[2] * q[2])
+  const cosine = Math.abs(dot(poleDirection(a), poleDirection(b)))
   return toDegrees(Math.acos(Math.min(1, cosine)))
 }
 
 interface Plane {
   strike: Degrees | null
   dip: Degrees
-}
-
-/** Unit normal of a plane: east, north, up. */
-function pole({ strike, dip }: Plane): [number, number, number] {
-  const [downDip, tilt] = [toRadians((strike ?? 0) + 90), toRadians(dip)]
-  return [Math.sin(downDip) * Math.sin(tilt), Math.cos(downDip) * Math.sin(tilt), Math.cos(tilt)]
 }

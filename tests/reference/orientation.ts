@@ -62,3 +62,15 @@ export const computedRakes: { plane: string; trend: number; plunge: number; rake
 
 /** Angle between a line and a plane. Source: orientation.md section 8: line 030/20 to plane 120/40 is 60 exactly. */
 export const lineToPlane = { trend: 30, plunge: 20, plane: '120/40', angle: 60 }
+
+/** Lines and upward poles of planes as unit vectors east, north, up. Source: orientation.md section 2, computed there. */
+export const lineVectors: { trend: number; plunge: number; vector: [number, number, number] }[] = [
+  { trend: 30, plunge: 20, vector: [0.469846310393, 0.813797681349, -0.342020143326] },
+  { trend: 135, plunge: 45, vector: [0.5, -0.5, -0.707106781187] },
+  { trend: 312.5, plunge: 67.25, vector: [-0.285113227911, 0.261258138859, -0.92220097167] },
+]
+export const poleVectors: { strike: number; dip: number; vector: [number, number, number] }[] = [
+  { strike: 45, dip: 30, vector: [0.353553390593, -0.353553390593, 0.866025403784] },
+  { strike: 330, dip: 60, vector: [0.75, 0.433012701892, 0.5] },
+  { strike: 200, dip: 5, vector: [-0.081899608319, 0.029809019626, 0.996194698092] },
+]
