@@ -17,6 +17,7 @@ const places: { who: Visitor; path: string; shows: string }[] = [
   { who: 'reader', path: '/problems/item-conflict', shows: 'Someone else changed the same items' },
   { who: 'reader', path: '/nowhere', shows: 'There is nothing at this address' },
   { who: 'reader', path: '/api-reference', shows: '/api/health' },
+  { who: 'reader', path: '/symbols', shows: 'Every symbol, every case' },
   { who: 'compiler', path: '/sheets', shows: 'Gannet Head, Merrow Island' },
   { who: 'compiler', path: '/sheets/new', shows: 'New sheet' },
   { who: 'compiler', path: '/sheets/MI-14/compile', shows: 'Whole ledger' },
