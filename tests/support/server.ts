@@ -5,7 +5,7 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import type { Express } from 'express'
 import type { DataSource } from 'typeorm'
-import { createApp } from '../../server/app'
+import { createApp, type AppOptions } from '../../server/app'
 import { readConfig, type Config } from '../../server/config'
 import { loadDemoAccounts } from '../../server/features/accounts/demo-accounts'
 import { createServices, type Services } from '../../server/services'
@@ -26,7 +26,10 @@ export interface TestServer {
 }
 
 /** Starts a server with the four demo accounts, no sheet, and working jobs and events. */
-export async function startTestServer(overrides: Partial<Config> = {}): Promise<TestServer> {
+export async function startTestServer(
+  overrides: Partial<Config> = {},
+  { checkAnswers = true }: AppOptions = {},
+): Promise<TestServer> {
   const database = await migratedDatabase()
   const dataFolder = mkdtempSync(join(tmpdir(), 'sheetwright-files-'))
   const server = createServer()
@@ -38,7 +41,7 @@ export async function startTestServer(overrides: Partial<Config> = {}): Promise<
   await loadDemoAccounts(services.dataSource)
   await services.events.open()
   await services.jobs.start({ work: true })
-  const app = createApp(services, { checkAnswers: true })
+  const app = createApp(services, { checkAnswers })
   server.on('request', app)
   return {
     app,

@@ -5,12 +5,13 @@ import type { itemVersionSchema, LedgerRow } from '@shared/api/ledger'
 import type { LedgerEntry } from '@shared/api/sheets'
 import type { Edit } from '@shared/changes/change-set'
 import type { Item } from '@shared/items/item'
+import { JsonParts } from '../../platform/http/json-parts'
 import { problem } from '../../platform/problem'
 import { selectEditsOf, selectTouchedIds } from './comparison.queries'
 import { selectAuthors, selectEntries, selectEntriesOf } from './entries.queries'
 import { selectVersions } from './history.queries'
 import { requireReached } from './ledger-rules'
-import { latestRevision, selectItemsAt } from './ledger.queries'
+import { latestRevision, selectItemsAt, selectItemTextsAt } from './ledger.queries'
 import { selectPage, type Listing } from './listing.queries'
 import { selectNamedRevisions } from './named-revisions.queries'
 
@@ -27,13 +28,16 @@ export interface ChangesSince {
 export class HistoryService {
   constructor(private readonly dataSource: DataSource) {}
 
-  /** All items of a sheet at a revision, the latest unless given, ordered by id. */
-  async listItems(sheetId: string, revision?: number): Promise<{ revision: number; items: Item[] }> {
+  /** All items of a sheet at a revision, the latest unless given, ordered by id: as JSON text, because a sheet of a
+   *  hundred thousand items need not become objects on its way through. */
+  async listItems(sheetId: string, revision?: number): Promise<JsonParts> {
     const em = this.dataSource.manager
     const latest = await latestRevision(em, sheetId)
     requireReached(revision ?? latest, latest, 'revision')
     const at = revision ?? latest
-    return { revision: at, items: await this.itemsAt(em, sheetId, at) }
+    const items = await selectItemTextsAt(em, sheetId, at)
+    const parts = items.map((text, index) => (index === 0 ? text : `,${text}`))
+    return new JsonParts(`${sheetId}-${at}`, [`{"revision":${at},"items":[`, ...parts, ']}'])
   }
 
   /** Items at a revision, ordered by id: the same revision always gives the same list. */

@@ -125,6 +125,25 @@ export async function selectItemsAt(
   return rows.map(toItem)
 }
 
+/** Items as they were at a revision as JSON texts without brackets, some thousand items in each, ordered by id. */
+export async function selectItemTextsAt(
+  em: EntityManager,
+  sheetId: string,
+  revision: number,
+): Promise<string[]> {
+  const rows = await em.query<{ items: string }[]>(
+    `SELECT string_agg(item, ',' ORDER BY place) AS items FROM (
+       SELECT row_number() OVER (ORDER BY version.item_id) AS place,
+         '{"kind":"' || version.kind || '","id":"' || version.item_id || '","geometry":'
+           || coalesce(ST_AsGeoJSON(version.geometry, 3, 0), 'null') || ',"properties":' || version.properties || '}' AS item
+       FROM item_version AS version
+       WHERE sheet_id = $1 AND since <= $2 AND (until IS NULL OR until > $2)
+     ) AS written GROUP BY place / ${BATCH} ORDER BY place / ${BATCH}`,
+    [sheetId, revision],
+  )
+  return rows.map((row) => row.items)
+}
+
 /** Current items of a sheet, ordered by id; of one kind, if given. */
 export async function selectCurrentItems(em: EntityManager, sheetId: string, kind?: string): Promise<Item[]> {
   const rows = await em.query<ItemRow[]>(

@@ -1,9 +1,12 @@
+import { Readable } from 'node:stream'
+import { pipeline } from 'node:stream/promises'
 import type { Request, RequestHandler, Response, Router } from 'express'
 import type { z } from 'zod'
 import { roles as allRoles, type Role } from '@shared/api/accounts'
 import type { Access, Endpoint, Form } from '@shared/api/endpoint'
 import { problem } from '../problem'
 import type { SheetIdentity, SignedIn } from './access'
+import { JsonParts } from './json-parts'
 import { parseInput, parsePath } from './parse-input'
 import { readJson, readUpload, removeUpload, type UploadedFile } from './read-body'
 import { checkToken } from './session'
@@ -32,8 +35,10 @@ export type Call<
   response: Response
 } & (F extends 'upload' ? { file: UploadedFile } : unknown)
 
-/** What a handler gives back: the answer, or nothing where it writes the response itself. */
-type Answer<A extends z.ZodType, F extends Form> = F extends 'download' | 'events' ? void : z.input<A>
+/** What a handler gives back: the answer, whole or in parts, or nothing where it writes the response itself. */
+type Answer<A extends z.ZodType, F extends Form> = F extends 'download' | 'events'
+  ? void
+  : z.input<A> | JsonParts
 
 /** Mounts an endpoint: lets in whom its access allows, parses what came, answers what the handler gives.
  *  Order: signed in? token? path? sheet and role? query and body? So a stranger learns nothing from the later ones. */
@@ -72,7 +77,9 @@ export function serve<
       }
       // TypeScript cannot follow that `admit` and `readInput` give what the endpoint's own access and form promise.
       const answer = await handler(call as unknown as Call<P, Q, B, X, F>)
-      if (endpoint.form !== 'download' && endpoint.form !== 'events') send(endpoint, response, answer)
+      if (endpoint.form === 'download' || endpoint.form === 'events') return
+      if (answer instanceof JsonParts) await sendParts(endpoint, request, response, answer)
+      else send(endpoint, response, answer)
     } finally {
       if (file) await removeUpload(file)
     }
@@ -161,6 +168,22 @@ function send(endpoint: Endpoint, response: Response, answer: unknown): void {
   }
   if (response.locals.context.checkAnswers) checkAnswer(endpoint, answer)
   response.status(status).json(answer)
+}
+
+/** Writes a large answer part by part, as fast as its reader takes it; nothing of it to a reader who has it already. */
+async function sendParts(
+  endpoint: Endpoint,
+  request: Request,
+  response: Response,
+  { tag, parts }: JsonParts,
+): Promise<void> {
+  if (response.locals.context.checkAnswers) checkAnswer(endpoint, JSON.parse(parts.join('')))
+  response.type('json').set({ ETag: `"${tag}"`, 'Cache-Control': 'private, no-cache' })
+  if (request.fresh) {
+    response.status(304).end()
+    return
+  }
+  await pipeline(Readable.from(parts), response)
 }
 
 /** Answers follow the contract; a mistake in one is ours, so it is an unexpected problem. */

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import { describe, expect, it } from 'vitest'
 import type { Item } from '@shared/items/item'
-import { aContact, put, remove, useLedgerDesk } from '../../support/ledger-desk'
+import { aContact, anAttitude, put, remove, useLedgerDesk } from '../../support/ledger-desk'
 
 const desk = useLedgerDesk()
 
@@ -114,5 +114,24 @@ describe('bulk', () => {
     const { body } = await desk.compiler.get(`/api/sheets/${desk.sheet}/items/${first}/versions`)
     expect(body[0]).toMatchObject({ provenance: { file: 'many.geojson', record: 1 } })
     expect(body[0].item.geometry.coordinates[0]).toEqual([285_000, 5_280_000])
+  })
+})
+
+describe('all items of a sheet', () => {
+  it('come as one answer with a tag of its revision, and not again to who has them', async () => {
+    const attitude = anAttitude({ note: 'a "quoted" line\nand another, ü' })
+    await desk.post(desk.editor, [put(attitude), put(aContact())])
+    const path = `/api/sheets/${desk.sheet}/items`
+    const first = await desk.editor.get(path)
+    expect(first.body.items).toHaveLength(3)
+    expect(await desk.find(attitude.id)).toMatchObject({
+      properties: { note: 'a "quoted" line\nand another, ü' },
+    })
+    const tag = first.headers['etag'] ?? ''
+    expect((await desk.editor.get(path).set('If-None-Match', tag)).status).toBe(304)
+    await desk.post(desk.editor, [put(aContact())], { base: 2 })
+    const second = await desk.editor.get(path).set('If-None-Match', tag)
+    expect([second.status, second.body.items.length]).toEqual([200, 4])
+    expect((await desk.editor.get(`${path}?revision=2`)).headers['etag']).toBe(tag)
   })
 })

@@ -59,6 +59,7 @@ const params: Record<string, () => string> = {
   sheet: () => sheet,
   srid: () => '32626',
   edition: () => '1',
+  revision: () => '1',
   name: () => 'sheet.pdf',
   token: () => 'a-token-that-nobody-has-made',
 }
