@@ -69,7 +69,7 @@ function merrowSheet({ number, title, seed, corner, attitudes, prefix }: SheetPl
       extent,
       origin: islandOrigin,
       convergenceAt,
-      attitudes,
+      measure: { attitudes },
       prefix,
       apart: 290,
     },

@@ -25,7 +25,7 @@ export function longStory(sheet: DemoSheet): Chapter[] {
   const [middle, quarter] = [Math.ceil(sheet.attitudes.length / 2), Math.ceil(sheet.contacts.length / 4)]
   const { dikes, markerBeds } = byType(sheet.otherLines)
   return [
-    chapter('editor', 212, 'legend: twenty-one units, sea to Stormcrest Group', sheet.units),
+    chapter('editor', 212, `legend: ${sheet.units.length} units, sea to Stormcrest Group`, sheet.units),
     {
       ...intake(
         190,

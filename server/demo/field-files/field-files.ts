@@ -42,7 +42,12 @@ export function doFieldWork(): FieldWork {
   const { survey } = makeSheet(gannetHead)
   const random = seededRandom(gannetHead.options.seed + 100)
   const party = (letters: string, passes?: (station: Station) => boolean): Reading[] =>
-    readAll(merrowTruth, survey.places.take(PER_PARTY, passes, 110), letters, random)
+    readAll(
+      merrowTruth,
+      survey.places.take(PER_PARTY, { apart: 110, ...(passes ? { passes } : {}) }),
+      letters,
+      random,
+    )
   return {
     ridge: party('RT'),
     valley: party('VT'),

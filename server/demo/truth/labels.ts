@@ -2,7 +2,7 @@ import type { Metres, XY } from '@shared/units'
 import type { Line } from './contours'
 import type { MapBounds } from './map-bounds'
 import { areasOf, cellsNear, type Raster } from './raster'
-import { isInside } from './small-rings'
+import { RingIndex } from './small-rings'
 
 /** A place inside an area, with the label of the unit or the kind of cover that the area shows. */
 export interface Label {
@@ -30,6 +30,7 @@ export function makeLabels(
   lines: readonly Line[],
   leftOut: readonly Line[],
 ): Label[] {
+  const hidden = new RingIndex(leftOut)
   const isWithin = (cell: number): boolean => {
     const [x, y] = raster.centreOf(cell)
     const key = raster.areas[raster.codes[cell] ?? 0]?.key
@@ -44,7 +45,7 @@ export function makeLabels(
   const near = cellsNear(raster, lines, Math.round(OFF_LINES / raster.cell))
   return areasOf(raster).flatMap((cells) => {
     if (cells.length < FEWEST_CELLS) return []
-    const free = cells.filter((cell) => !leftOut.some((ring) => isInside(ring, raster.centreOf(cell))))
+    const free = cells.filter((cell) => !hidden.holds(raster.centreOf(cell)))
     return spread(raster, near, free, isWithin).map((cell) => ({
       at: raster.centreOf(cell),
       shows: raster.areas[raster.codes[cell] ?? 0]?.shows ?? '',
@@ -70,7 +71,7 @@ function spread(
   const chosen = first === undefined ? [] : [first]
   for (const candidate of deepest) {
     if ((depths[candidate] ?? 0) < clear) break
-    if (!isFree(candidate)) continue
+    if (!isOnCoarseCell(raster, candidate) || !isFree(candidate)) continue
     const [x, y] = centreOf(candidate)
     const isFar = chosen.every((other) => {
       const [otherX, otherY] = centreOf(other)
@@ -80,3 +81,8 @@ function spread(
   }
   return chosen
 }
+
+/** Further labels need not be looked for on every cell. */
+const COARSE = 4
+const isOnCoarseCell = ({ columns }: Raster, cell: number): boolean =>
+  (cell % columns) % COARSE === 0 && Math.floor(cell / columns) % COARSE === 0

@@ -9,7 +9,7 @@ import { misplaced, tilted, type Noise } from './noise'
 import { planeOfGradient, planeOfNormal, type GridPlane } from './planes'
 import { beddingNormal, lineOf, normalOf, type Measured, type Station } from './stations'
 import type { Truth } from './truth'
-import { coverUnits } from './units'
+import { unitLabelOf } from './units'
 
 /** Turns stations and labels of the truth into items of a sheet, with the errors of measuring. */
 export class PointItems {
@@ -108,7 +108,7 @@ export class PointItems {
   }
 
   label({ at, shows }: Label, units: readonly ItemOf<'unit'>[]): ItemOf<'unit-label'> {
-    const label = coverUnits.find(({ cover }) => cover === shows)?.label ?? shows
+    const label = unitLabelOf(shows)
     const unit = units.find(({ properties }) => properties.label === label)
     if (!unit) throw new RangeError(`There is no unit ${label}.`)
     return {

@@ -1,3 +1,4 @@
+import Flatbush from 'flatbush'
 import type { Metres, XY } from '@shared/units'
 import { levelLines, type Line } from './contours'
 import { isClosed, lengthOf } from './cut-lines'
@@ -7,30 +8,47 @@ import type { Sampled } from './lattice'
 export function settle(sampled: Sampled, shortest: Metres): { sampled: Sampled; leftOut: Line[] } {
   const leftOut = levelLines(sampled, 0).filter((line) => isClosed(line) && lengthOf(line) < shortest)
   if (leftOut.length === 0) return { sampled, leftOut }
-  const rings = leftOut.map((ring) => ({ ring, box: boxOf(ring) }))
-  const flips = (xy: XY): boolean => rings.some(({ ring, box }) => isInBox(box, xy) && isInside(ring, xy))
+  const rings = new RingIndex(leftOut)
   const { lattice } = sampled
   const values = sampled.values.slice()
-  for (const { box } of rings) {
-    for (const [index, xy] of nodesInBox(lattice, box)) if (flips(xy)) values[index] = -(values[index] ?? 0)
+  for (const ring of leftOut) {
+    for (const [index, xy] of nodesInBox(lattice, boxOf(ring))) {
+      if (isInside(ring, xy)) values[index] = -(values[index] ?? 0)
+    }
   }
   return {
     leftOut,
-    sampled: { lattice, values, surface: (xy) => (flips(xy) ? -1 : 1) * sampled.surface(xy) },
+    sampled: { lattice, values, surface: (xy) => (rings.holds(xy) ? -1 : 1) * sampled.surface(xy) },
+  }
+}
+
+/** Closed lines, to be asked whether any of them holds a place. */
+export class RingIndex {
+  private readonly boxes: Flatbush | undefined
+
+  constructor(private readonly rings: readonly Line[]) {
+    // An index of nothing cannot be built.
+    if (rings.length === 0) return
+    this.boxes = new Flatbush(rings.length)
+    for (const ring of rings) this.boxes.add(...boxOf(ring))
+    this.boxes.finish()
+  }
+
+  holds([x, y]: XY): boolean {
+    const near = this.boxes?.search(x, y, x, y) ?? []
+    return near.some((index) => isInside(this.rings[index] ?? [], [x, y]))
   }
 }
 
 type Box = readonly [west: Metres, south: Metres, east: Metres, north: Metres]
 
-const boxOf = (ring: Line): Box => [
+/** West, south, east and north end of a line. */
+export const boxOf = (ring: Line): Box => [
   Math.min(...ring.map(([x]) => x)),
   Math.min(...ring.map(([, y]) => y)),
   Math.max(...ring.map(([x]) => x)),
   Math.max(...ring.map(([, y]) => y)),
 ]
-
-const isInBox = ([west, south, east, north]: Box, [x, y]: XY): boolean =>
-  x >= west && x <= east && y >= south && y <= north
 
 function nodesInBox({ extent, columns, rows, nodeAt }: Sampled['lattice'], box: Box): [number, XY][] {
   const [cellX, cellY] = [extent.width / columns, extent.height / rows]

@@ -18,7 +18,7 @@ export type Measured = 'bedding' | 'foliation' | 'cleavage' | 'joint'
 /** Free places of a sheet: rock at the surface, clear of all lines. One place is given away once. */
 export class FreePlaces {
   private readonly cells: readonly number[]
-  private readonly taken = new Map<string, XY[]>()
+  private readonly taken = new Map<number, XY[]>()
 
   /** @param near cells beside lines or labels   @param clear distance from the edges of areas */
   constructor(
@@ -38,17 +38,15 @@ export class FreePlaces {
     this.cells = shuffled(free, random)
   }
 
-  /** Up to `wanted` places that pass, apart from one another and from all given away before.
-   *  @param apart the usual distance, or less */
-  take(
-    wanted: number,
-    passes: (station: Station) => boolean = () => true,
-    apart: Metres = this.apart,
-  ): Station[] {
+  /** Up to `wanted` places, apart from one another and from all given away before.
+   *  @param units labels of the units in which they lie, if not in any   @param apart the usual distance, or less */
+  take(wanted: number, { units, passes = () => true, apart = this.apart }: Wish = {}): Station[] {
+    const { codes, areas, centreOf } = this.raster
     const found: Station[] = []
     for (const cell of this.cells) {
       if (found.length >= wanted) break
-      const at = this.raster.centreOf(cell)
+      if (units && !units.includes(areas[codes[cell] ?? 0]?.shows ?? '')) continue
+      const at = centreOf(cell)
       if (this.isCrowded(at, apart)) continue
       const station = { at, rock: rockAt(this.truth, at) }
       if (!passes(station)) continue
@@ -60,24 +58,39 @@ export class FreePlaces {
 
   /** Keeps others away from a place. */
   occupy(at: XY): void {
-    const key = this.keyOf(at, 0, 0)
-    this.taken.set(key, [...(this.taken.get(key) ?? []), at])
+    const [column, row] = this.squareOf(at)
+    const key = keyOf(column, row)
+    const others = this.taken.get(key)
+    if (others) others.push(at)
+    else this.taken.set(key, [at])
   }
 
   private isCrowded(at: XY, apart: Metres): boolean {
+    const [column, row] = this.squareOf(at)
     for (const right of [-1, 0, 1]) {
       for (const up of [-1, 0, 1]) {
-        const others = this.taken.get(this.keyOf(at, right, up)) ?? []
-        if (others.some(([x, y]) => Math.hypot(x - at[0], y - at[1]) < apart)) return true
+        const others = this.taken.get(keyOf(column + right, row + up))
+        if (others?.some(([x, y]) => Math.hypot(x - at[0], y - at[1]) < apart)) return true
       }
     }
     return false
   }
 
-  private keyOf([x, y]: XY, right: number, up: number): string {
-    return `${Math.floor(x / this.apart) + right} ${Math.floor(y / this.apart) + up}`
+  /** The square, as wide as places lie apart, that holds a place. */
+  private squareOf([x, y]: XY): [column: number, row: number] {
+    return [Math.floor(x / this.apart), Math.floor(y / this.apart)]
   }
 }
+
+/** What a station shall be like. */
+export interface Wish {
+  units?: readonly string[]
+  passes?: (station: Station) => boolean
+  apart?: Metres
+}
+
+/** One number for a square: rows are far fewer than a million. */
+const keyOf = (column: number, row: number): number => column * 1_000_000 + row
 
 /** Gradient of the layers at a station: the upward or downward normal of the bedding, toward the younger side. */
 export const beddingNormal = ({ ground }: Truth, { at, rock }: Station): Vector3 =>

@@ -1,10 +1,11 @@
+import Flatbush from 'flatbush'
 import { faceRings, placeInside, type FaceRing } from './face-rings'
 import type { Label } from './labels'
 import { reachesEdge, type Extent } from './lattice'
 import type { MapLine } from './linework'
 import type { MapBounds } from './map-bounds'
 import type { Line } from './contours'
-import { isInside } from './small-rings'
+import { boxOf, isInside, RingIndex } from './small-rings'
 
 /** Areas smaller than this, some 2.6 mm² at 1:24 000, are too small to be shown: square metres. */
 const LEAST_FACE = 1500
@@ -59,11 +60,22 @@ export function labelsForRest(
     lines.filter(bounds).map(({ line }) => line),
     at.lattice.extent,
   )
+  const hidden = new RingIndex(leftOut)
+  const byPlace = indexLabels(labels)
   return rings.flatMap(({ ring }) => {
     const place = placeInside(ring)
-    if (leftOut.some((other) => isInside(other, place))) return []
+    if (hidden.holds(place)) return []
     const { shows } = at.areaAt(place)
-    const isLabelled = labels.some((label) => label.shows === shows && isInside(ring, label.at))
+    const isLabelled = byPlace(ring).some((label) => label.shows === shows && isInside(ring, label.at))
     return isLabelled ? [] : [{ at: place, shows }]
   })
+}
+
+/** Finds labels in the box of a ring. */
+function indexLabels(labels: readonly Label[]): (ring: Line) => Label[] {
+  if (labels.length === 0) return () => []
+  const index = new Flatbush(labels.length)
+  for (const { at } of labels) index.add(at[0], at[1], at[0], at[1])
+  index.finish()
+  return (ring) => index.search(...boxOf(ring)).flatMap((found) => labels[found] ?? [])
 }

@@ -210,6 +210,10 @@ export const coverUnits: readonly (Described & { cover: CoverKind })[] = [
   },
 ]
 
+/** The label of a unit on the map, from that label or from the kind of cover. */
+export const unitLabelOf = (shows: string): string =>
+  coverUnits.find(({ cover }) => cover === shows)?.label ?? shows
+
 /** Legend of the island, in its order. */
 export const legendUnits: readonly Described[] = [
   ...coverUnits.map(({ cover: _, ...described }) => described),

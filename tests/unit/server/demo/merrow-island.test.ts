@@ -304,8 +304,14 @@ describe('sheets that adjoin', () => {
     expect(atEdge(other, isOn)).toEqual(mine)
   })
 
-  it('have the same units', () => {
-    const described = (sheet: DemoSheet) => sheet.units.map(({ properties }) => properties)
-    for (const { sheet } of sheets) expect(described(sheet)).toEqual(described(large))
+  it('describe the same units alike, and list those that they show', () => {
+    const known = new Map(large.units.map(({ properties }) => [properties.label, properties]))
+    for (const { sheet } of sheets) {
+      const shown = new Set(sheet.labels.map(({ properties }) => properties.unit))
+      expect(new Set(sheet.units.map(({ id }) => id))).toEqual(shown)
+      for (const { properties } of sheet.units) {
+        expect(known.get(properties.label) ?? properties).toEqual(properties)
+      }
+    }
   })
 })
