@@ -29,7 +29,8 @@ export function useReadingDraft<D extends NorthDraft & { text: string }>(source:
   const settled = ref({ ...starting() })
   const refusal = ref('')
   const kept = item() ? unfinished.take(key()) : undefined
-  if (kept !== undefined) draft.text = kept
+  // It was written below, from a draft of the same form.
+  if (kept !== undefined) Object.assign(draft, JSON.parse(kept) as D)
 
   const hasChanges = computed(() => !isSame({ ...draft }, settled.value))
 
@@ -58,7 +59,7 @@ export function useReadingDraft<D extends NorthDraft & { text: string }>(source:
   /** Takes what was changed and reads; keeps what does not, so that coming back finds it. */
   function leave(): void {
     if (!item() || !hasChanges.value || !sheet.mayEdit) return
-    if (!take()) unfinished.keep(key(), draft.text)
+    if (!take()) unfinished.keep(key(), JSON.stringify(draft))
   }
 
   return { draft, hasChanges, refusal, take, leave }

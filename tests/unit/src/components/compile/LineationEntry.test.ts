@@ -161,6 +161,17 @@ describe('the reading of a lineation on the sheet', () => {
     })
   })
 
+  it('keeps what does not read yet, line and plane, for who comes back', async () => {
+    const { sheet, entry } = mountExisting()
+    await entry.get('input.reading').setValue('125/33')
+    await entry.get('input.plane').setValue('045/')
+    entry.unmount()
+    expect(sheet.committed).toEqual([])
+    const { entry: again } = mountExisting()
+    expect(valueOf(again, 'input.reading')).toBe('125/33')
+    expect(valueOf(again, 'input.plane')).toBe('045/')
+  })
+
   it('forgets its plane when none is stated', async () => {
     const { sheet, entry } = mountExisting()
     await entry.get('select').setValue('')
