@@ -1,4 +1,4 @@
-import { unzipSync, type UnzipFileInfo } from 'fflate'
+import { Unzip, UnzipInflate, unzipSync, type UnzipFileInfo } from 'fflate'
 import { unreadable, type Unreadable } from './read-outcome'
 
 /** Most that the files taken out of an archive may hold together, bytes: four times the largest field file. */
@@ -19,8 +19,8 @@ export const isZip = (bytes: Uint8Array): boolean =>
   bytes[1] === 0x4b &&
   ((bytes[2] === 3 && bytes[3] === 4) || (bytes[2] === 5 && bytes[3] === 6))
 
-/** Takes the wanted files out of a zip archive, in memory and within limits: what an archive says of its sizes is not
- *  exceeded by a byte, and one that says too much is refused before anything is unpacked. Archives inside it stay shut.
+/** Takes the wanted files out of a zip archive, in memory and within limits: one that says that it is too large is refused
+ *  before anything is unpacked, one that is larger than it says as soon as that shows. Archives inside it stay shut.
  *  Source: PKWARE APPNOTE by way of fflate. */
 export function unpack(bytes: Uint8Array, wanted: (name: string) => boolean): Unpacked | Unreadable {
   const entries: UnzipFileInfo[] = []
@@ -32,14 +32,41 @@ export function unpack(bytes: Uint8Array, wanted: (name: string) => boolean): Un
   const chosen = entries.filter(({ name }) => wanted(name))
   const refusal = findRefusal(entries, chosen)
   if (refusal) return unreadable(refusal)
+  const files = inflate(bytes, new Map(chosen.map(({ name, originalSize }) => [name, originalSize])))
+  if (!files) return unreadable('The zip archive is not whole: its files are not as long as it says.')
+  const others = entries.map(({ name }) => name).filter((name) => !files.has(name) && !name.endsWith('/'))
+  return { outcome: 'unpacked', files, others }
+}
+
+/** Bytes that are inflated at one go; they may give a thousand times as many. */
+const STEP_BYTES = 65_536
+
+/** The files with their sizes as announced; undefined where one is not as long as that. Unpacked step by step, so that one
+ *  that swells beyond what it says is dropped while it is small. */
+function inflate(bytes: Uint8Array, sizes: ReadonlyMap<string, number>): Map<string, Uint8Array> | undefined {
+  const files = new Map([...sizes].map(([name, size]) => [name, { whole: new Uint8Array(size), length: 0 }]))
+  let isBroken = false
+  const unzip = new Unzip((entry) => {
+    const file = files.get(entry.name)
+    if (!file) return
+    file.length = 0
+    entry.ondata = (fault, chunk) => {
+      isBroken ||= fault !== null || file.length + chunk.length > file.whole.length
+      if (!isBroken) file.whole.set(chunk, file.length)
+      file.length += chunk?.length ?? 0
+    }
+    entry.start()
+  })
+  unzip.register(UnzipInflate)
   try {
-    const names = new Set(chosen.map(({ name }) => name))
-    const files = new Map(Object.entries(unzipSync(bytes, { filter: ({ name }) => names.has(name) })))
-    const others = entries.map(({ name }) => name).filter((name) => !names.has(name) && !name.endsWith('/'))
-    return { outcome: 'unpacked', files, others }
+    for (let at = 0; at < bytes.length && !isBroken; at += STEP_BYTES) {
+      unzip.push(bytes.subarray(at, at + STEP_BYTES), at + STEP_BYTES >= bytes.length)
+    }
   } catch {
-    return unreadable('The zip archive is not whole: its files cannot be unpacked.')
+    return undefined
   }
+  const isWhole = !isBroken && [...files.values()].every(({ whole, length }) => length === whole.length)
+  return isWhole ? new Map([...files].map(([name, { whole }]) => [name, whole])) : undefined
 }
 
 function findRefusal(

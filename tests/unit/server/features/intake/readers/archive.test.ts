@@ -64,9 +64,22 @@ describe('a zip archive', () => {
     )
   })
 
-  it('that says it is smaller than it is gives no more than it says', () => {
+  it.each([
+    ['smaller', 200],
+    ['larger', 2_000_000],
+  ])('that says it is %s than it is, is refused', (_, size) => {
     const bytes = zip({ 'doc.kml': strToU8(kml(placemark.repeat(500))) })
-    expect(reasonOf(claiming(bytes, 200), 'lie.kmz')).toMatch(/not whole: it does not end with <\/kml>/)
+    expect(reasonOf(claiming(bytes, size), 'lie.kmz')).toMatch(/its files are not as long as it says/)
+  })
+
+  it('that swells beyond what it says is dropped at the first step', () => {
+    // Thirty million zeros in thirty thousand bytes.
+    const bytes = claiming(zip({ 'doc.kml': new Uint8Array(30_000_000) }), 1000)
+    expect(reasonOf(bytes, 'bomb.kmz')).toMatch(/its files are not as long as it says/)
+  })
+
+  it('keeps files that are stored and not packed', () => {
+    expect(read(zipSync({ 'doc.kml': document }, { level: 0 }), 'walk.kmz').outcome).toBe('read')
   })
 
   it('with names that climb out of it is read like any other: names are not paths here', () => {
