@@ -163,8 +163,8 @@ describe('the reading of a lineation on the sheet', () => {
 
   it('keeps what does not read yet, line and plane, for who comes back', async () => {
     const { sheet, entry } = mountExisting()
-    await entry.get('input.reading').setValue('125/33')
     await entry.get('input.plane').setValue('045/')
+    await entry.get('input.reading').setValue('125/33')
     entry.unmount()
     expect(sheet.committed).toEqual([])
     const { entry: again } = mountExisting()
