@@ -1,4 +1,4 @@
-import { mount } from '@vue/test-utils'
+import { flushPromises, mount } from '@vue/test-utils'
 import { createPinia, setActivePinia } from 'pinia'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import type { ItemOf } from '@shared/items/item'
@@ -77,5 +77,9 @@ describe('the dip of a fault', () => {
     await form.get('input[value=rotational]').setValue(true)
     expect(form.get('[role=alert]').text()).toContain('Clear the dip first')
     expect(sheet.committed).toEqual([])
+    // The choice goes back to what the fault is, so that it can be made again.
+    await flushPromises()
+    expect(form.get<HTMLInputElement>('input[value=rotational]').element.checked).toBe(false)
+    expect(form.get<HTMLInputElement>('input[value=normal]').element.checked).toBe(true)
   })
 })
