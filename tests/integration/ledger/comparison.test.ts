@@ -6,6 +6,7 @@ import type { XY } from '@shared/units'
 import { selectEdits, countEdits } from '../../../server/features/ledger/comparison.queries'
 import { aContact, aLabel, anAttitude, aUnit, put, remove, useLedgerDesk } from '../../support/ledger-desk'
 import { plansOf } from '../../support/plans'
+import { aSmallMap, putItems, releaseEdition } from '../../support/review-path'
 
 const desk = useLedgerDesk()
 
@@ -83,6 +84,19 @@ describe('comparing two revisions', () => {
     } while (after)
     expect(pages).toBe(3)
     expect(new Set(seen).size).toBe(7)
+  })
+
+  it('takes an edition for the revision that it was made of', async () => {
+    const revision = await putItems(desk.editor, desk.sheet, 1, aSmallMap())
+    expect((await releaseEdition(desk, desk.sheet, revision)).state).toBe('done')
+    const attitude = anAttitude()
+    await desk.post(desk.editor, [put(attitude)], { base: revision })
+    const { body } = await compare({ from: 'edition-1' })
+    expect(body).toMatchObject({
+      from: { revision, edition: 1 },
+      to: { revision: revision + 1, edition: null },
+    })
+    expect(body.differences).toMatchObject([{ id: attitude.id, what: 'added' }])
   })
 
   it('refuses states that do not exist', async () => {

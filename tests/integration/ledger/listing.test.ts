@@ -1,6 +1,8 @@
 import { randomUUID } from 'node:crypto'
 import { beforeEach, describe, expect, it } from 'vitest'
+import { selectPage } from '../../../server/features/ledger/listing.queries'
 import { aContact, anAttitude, aUnit, put, remove, useLedgerDesk } from '../../support/ledger-desk'
+import { plansOf } from '../../support/plans'
 
 const desk = useLedgerDesk()
 
@@ -75,5 +77,39 @@ describe('the ledger as a list', () => {
     const second = (await ask({ itemKind: 'attitude', limit: 2, before: first.next })).body
     expect(second.entries.map((entry: { revision: number }) => entry.revision)).toEqual([3])
     expect(second.next).toBeNull()
+  })
+})
+
+describe('a page of a long history', () => {
+  it('costs what it shows, and not what the ledger holds', async () => {
+    const id = await desk.sheetId()
+    const { dataSource } = desk.server
+    const contact = aContact()
+    await desk.post(desk.compiler, [put(contact)])
+    // Two people took turns for thirty thousand entries, all in the west but for the few above.
+    await dataSource.query(
+      `INSERT INTO revision (sheet_id, number, kind, author_id, message, changed, kinds, extent)
+       SELECT $1, n, 'edit', (SELECT id FROM account ORDER BY email OFFSET n % 2 LIMIT 1), 'moved 1 contact', 0,
+         '{contact}', ST_MakeEnvelope(284000, 5278000, 284100, 5278000 + n % 900, 32626)
+       FROM generate_series(3, 30000) AS n`,
+      [id],
+    )
+    await desk.server.asSuperuser('ANALYZE revision')
+    const { body } = await desk.approver.get(`/api/sheets/${desk.sheet}/members`)
+    const filters = [
+      {},
+      { person: body[0].person.id },
+      { item: contact.id },
+      { place: '285900,5280900,286100,5281100' },
+    ]
+    const plans = await plansOf(dataSource, async (em) => {
+      for (const filter of filters) await selectPage(em, id, { filter, limit: 50 })
+    })
+    expect(plans).toHaveLength(filters.length)
+    for (const plan of plans) {
+      const scans = plan.scans('revision')
+      expect(scans.every(({ index }) => index !== undefined)).toBe(true)
+      expect(Math.max(...scans.map(({ rows }) => rows))).toBeLessThan(500)
+    }
   })
 })
