@@ -32,8 +32,8 @@ export interface LineLayout {
 /** Smallest share of its size in which a decoration is still drawn, on a line that is too short for the whole. */
 const LEAST_SCALE = 0.6
 
-/** Shares out a line: first the arrowheads at its ends, then the arrow of the dip at its middle, then decorations, and
- *  question marks between them; but no decoration where it would leave no room for a single question mark, as doubt must show.
+/** Shares out a line: the arrowheads at its ends, the arrow of the dip at its middle, decorations, and question marks between
+ *  them. Where there is no room for all, doubt must show before what the line is, and that before its dip.
  *  Depends on the whole line and nothing else, so that it is the same in every view, tile and print at one size. */
 export function layOutLine(line: MeasuredLine, symbol: LineSymbol, drawing: LineDrawing): LineLayout {
   const heads = placeHeads(line, drawing.plunge ?? [])
@@ -46,21 +46,26 @@ export function layOutLine(line: MeasuredLine, symbol: LineSymbol, drawing: Line
   }
   const [drawn, within] = [stretchBeside('covers'), stretchBeside('room')]
 
-  const dipAt = drawing.dip && middlePlace(line, within)
-  const dipSpan: Stretch[] = dipAt === undefined ? [] : [around(dipAt, faultDip.size)]
-  const decorationsClearOf = (taken: readonly Stretch[]) =>
+  const decorate = (dipAt: Millimetres | undefined, taken: readonly Stretch[]) =>
     symbol.decoration ? placeDecoration(line, symbol.decoration, { within, taken, dipAt }) : []
-  const spans = (placed: readonly PlacedDecoration[]): Stretch[] =>
-    placed.map(({ at, scale }) => around(at, (symbol.decoration?.size ?? 0) * scale))
+  const middle = drawing.dip && middlePlace(line, within)
+  const besideDip = decorate(middle, dipSpan(middle))
+  const dipAt = symbol.decoration && besideDip.length === 0 ? undefined : middle
+  const decorations = dipAt === middle ? besideDip : decorate(undefined, [])
+  const layout = { heads, drawn, decorations, dipAt, queries: [] }
+  if (drawing.identity === 'certain') return layout
 
-  const decorations = decorationsClearOf(dipSpan)
-  if (drawing.identity === 'certain') return { heads, drawn, decorations, dipAt, queries: [] }
-  const queries = placeQueries(line, { within, taken: [...spans(decorations), ...dipSpan] })
-  if (queries.length > 0) return { heads, drawn, decorations, dipAt, queries }
+  const size = symbol.decoration?.size ?? 0
+  const taken = [...decorations.map(({ at, scale }) => around(at, size * scale)), ...dipSpan(dipAt)]
+  const queries = placeQueries(line, { within, taken })
+  if (queries.length > 0) return { ...layout, queries }
   const alone = placeQueries(line, { within: drawn, taken: [] })
   const queried = alone.map((at) => around(at, queryRoom(line, at)))
-  return { heads, drawn, decorations: decorationsClearOf(queried), dipAt: undefined, queries: alone }
+  return { ...layout, decorations: decorate(alone[0], queried), dipAt: undefined, queries: alone }
 }
+
+const dipSpan = (at: Millimetres | undefined): Stretch[] =>
+  at === undefined ? [] : [around(at, faultDip.size)]
 
 const around = (at: Millimetres, size: Millimetres): Stretch => [at - size / 2, at + size / 2]
 

@@ -109,6 +109,20 @@ describe('decorations', () => {
     }
   })
 
+  it('come before the arrow of a dip, and a question mark before them, where there is no room for all', () => {
+    const thrust = decorated.find(({ id }) => id === 'fault.thrust')
+    if (!thrust) throw new Error('There is no thrust.')
+    const short: MM[] = [
+      [0, 0],
+      [5, 0],
+    ]
+    const dip = { degrees: 30, figure: true }
+    const certain = layOut(short, thrust, { dip })
+    expect([certain.decorations.length, certain.dipAt, certain.queries]).toEqual([1, undefined, []])
+    const doubtful = layOut(short, thrust, { dip, identity: 'questionable' })
+    expect([doubtful.decorations.length, doubtful.dipAt, doubtful.queries.length]).toEqual([0, undefined, 1])
+  })
+
   it('leave the middle to the arrow of a dip', () => {
     fc.assert(
       fc.property(aWalk({ steps: [20, 60], step: [2, 5], turn: 8 }), aRepeated, (line, symbol) => {
