@@ -1,6 +1,7 @@
 import { defineStore } from 'pinia'
 import { computed, ref, shallowRef } from 'vue'
 import type { Role } from '@shared/api/accounts'
+import type { Face } from '@shared/api/faces'
 import type { LedgerEntry, Sheet } from '@shared/api/sheets'
 import { editedId, type Edit } from '@shared/changes/change-set'
 import { sheetProjection, type SheetProjection } from '@shared/geometry/projection'
@@ -40,6 +41,8 @@ export const useSheetFake = defineStore('sheet', () => {
   const sheet = shallowRef<Sheet | null>(aSheet())
   const projection = shallowRef<SheetProjection>(sheetProjection(aSheet().crs.proj4))
   const itemsVersion = ref(0)
+  const faces = shallowRef<Face[]>([])
+  const facesRevision = ref<number | null>(418)
   const entries = shallowRef<LedgerEntry[]>([])
   const saved = shallowRef({ state: 'saved', revision: 418, waiting: 1 })
   const committed = shallowRef<{ label: string; edits: Edit[] }[]>([])
@@ -77,6 +80,8 @@ export const useSheetFake = defineStore('sheet', () => {
     sheet,
     projection,
     itemsVersion,
+    faces,
+    facesRevision,
     entries,
     saved,
     committed,

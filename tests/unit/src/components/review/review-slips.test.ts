@@ -6,6 +6,8 @@ import ContentsTable from '@/components/review/ContentsTable.vue'
 import DecisionForm from '@/components/review/DecisionForm.vue'
 import ReleaseSlip from '@/components/review/ReleaseSlip.vue'
 import SubmissionSlip from '@/components/review/SubmissionSlip.vue'
+import { useSheetFake } from '../../../../support/open-sheet-fake'
+import { aSheetFace, aUnit } from '../../../../support/sheet-items'
 
 vi.mock('@/stores/sheet', async () => ({
   useSheetStore: (await import('../../../../support/open-sheet-fake')).useSheetFake,
@@ -36,6 +38,7 @@ const aSubmission = (overrides: Partial<Submission> = {}): Submission => ({
   edition: null,
   ...overrides,
 })
+const slip = () => mount(SubmissionSlip, { props: { submission: aSubmission(), isBusy: false }, global })
 const global = { stubs: { RouterLink: RouterLinkStub } }
 
 describe('an approver’s decision', () => {
@@ -127,5 +130,28 @@ describe('a release', () => {
   it('that is done leads to the catalogue', () => {
     const wrapper = slip({ edition: 2 }, { ...job, state: 'done' })
     expect(wrapper.findComponent(RouterLinkStub).props('to')).toBe('/catalogue/MI-14/2')
+  })
+})
+
+describe('doubts about a submission', () => {
+  const ring: [number, number][] = [[0, 0], [100, 0], [100, 100], [0, 0]] // prettier-ignore
+
+  it('tell an approver of areas without a unit, with the way to each', () => {
+    const sheet = useSheetFake()
+    sheet.start([aUnit({}), aSheetFace({ authors: 'Rosa Kelp' })])
+    sheet.faces = [
+      { unit: null, rings: [ring] },
+      { unit: null, rings: [ring] },
+    ]
+    const links = slip().findComponent({ name: 'DoubtsList' }).findAllComponents(RouterLinkStub)
+    expect(slip().text()).toContain('2 areas have no unit label')
+    expect(links.map((link) => link.text())).toEqual(['1', '2'])
+  })
+
+  it('are not told while the unit areas are not built yet', () => {
+    const sheet = useSheetFake()
+    sheet.start([])
+    sheet.facesRevision = null
+    expect(slip().find('.doubts').exists()).toBe(false)
   })
 })
