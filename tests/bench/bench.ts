@@ -3,10 +3,11 @@ import { cpus } from 'node:os'
 import { startThrowAwayCluster } from '../../server/scripts/lib/throw-away.mjs'
 import type { BenchRow } from './measure'
 import { ledgerRows } from './rows/ledger'
+import { mapRows } from './rows/map'
 
 /** `npm run bench`: measures each row against its reference in one run, prints one table and writes it as JSON. It judges
  *  nothing: the ratio stands beside its target. */
-const rooms: readonly (() => Promise<BenchRow[]>)[] = [ledgerRows]
+const rooms: readonly (() => Promise<BenchRow[]>)[] = [ledgerRows, mapRows]
 
 const FOLDER = 'coverage'
 

@@ -41,7 +41,8 @@ async function timed(work: () => Promise<unknown>): Promise<number> {
   return performance.now() - begin
 }
 
-function spreadOf(times: readonly number[]): Spread {
+/** Least, median and most of some times. */
+export function spreadOf(times: readonly number[]): Spread {
   const sorted = times.toSorted((a, b) => a - b)
   const at = (index: number): number => sorted[index] ?? NaN
   return { least: at(0), median: at(sorted.length >> 1), most: at(sorted.length - 1) }

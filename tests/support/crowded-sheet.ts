@@ -1,18 +1,13 @@
 import type { Sheet } from '@shared/api/sheets'
 import { itemSchema, type Item } from '@shared/items/item'
 import type { LonLat, XY } from '@shared/units'
+import { seededRandom, type Random } from '@shared/seeded-random'
 import { sheetProjection } from '@shared/geometry/projection'
 
 const WEST = 284_000
 const SOUTH = 5_278_000
 const EAST = 294_000
 const NORTH = 5_289_000
-
-/** Numbers from 0 up to 1 that are the same in every run. Source: Park and Miller 1988, minimal standard generator. */
-function seeded(seed: number): () => number {
-  let state = seed
-  return () => (state = (state * 48_271) % 2_147_483_647) / 2_147_483_647
-}
 
 /** A sheet of 10 × 11 km at 1:24 000, without a server. */
 export function aCrowdedSheet(): Sheet {
@@ -44,7 +39,7 @@ export function aCrowdedSheet(): Sheet {
 /** So many lines and attitudes all over that sheet: of ten lines six are contacts, two faults with their decorations, one a
  *  plunging fold and one a marker bed; each in one of the four location confidences. */
 export function crowdedItems(lines: number, attitudes: number): Item[] {
-  const random = seeded(20_261_201)
+  const random = seededRandom(20_261_201)
   const confidences = ['certain', 'certain', 'approximate', 'inferred', 'concealed']
   const pick = <T>(of: readonly T[]): T => of[Math.floor(random() * of.length)] as T // The list is never empty.
   const idOf = (number: number): string => `00000000-0000-4000-8000-${String(number).padStart(12, '0')}`
@@ -79,7 +74,7 @@ export function crowdedItems(lines: number, attitudes: number): Item[] {
 }
 
 /** A line of forty vertices, 400 to 1 600 m long. */
-function wavingLine(random: () => number): XY[] {
+function wavingLine(random: Random): XY[] {
   const [east, north] = [WEST + random() * (EAST - WEST), SOUTH + random() * (NORTH - SOUTH)]
   const bearing = 0.6 + (random() - 0.5) * 0.8
   const step = (400 + random() * 1200) / 40
