@@ -3,13 +3,17 @@ import type { FrameState } from 'ol/Map'
 import ViewHint from 'ol/ViewHint'
 import type { ViewFrame } from './view-frame'
 
-/** How long drawing may take of one frame: at rest; and for a change of content, as long as lets most sheets show it in the
- *  same frame. Milliseconds. */
-const BUDGET_MS = { resting: 24, changed: 120 } as const
+/** How long drawing may take of one frame: while the view moves; at rest; and for a change of content, as long as lets most
+ *  sheets show it in the same frame. Milliseconds. */
+const BUDGET_MS = { moving: 10, resting: 24, changed: 120 } as const
 /** A picture that takes no longer than this is drawn anew in every frame, milliseconds. */
 const QUICK_MS = 8
 /** A picture that takes longer waits until the view has rested for a moment: the wheel turns by notches. */
 const QUIET_MS = 70
+/** A shifted picture is drawn anew, view moving or not, once it leaves this share of the view bare, or is stretched or shrunk
+ *  by this factor. */
+const MOST_BARE = 0.15
+const MOST_STRETCH = 1.6
 
 export interface PaintRequest {
   context: CanvasRenderingContext2D
@@ -33,7 +37,8 @@ interface Picture {
 /** A picture of our own in an OpenLayers map. It is drawn on a hidden canvas, a little in each frame, and shown when it is
  *  whole; until then the last one is shifted and stretched to where the view has moved. A small sheet is whole at once. */
 export class SheetLayer extends Layer {
-  private readonly box = document.createElement('div')
+  /** What the picture stands in, to be styled as a whole. */
+  readonly box = document.createElement('div')
   private front = openCanvas()
   private back = openCanvas()
   private shown: Picture | null = null
@@ -88,15 +93,18 @@ export class SheetLayer extends Layer {
    *  moves, the last one is shifted. */
   private mayDraw(wanted: Picture): boolean {
     if (this.shown?.version !== wanted.version || this.costMs <= QUICK_MS) return true
-    return wanted.settled && performance.now() - this.movedAt > QUIET_MS
+    if (wanted.settled) return performance.now() - this.movedAt > QUIET_MS
+    return this.job !== null || strays(this.shown.view, wanted.view)
   }
 
-  /** Goes on with the picture that is in the making, or begins it. */
+  /** Goes on with the picture that is in the making, or begins it. While the view moves on, a picture is finished for where
+   *  it was begun. */
   private draw(wanted: Picture, ratio: number): void {
     const current = this.job?.picture
-    if (current?.key !== wanted.key || current.settled !== wanted.settled) this.begin(wanted, ratio)
+    const isOther = current?.key !== wanted.key || current.settled !== wanted.settled
+    if (current?.version !== wanted.version || (wanted.settled && isOther)) this.begin(wanted, ratio)
     const isChanged = this.shown?.version !== wanted.version
-    this.work(isChanged ? BUDGET_MS.changed : BUDGET_MS.resting)
+    this.work(BUDGET_MS[isChanged ? 'changed' : wanted.settled ? 'resting' : 'moving'])
   }
 
   private begin(wanted: Picture, ratio: number): void {
@@ -139,6 +147,17 @@ function openCanvas(): { canvas: HTMLCanvasElement; context: CanvasRenderingCont
   if (!context) throw new TypeError('This browser has no 2D canvas.')
   canvas.style.cssText = 'position:absolute;inset:0;transform-origin:0 0'
   return { canvas, context }
+}
+
+/** Whether a picture of one view shows too little, or too coarsely, in another. */
+function strays(drawn: ViewFrame, view: ViewFrame): boolean {
+  const stretch = view.pxPerMetre / drawn.pxPerMetre
+  if (stretch > MOST_STRETCH || stretch < 1 / MOST_STRETCH) return true
+  const bareX =
+    Math.abs(view.center[0] - drawn.center[0]) * view.pxPerMetre + (view.width * (1 - stretch)) / 2
+  const bareY =
+    Math.abs(view.center[1] - drawn.center[1]) * view.pxPerMetre + (view.height * (1 - stretch)) / 2
+  return bareX > view.width * MOST_BARE || bareY > view.height * MOST_BARE
 }
 
 /** Shifts and stretches a picture of one view to lie where its ground is in another. */
