@@ -1,13 +1,14 @@
+import { execFileSync } from 'node:child_process'
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
 import { DOMParser } from '@xmldom/xmldom'
 import { unzipSync, strFromU8 } from 'fflate'
 import { describe, expect, it } from 'vitest'
 import { parseAttitude } from '@shared/structure/attitude-text'
 import { toRadians } from '@shared/units'
-import {
-  demoFieldFiles,
-  doFieldWork,
-  fieldDeclination,
-} from '../../../../server/demo/field-files/field-files'
+import { demoFieldFiles } from '../../../../server/demo/field-files/field-files'
+import { doFieldWork, fieldDeclination } from '../../../../server/demo/field-files/field-work'
 import type { Reading } from '../../../../server/demo/field-files/party'
 import { convergenceAt, merrowTruth, toIsland } from '../../../../server/demo/merrow-island'
 import { fieldNoise } from '../../../../server/demo/truth/noise'
@@ -70,6 +71,27 @@ describe('field files of the demo', () => {
     )
     expect(document.getElementsByTagName('LineString')).toHaveLength(work.ashBand.length)
     expect(work.ashBand.length).toBeGreaterThan(8)
+  })
+
+  it('zip a shapefile that GDAL reads: two layers, in the zone next to the sheet’s, as many records as were brought', () => {
+    const folder = mkdtempSync(join(tmpdir(), 'sheetwright-field-'))
+    const path = join(folder, 'coast-mapping.zip')
+    writeFileSync(path, bytes('coast-mapping.zip'))
+    const described = execFileSync('ogrinfo', ['-so', '-al', `/vsizip/${path}`]).toString()
+    rmSync(folder, { recursive: true })
+    const counts = new Map(
+      [...described.matchAll(/Layer name: (\w+)[\s\S]*?Feature Count: (\d+)/g)].map(([, name, count]) => [
+        name,
+        Number(count),
+      ]),
+    )
+    expect(counts).toEqual(
+      new Map([
+        ['contacts', work.siltBoundary.length],
+        ['stations', work.coast.length],
+      ]),
+    )
+    expect(described.match(/UTM[ _]zone[ _]25N/gi)?.length).toBeGreaterThanOrEqual(2)
   })
 
   it('write the GPX with a waypoint for each reading', () => {
