@@ -6,6 +6,7 @@ import { groupThousands } from '@shared/sheet-face/figures'
 import { faceSize, fitsPage, proposePage } from '@shared/sheet-face/page-layout'
 import { sheetArea } from '@shared/sheets/sheet-area'
 import type { LonLat, XY } from '@shared/units'
+import { keepAudit } from '../../platform/audit'
 import { problem } from '../../platform/problem'
 import type { LedgerService } from '../ledger/ledger.service'
 import { selectLastEntries } from '../ledger/entries.queries'
@@ -24,6 +25,7 @@ import {
 /** Who asks. */
 export interface Caller {
   id: string
+  email: string
   administrator: boolean
 }
 
@@ -81,8 +83,17 @@ export class SheetsService {
         throw problem('not-allowed', 'Sheets are created by administrators and by editors of a sheet.')
       }
       const id = await this.createWithin(em, newSheet, caller.id)
-      if (!caller.administrator) await insertMembership(em, id, caller.id, 'editor')
+      if (!caller.administrator) await this.letEdit(em, id, newSheet.number, caller)
       return this.get(id, caller.id, em)
+    })
+  }
+
+  private async letEdit(em: EntityManager, id: string, sheet: string, caller: Caller): Promise<void> {
+    await insertMembership(em, id, caller.id, 'editor')
+    await keepAudit(em, {
+      event: { kind: 'membership', email: caller.email, before: [], after: ['editor'] },
+      accountId: caller.id,
+      sheet,
     })
   }
 

@@ -60,6 +60,22 @@ describe('the audit trail', () => {
     })
   })
 
+  it('keeps that who creates a sheet edits it', async () => {
+    const editor = await signInAs(server, 'editor')
+    const { status } = await editor.post('/api/sheets').send({
+      number: 'AU-1',
+      title: 'Audited sheet',
+      scale: 24_000,
+      srid: 32626,
+      area: { by: 'metres', west: 284_000, south: 5_278_000, east: 294_000, north: 5_289_000 },
+      page: { width: 841, height: 594 },
+    })
+    expect(status).toBe(201)
+    expect(await list({ sheet: 'AU-1' })).toMatchObject([
+      { person: { name: 'Tove Orr' }, event: { kind: 'membership', before: [], after: ['editor'] } },
+    ])
+  })
+
   it('keeps submission, decision and release, and downloads of what is not released', async () => {
     const people = { editor: await signInAs(server, 'editor'), approver: await signInAs(server, 'approver') }
     const { number } = await aSheet(server)
