@@ -30,7 +30,14 @@ export function symbolsList(
 ): Block[] {
   if (entries.length === 0) return []
   const rows: SymbolRow[] = [
-    ...entries.map((entry) => ({ title: entry.title, draw: (size: SampleSize) => drawEntry(entry, size) })),
+    ...entries.map((entry, index) => ({
+      title: entry.title,
+      // Entries that share a decoration stand together: the first says what it tells.
+      ...(entry.explains === undefined || entry.explains === entries[index - 1]?.explains
+        ? {}
+        : { about: entry.explains }),
+      draw: (size: SampleSize) => drawEntry(entry, size),
+    })),
     ...marks.map((mark) => ({ title: mark.title, draw: (size: SampleSize) => drawMark(mark, size) })),
   ]
   return [
@@ -48,20 +55,24 @@ interface SampleSize {
 
 interface SymbolRow {
   title: string
+  about?: string
   draw(size: SampleSize): DisplayList
 }
 
-function symbolRow({ title, draw }: SymbolRow, width: Millimetres, type: TypeScale): Block {
+function symbolRow({ title, about, draw }: SymbolRow, width: Millimetres, type: TypeScale): Block {
   // Symbols stay at the size they have on the map; only the type around them follows the page.
   const sample = { width: 18, height: 8 * Math.min(1, type.factor) }
   const indent = sample.width + 4 * type.factor
   const words = paragraph(title, width - indent, { ...type.text, ink: 'black' })
-  const height = Math.max(sample.height, words.height)
+  const more = about === undefined ? undefined : paragraph(about, width - indent, type.text)
+  const wordsHeight = words.height + (more?.height ?? 0)
+  const height = Math.max(sample.height, wordsHeight)
   return {
     height,
     draw: (x, top) => [
       ...place(draw(sample), x, top - (height + sample.height) / 2),
-      ...words.draw(x + indent, top - (height - words.height) / 2),
+      ...words.draw(x + indent, top - (height - wordsHeight) / 2),
+      ...(more?.draw(x + indent, top - (height - wordsHeight) / 2 - words.height) ?? []),
     ],
   }
 }

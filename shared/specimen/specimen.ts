@@ -56,7 +56,7 @@ const family = (id: string, title: string, entries: readonly SpecimenEntry[]): S
 
 const lineEntry = (symbol: LineSymbol): SpecimenEntry => ({
   id: symbol.id,
-  meaning: symbol.title,
+  meaning: symbol.explains === undefined ? symbol.title : `${symbol.title}: ${symbol.explains}`,
   dimensions: lineDimensions(symbol),
   drivenBy: symbol.drivenBy.map(inWords),
   published: locationConfidences.flatMap((confidence): PublishedNumber[] => {

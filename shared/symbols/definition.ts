@@ -60,6 +60,8 @@ export interface LineSymbol {
   variant: string
   /** What it means, as the legend says it. */
   title: string
+  /** What its decoration tells the reader of the map, for example which side the ball stands on. */
+  explains?: string
   /** Names of the item's attributes that the drawing follows, beside the type or form that picks the symbol. */
   drivenBy: readonly string[]
   ink: Ink

@@ -28,6 +28,7 @@ function lineEntry(symbol: LineSymbol, locationConfidence: LocationConfidence): 
     id: lineId(symbol, locationConfidence),
     group: 'lines' as const,
     title: `${symbol.title}, ${locationConfidence}`,
+    ...(symbol.explains === undefined ? {} : { explains: symbol.explains }),
   }
   const { kind, variant } = symbol
   switch (kind) {

@@ -11,6 +11,8 @@ interface EntryOf<K extends LegendKind> {
   kind: K
   group: 'lines' | 'points'
   title: string
+  /** What its decoration tells; said once where several entries share it. */
+  explains?: string
   /** What an item drawn with this entry starts with. Angles are those of the sample. */
   properties: ItemOf<K>['properties']
   /** Explains what is on the map, but is no pen: one picks a plainer entry and says the rest of the item. */

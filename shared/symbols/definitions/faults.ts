@@ -182,7 +182,7 @@ const dipShaft = (from: Millimetres, to: Millimetres): Mark => ({
   ink: 'black',
 })
 
-type Own = Pick<LineSymbol, 'decoration' | 'published'>
+type Own = Pick<LineSymbol, 'decoration' | 'published' | 'explains'>
 
 const symbol = (variant: FaultType, title: string, drivenBy: readonly string[], own: Own): LineSymbol => ({
   ...fault,
@@ -198,12 +198,28 @@ export const faults: readonly LineSymbol[] = [
   symbol('unspecified', 'Fault', ['dip', 'side'], { published: { concealed: fgdc('2.1.7') } }),
   symbol('normal', 'Normal fault', ['side', 'dip'], {
     decoration: ballAndBar,
+    explains: 'ball on the downthrown side',
     published: { certain: fgdc('2.2.1') },
   }),
-  symbol('reverse', 'Reverse fault', ['side', 'dip'], { decoration: openTeeth }),
-  symbol('thrust', 'Thrust', ['side', 'dip'], { decoration: solidTeeth }),
+  symbol('reverse', 'Reverse fault', ['side', 'dip'], {
+    decoration: openTeeth,
+    explains: 'open teeth on the hanging wall',
+  }),
+  symbol('thrust', 'Thrust', ['side', 'dip'], {
+    decoration: solidTeeth,
+    explains: 'teeth on the upper plate',
+  }),
   // Standing on the right side and looking left across a left-lateral fault, the left side has moved to the left: back.
-  symbol('left-lateral', 'Left-lateral fault', ['dip', 'side'], { decoration: halfArrows(-1) }),
-  symbol('right-lateral', 'Right-lateral fault', ['dip', 'side'], { decoration: halfArrows(1) }),
-  symbol('rotational', 'Rotational fault', ['side'], { decoration: ballsAtEnds }),
+  symbol('left-lateral', 'Left-lateral fault', ['dip', 'side'], {
+    decoration: halfArrows(-1),
+    explains: 'half arrows show how the sides moved',
+  }),
+  symbol('right-lateral', 'Right-lateral fault', ['dip', 'side'], {
+    decoration: halfArrows(1),
+    explains: 'half arrows show how the sides moved',
+  }),
+  symbol('rotational', 'Rotational fault', ['side'], {
+    decoration: ballsAtEnds,
+    explains: 'balls on the side that is downthrown near each end',
+  }),
 ]

@@ -142,25 +142,31 @@ const FLAT: Millimetres = 1.3
 
 const AXIS = ['plunge', 'trend', 'doubly', 'otherPlunge']
 
-const symbol = (form: FoldForm, decoration: Decoration, sided: readonly string[] = []): LineSymbol => ({
+const symbol = (
+  form: FoldForm,
+  decoration: Decoration,
+  explains: string,
+  sided: readonly string[] = [],
+): LineSymbol => ({
   ...fold,
   id: `axial-trace.${form}`,
   variant: form,
   title: foldWords[form].charAt(0).toUpperCase() + foldWords[form].slice(1),
+  explains,
   drivenBy: ['locationConfidence', 'identity', ...sided, ...AXIS],
   decoration,
 })
 
 /** Axial traces, in the folds' red. Antiform and synform, whose age order is not known, have outlined arrow heads. */
 export const folds: readonly LineSymbol[] = [
-  symbol('anticline', limbArrows('away', 'open')),
-  symbol('syncline', limbArrows('toward', 'open')),
-  symbol('antiform', limbArrows('away', 'outlined')),
-  symbol('synform', limbArrows('toward', 'outlined')),
-  symbol('overturned-anticline', turnedArrow('away'), ['side']),
-  symbol('overturned-syncline', turnedArrow('toward'), ['side']),
-  symbol('monocline-anticlinal-bend', bend('away'), ['side']),
-  symbol('monocline-synclinal-bend', bend('toward'), ['side']),
+  symbol('anticline', limbArrows('away', 'open'), 'limbs dip away from the trace'),
+  symbol('syncline', limbArrows('toward', 'open'), 'limbs dip toward the trace'),
+  symbol('antiform', limbArrows('away', 'outlined'), 'limbs dip away; age order not known'),
+  symbol('synform', limbArrows('toward', 'outlined'), 'limbs dip toward it; age order not known'),
+  symbol('overturned-anticline', turnedArrow('away'), 'arrows show the way both limbs dip', ['side']),
+  symbol('overturned-syncline', turnedArrow('toward'), 'arrows show the way both limbs dip', ['side']),
+  symbol('monocline-anticlinal-bend', bend('away'), 'arrow toward the steeper limb', ['side']),
+  symbol('monocline-synclinal-bend', bend('toward'), 'arrow on the steeper limb', ['side']),
 ]
 
 /** The arrowhead of a plunge, on the trace: solid, its back drawn in a little, about half as wide as long. */
