@@ -23,16 +23,8 @@ export class KeptDrawings {
     return made
   }
 
-  /** Whatever drawing there is, of the nearest band: it will do while the view moves. */
-  nearest(item: Placed, band: number): Drawing | undefined {
-    if (!isLineItem(item)) return this.withoutBands(item).get(item)
-    const bands = this.lines.get(item)
-    if (!bands) return undefined
-    let best: number | undefined
-    for (const each of bands.keys()) {
-      if (best === undefined || Math.abs(each - band) < Math.abs(best - band)) best = each
-    }
-    return best === undefined ? undefined : bands.get(best)
+  has(item: Placed, band: number): boolean {
+    return this.known(item, band) !== undefined
   }
 
   forget(): void {

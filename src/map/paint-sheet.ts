@@ -18,8 +18,12 @@ export interface SheetPaint {
   /** @param step how far symbols are thinned out at this zoom */
   isHidden(item: Item, step: number): boolean
   isFaceHidden(unit: string | null): boolean
-  /** False in the middle of a zoom: drawings made for another scale will do for now. */
+  /** False in the middle of a move: pictures of patterns, and the frame, made for another scale will do for now. */
   settle: boolean
+  /** Lines whose drawing is not ready are drawn plainly, so that there is something to see at once. */
+  isFirst?: boolean
+  /** Without the frame: the picture lies over one that has it. */
+  frameless?: boolean
 }
 
 /** Draws the sheet in one pass: unit areas, items, frame. It pauses after each, so that a large sheet can be drawn a little
@@ -48,17 +52,18 @@ export function* paintSheet(
   const notReady: LineItem[] = []
   for (const item of scene.index.within(groundInView(view, SYMBOL_REACH * symbolPx))) {
     if (paint.isHidden(item, step)) continue
-    const drawing = paint.settle ? scene.drawingOf(item, band) : scene.readyDrawingOf(item, band)
-    if (!drawing) {
-      if (isLineItem(item)) notReady.push(item)
+    if (paint.isFirst && isLineItem(item) && !scene.isReady(item, band)) {
+      notReady.push(item)
       continue
     }
+    const drawing = scene.drawingOf(item, band)
     const pxPerMm = isLineItem(item) ? groundPxPerMm(view, drawing.mmPerMetre) : symbolPx
     drawDrawing(context, drawing, { view, pxPerMm, ratio })
     yield
   }
   paintPlain(context, notReady, { view, ratio, symbolPx, printing: scene.printing })
   context.restore()
+  if (paint.frameless) return
   const frame = scene.frame(view.pxPerMetre / symbolPx, paint.settle)
   drawDrawing(context, frame, { view, pxPerMm: groundPxPerMm(view, frame.mmPerMetre), ratio })
 }

@@ -10,6 +10,7 @@ import { facePathOf } from '@shared/sheet-face/compose-face'
 import { sheetFaceOf } from '@shared/sheet-face/compose-margin'
 import { drawFace } from '@shared/symbols/draw-face'
 import { drawItem } from '@shared/symbols/draw-item'
+import type { Ink } from '@shared/symbols/display-list'
 import { unitLabelSize, unitLabelText, type LabelStand } from '@shared/symbols/draw-unit-label'
 import { arrowOf } from '@shared/symbols/draw-lineation'
 import { mmPerMetreAtScale, toMm, type DrawingFrame } from '@shared/symbols/frame'
@@ -18,6 +19,7 @@ import { simplifyStrokes } from '@shared/symbols/simplify'
 import { unitFills, type Printing, type UnitFill } from '@shared/symbols/unit-fill'
 import type { Metres, Millimetres, MM, XY } from '@shared/units'
 import { makeDrawing, type Drawing } from './drawing'
+import { inInk } from './in-ink'
 import { ItemIndex, type GroundBox } from './item-index'
 import { KeptDrawings } from './kept-drawings'
 import { screenScaleBar } from './screen-scale-bar'
@@ -44,9 +46,11 @@ export class Scene {
   private areas = new WeakMap<Face, Drawing>()
   private frameDrawing: Drawing | undefined
 
+  /** @param ink the one ink that everything is drawn in; by its own inks unless given */
   constructor(
     readonly sheet: Sheet,
     private readonly projection: SheetProjection,
+    private readonly ink?: Ink,
   ) {
     this.bounds = neatlineBounds(sheet.neatline)
   }
@@ -118,9 +122,9 @@ export class Scene {
     return this.kept.of(item, band, () => this.make(item, band))
   }
 
-  /** The drawing that is there already, of the nearest band; it will do while the view moves. Points are always ready. */
-  readyDrawingOf(item: LineItem | PointItem, band: number): Drawing | undefined {
-    return isLineItem(item) ? this.kept.nearest(item, band) : this.drawingOf(item, band)
+  /** Whether a line's drawing for a band is there already. */
+  isReady(item: LineItem, band: number): boolean {
+    return this.kept.has(item, band)
   }
 
   private make(item: LineItem | PointItem, band: number): Drawing {
@@ -129,7 +133,7 @@ export class Scene {
       unitOf: (id) => this.units.get(id),
       standOf: (label) => this.standOf(label),
     })
-    const shown = printed(list, this.printing)
+    const shown = this.ink ? inInk(list, this.ink) : printed(list, this.printing)
     return makeDrawing(isLineItem(item) && band < 0 ? simplifyStrokes(shown, SIMPLER_BY) : shown, frame)
   }
 

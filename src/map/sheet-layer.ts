@@ -19,8 +19,10 @@ export interface PaintRequest {
   context: CanvasRenderingContext2D
   view: ViewFrame
   ratio: number
-  /** False while the view is moving. */
+  /** False while the view is moving, and for the first picture. */
   settle: boolean
+  /** Nothing is shown yet: what takes long may be drawn plainly. */
+  isFirst: boolean
 }
 
 /** Draws a picture, pausing now and then. */
@@ -109,7 +111,8 @@ export class SheetLayer extends Layer {
 
   private begin(wanted: Picture, ratio: number): void {
     // The first picture of all is drawn from what is ready, so that there is something to see at once.
-    const picture = this.shown ? wanted : { ...wanted, settled: false }
+    const isFirst = this.shown === null
+    const picture = { ...wanted, settled: wanted.settled && !isFirst }
     const { canvas, context } = this.back
     const { view } = picture
     // Setting the size also clears the canvas and whatever an unfinished picture had set.
@@ -117,7 +120,11 @@ export class SheetLayer extends Layer {
     canvas.height = Math.round(view.height * ratio)
     canvas.style.width = `${view.width}px`
     canvas.style.height = `${view.height}px`
-    this.job = { picture, steps: this.paint({ context, view, ratio, settle: picture.settled }), spentMs: 0 }
+    this.job = {
+      picture,
+      steps: this.paint({ context, view, ratio, settle: picture.settled, isFirst }),
+      spentMs: 0,
+    }
   }
 
   private work(budgetMs: number): void {
