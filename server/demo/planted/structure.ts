@@ -1,6 +1,6 @@
 import type { ItemOf } from '@shared/items/item'
 import { normalizeAzimuth } from '@shared/units'
-import { distance, middleOf, type Bench, type Planter } from './bench'
+import { beside, copyOf, distance, middleOf, vertexOf, type Bench, type Planter } from './bench'
 import { near } from './looking'
 
 type Attitude = ItemOf<'attitude'>
@@ -122,6 +122,48 @@ export const structurePlanters = {
       items: [attitude.id],
       at: attitude.geometry.coordinates,
       what: 'a vertical bed where contacts follow the ground',
+    }
+  },
+  'contact-across-fault': (bench) => {
+    const fault = bench.pick(
+      'fault',
+      ({ properties, geometry }) =>
+        properties.locationConfidence !== 'concealed' && geometry.coordinates.length > 6,
+    )
+    const contact = bench.pick('contact', ({ properties }) => properties.locationConfidence === 'certain')
+    const middle = Math.floor(fault.geometry.coordinates.length / 2)
+    const [at, next] = [
+      vertexOf(fault.geometry.coordinates, middle),
+      vertexOf(fault.geometry.coordinates, middle + 1),
+    ]
+    const across = copyOf(bench, contact)
+    bench.put({
+      ...across,
+      geometry: {
+        type: 'LineString',
+        coordinates: [beside(at, next, 120), beside(at, next, 0), beside(at, next, -120)],
+      },
+      properties: { ...across.properties, name: '', note: '' },
+    })
+    bench.keep(fault)
+    return {
+      items: [across.id, fault.id],
+      at: beside(at, next, 0),
+      what: 'a contact straight across a fault',
+    }
+  },
+  'younger-beneath-older': (bench) => {
+    const [first, second] = bench
+      .untouched('unit')
+      .filter(({ properties: { age } }) => age === 'Devonian' || age === 'Silurian')
+      .toSorted((a, b) => a.properties.rank - b.properties.rank)
+    if (!first || !second) throw new RangeError('The legend lacks two units of one age.')
+    bench.put({ ...first, properties: { ...first.properties, rank: second.properties.rank } })
+    bench.put({ ...second, properties: { ...second.properties, rank: first.properties.rank } })
+    return {
+      items: [first.id, second.id],
+      at: null,
+      what: 'two units in turn, the lower one called the younger',
     }
   },
   'level-beside-crossing-contact': (bench) => {

@@ -55,7 +55,7 @@ export const foldedLayers: readonly Layer[] = [
     label: 'Mk',
     name: 'Kittiwake Grit',
     age: 'Mississippian',
-    colour: '#dccfd9',
+    colour: '#d2c3dd',
     pattern: 'sandstone',
     description: 'coarse pebbly sandstone, cross-bedded; top not seen',
     top: Infinity,
