@@ -14,7 +14,7 @@ import type { LonLat, XY } from '@shared/units'
 import type { EditionsService } from '../editions/editions.service'
 import { countEdits, selectEdits, selectEditsOf, selectTouchedIds, type Span } from './comparison.queries'
 import { invalidField, requireReached } from './ledger-rules'
-import { getSheetFrame, latestRevision } from './ledger.queries'
+import { getLedgerSheet, latestRevision } from './ledger.queries'
 
 /** States as a call names them: a revision's number, `edition-2` or `latest`. */
 export interface States {
@@ -64,7 +64,7 @@ export class ComparisonService {
   async map(sheetId: string, states: States): Promise<AsyncIterable<string>> {
     const em = this.dataSource.manager
     const { from, to, span } = await this.resolve(em, sheetId, states)
-    const { number, proj4 } = await getSheetFrame(em, sheetId)
+    const { number, proj4 } = await getLedgerSheet(em, sheetId)
     const { toLonLat } = sheetProjection(proj4)
     const place = (xy: XY): LonLat => {
       const [lon, lat] = toLonLat(xy)

@@ -12,7 +12,7 @@ import {
   findLatestVersions,
   selectCurrentItems,
   selectItemsAt,
-  type LockedSheet,
+  type LedgerSheet,
 } from './ledger.queries'
 
 /** Who changes a sheet, and as what. */
@@ -22,7 +22,7 @@ export interface Author {
 }
 
 /** A sheet that is submitted, approved or being released stays as it is. */
-export function requireDrafting(sheet: LockedSheet): void {
+export function requireDrafting(sheet: LedgerSheet): void {
   if (sheet.state === 'drafting') return
   throw problem(
     'wrong-state',
@@ -31,7 +31,7 @@ export function requireDrafting(sheet: LockedSheet): void {
 }
 
 /** A place beyond the region of the sheet's system would be drawn, measured and printed wrong. */
-export function requireWithinSystem(sheet: LockedSheet, changes: readonly Change[]): void {
+export function requireWithinSystem(sheet: LedgerSheet, changes: readonly Change[]): void {
   const items = changes.flatMap((change) => (change.op === 'put' ? [change.item] : []))
   const beyond = findUnreachable(items, sheet.proj4)
   if (beyond.length === 0) return

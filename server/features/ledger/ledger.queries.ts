@@ -5,8 +5,8 @@ import type { Item } from '@shared/items/item'
 import { personColumn } from './entries.queries'
 import { itemColumns, toItem, type ItemRow } from './item-row'
 
-/** A sheet whose row is locked until the transaction ends: nobody else can write to its ledger. */
-export interface LockedSheet {
+/** What writing to a sheet's ledger has to know of it. */
+export interface LedgerSheet {
   id: string
   number: string
   srid: number
@@ -16,25 +16,21 @@ export interface LockedSheet {
   revision: number
 }
 
-export async function lockSheet(em: EntityManager, sheetId: string): Promise<LockedSheet> {
-  const [row] = await em.query<LockedSheet[]>(
-    `SELECT id, number, srid, proj4text AS proj4, state, revision FROM sheet JOIN spatial_ref_sys USING (srid)
-     WHERE id = $1 FOR UPDATE OF sheet`,
-    [sheetId],
-  )
-  if (!row) throw new RangeError(`There is no sheet ${sheetId}.`)
-  return row
-}
+/** A sheet whose row is locked until the transaction ends: nobody else can write to its ledger. */
+export type LockedSheet = LedgerSheet
 
-/** Number of a sheet and the PROJ definition of its system. */
-export async function getSheetFrame(
-  em: EntityManager,
-  sheetId: string,
-): Promise<{ number: string; proj4: string }> {
-  const [row] = await em.query<{ number: string; proj4: string }[]>(
-    'SELECT number, proj4text AS proj4 FROM sheet JOIN spatial_ref_sys USING (srid) WHERE id = $1',
-    [sheetId],
-  )
+const sheetRow = `SELECT id, number, srid, proj4text AS proj4, state, revision FROM sheet JOIN spatial_ref_sys USING (srid)
+     WHERE id = $1`
+
+export const lockSheet = (em: EntityManager, sheetId: string): Promise<LockedSheet> =>
+  getSheet(em, sheetId, `${sheetRow} FOR UPDATE OF sheet`)
+
+/** A sheet as it stands, for who only looks: others go on writing. */
+export const getLedgerSheet = (em: EntityManager, sheetId: string): Promise<LedgerSheet> =>
+  getSheet(em, sheetId, sheetRow)
+
+async function getSheet(em: EntityManager, sheetId: string, sql: string): Promise<LedgerSheet> {
+  const [row] = await em.query<LedgerSheet[]>(sql, [sheetId])
   if (!row) throw new RangeError(`There is no sheet ${sheetId}.`)
   return row
 }

@@ -17,7 +17,7 @@ import {
   requireReached,
   type Author,
 } from './ledger-rules'
-import { lockSheet, type LockedSheet } from './ledger.queries'
+import { getLedgerSheet, type LedgerSheet } from './ledger.queries'
 import { selectChangedAfter, selectEntriesAfter } from './restore.queries'
 
 /** Most differences and later changes that a preview or a refusal lists; the counts are of all. */
@@ -42,8 +42,9 @@ export class RestoreService {
 
   /** What going back would do on the latest revision; nothing is changed. */
   async preview(sheetId: string, author: Author, restore: Restore): Promise<RestorePreview> {
-    return this.dataSource.transaction(async (em) => {
-      const sheet = await lockSheet(em, sheetId)
+    // One moment of the sheet, without holding up those who write to it.
+    return this.dataSource.transaction('REPEATABLE READ', async (em) => {
+      const sheet = await getLedgerSheet(em, sheetId)
       const { edits, state, upTo, message } = await planRestore(em, sheet, restore)
       const ids = edits.map(editedId)
       const later = await selectChangedAfter(em, sheetId, ids, upTo)
@@ -130,7 +131,7 @@ function laterSentence([first]: readonly LaterChange[], count: number): string {
   return count > 1 ? `later changes of ${count} items, among them ${what}.` : `a later change: ${what}.`
 }
 
-async function planRestore(em: EntityManager, sheet: LockedSheet, restore: Restore): Promise<Plan> {
+async function planRestore(em: EntityManager, sheet: LedgerSheet, restore: Restore): Promise<Plan> {
   requireReached(restore.revision, sheet.revision, 'restore/revision')
   const { revision } = restore
   if (restore.what === 'entry') return planTakingBack(em, sheet, revision)
@@ -143,7 +144,7 @@ async function planRestore(em: EntityManager, sheet: LockedSheet, restore: Resto
 }
 
 /** The items that one entry changed go back to what they were before it. */
-async function planTakingBack(em: EntityManager, sheet: LockedSheet, revision: number): Promise<Plan> {
+async function planTakingBack(em: EntityManager, sheet: LedgerSheet, revision: number): Promise<Plan> {
   const entry = (await selectEntriesOf(em, sheet.id, [revision])).get(revision)
   if (!entry) throw invalidField('restore/revision', `There is no entry ${revision} on this sheet.`)
   const state = revision - 1
@@ -165,7 +166,7 @@ function nameOf({ before, after }: Edit): string {
 /** Refuses what a change by hand would be refused for: the sheet's state, the legend's editor, units in use. */
 async function requireRestorable(
   em: EntityManager,
-  sheet: LockedSheet,
+  sheet: LedgerSheet,
   author: Author,
   edits: readonly Edit[],
 ): Promise<void> {
@@ -180,7 +181,7 @@ async function requireRestorable(
 /** The same as a sentence; null where nothing stands in the way. */
 async function findObstacle(
   em: EntityManager,
-  sheet: LockedSheet,
+  sheet: LedgerSheet,
   author: Author,
   edits: readonly Edit[],
 ): Promise<string | null> {

@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import { describe, expect, it } from 'vitest'
 import type { RestorePreview } from '@shared/api/restores'
+import { lockSheet } from '../../../server/features/ledger/ledger.queries'
 import { aContact, aLabel, anAttitude, aUnit, put, remove, useLedgerDesk } from '../../support/ledger-desk'
 
 const desk = useLedgerDesk()
@@ -56,6 +57,14 @@ describe('going back to a revision', () => {
     expect(await desk.items()).toEqual(then)
     // Nothing is taken out of the ledger.
     expect(await desk.items(4)).not.toEqual(then)
+  })
+
+  it('is looked at without holding up who writes, or waiting for them', async () => {
+    await desk.post(desk.editor, [put(aContact())])
+    await desk.server.dataSource.transaction(async (em) => {
+      await lockSheet(em, await desk.sheetId())
+      expect((await preview({ what: 'revision', revision: 1 })).base).toBe(2)
+    })
   })
 
   it('refuses to undo what was not accepted, naming item, person, time and revision', async () => {
