@@ -16,11 +16,12 @@ export interface SizedOptions {
   items: number
   seed?: number
   noise?: Noise
+  /** Items on a square kilometre: 18 unless given, closer together than on the demo sheets; with 6 half of them are lines
+   *  and labels, on three times the ground. */
+  perKm2?: number
   number?: string
 }
 
-/** Items on a square kilometre: closer together than on the demo sheets. */
-const PER_KM2 = 18
 /** Up to this many items the sheet is worked out as finely as the demo sheets. */
 const FINE_ITEMS = 5000
 
@@ -30,9 +31,10 @@ export function sizedSheet({
   items,
   seed = 1,
   noise = noNoise,
+  perKm2 = 18,
   number = `BM-${items}`,
 }: SizedOptions): SizedSheet {
-  const width: Metres = Math.round(Math.sqrt(items / PER_KM2 / 1.1) * 10) * 100
+  const width: Metres = Math.round(Math.sqrt(items / perKm2 / 1.1) * 10) * 100
   const extent: Extent = { origin: [0, 0], width, height: Math.round(width * 1.1) }
   const [west, south] = fromIsland(extent.origin)
   const cells = items <= FINE_ITEMS ? { lines: 40, areas: 25 } : { lines: 80, areas: 60 }

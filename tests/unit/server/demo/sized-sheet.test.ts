@@ -22,6 +22,14 @@ describe('a sheet of any size', () => {
     60_000,
   )
 
+  it('has more lines among its items where these are farther apart', () => {
+    const lines = (perKm2: number) => {
+      const { items } = sizedSheet({ items: 600, perKm2 })
+      return itemsOf(items).filter((item) => item.geometry?.type === 'LineString').length
+    }
+    expect(lines(8)).toBeGreaterThan(1.4 * lines(18))
+  }, 60_000)
+
   it('differs by its seed, and by the errors of measuring in its points only', () => {
     const made = (options: object) => sizedSheet({ items: 200, ...options }).items
     const [plain, other, noisy] = [made({}), made({ seed: 2 }), made({ noise: fieldNoise })]
