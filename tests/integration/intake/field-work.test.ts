@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import type { Item, ItemOf } from '@shared/items/item'
 import { angleBetween, type Degrees } from '@shared/units'
-import { demoFieldFiles, doFieldWork } from '../../../server/demo/field-files/field-files'
+import { demoFieldFiles } from '../../../server/demo/field-files/field-files'
+import { doFieldWork, fieldDeclination } from '../../../server/demo/field-files/field-work'
 import type { Reading } from '../../../server/demo/field-files/party'
 import { useIntakeDesk } from '../../support/intake-desk'
 
@@ -69,7 +70,7 @@ describe('what was measured is what is on the sheet', () => {
     expectReadings(items, work.magnetic, WHOLE_DEGREES)
     expect(items.find(isAttitude)?.properties.reading).toMatchObject({
       northReference: 'magnetic',
-      declination: -8.5,
+      declination: fieldDeclination,
     })
   })
 })

@@ -1,10 +1,7 @@
 import { expect, it } from 'vitest'
 import type { IntakeRecord } from '@shared/intake/records'
-import {
-  demoFieldFiles,
-  doFieldWork,
-  type FieldFile,
-} from '../../../../../../server/demo/field-files/field-files'
+import { demoFieldFiles, type FieldFile } from '../../../../../../server/demo/field-files/field-files'
+import { doFieldWork } from '../../../../../../server/demo/field-files/field-work'
 import { toLonLat } from '../../../../../../server/demo/merrow-island'
 import { read, recordsOf } from '../../../../../support/field-text'
 
