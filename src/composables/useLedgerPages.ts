@@ -1,53 +1,59 @@
-import { computed, ref, shallowRef, watch } from 'vue'
-import { listRevisions } from '@shared/api/ledger'
+import { ref, shallowRef, watch } from 'vue'
+import { listRevisions, type LedgerFilter, type LedgerRow } from '@shared/api/ledger'
 import type { Problem } from '@shared/api/problems'
-import type { LedgerEntry } from '@shared/api/sheets'
 import { ApiProblem, call } from '@/api/client'
 import { useSheetStore } from '@/stores/sheet'
+import { isSameFilter } from './ledger-filter'
+import { joinPages } from './join-pages'
 
 const PAGE = 50
 
-/** Ledger entries of the open sheet, newest first: those the sheet store follows live, and older ones page by page. */
-export function useLedgerPages() {
+/** Entries of the open sheet's ledger that a filter leaves, newest first: older ones page by page, new ones as they come. */
+export function useLedgerPages(filter: () => LedgerFilter) {
   const sheet = useSheetStore()
-  const older = shallowRef<readonly LedgerEntry[]>([])
+  const entries = shallowRef<readonly LedgerRow[]>([])
+  /** Older entries than this one are to be had; null at the ledger's beginning. */
+  const next = ref<number | null>(null)
   const isLoading = ref(false)
   const problem = ref<Problem | null>(null)
+  /** Counts questions, so that an answer to an earlier one is dropped. */
+  let turn = 0
 
-  watch(
-    () => sheet.sheet?.number,
-    () => {
-      older.value = []
-      problem.value = null
-    },
-  )
-
-  const entries = computed<readonly LedgerEntry[]>(() => {
-    const oldest = sheet.entries.at(-1)?.revision ?? Infinity
-    return [...sheet.entries, ...older.value.filter((entry) => entry.revision < oldest)]
-  })
-  /** A sheet's ledger begins with its creation, revision 1 or 0: nothing is older. */
-  const hasOlder = computed(() => {
-    const last = entries.value.at(-1)
-    return last !== undefined && last.kind !== 'creation'
-  })
-
-  async function loadOlder(): Promise<void> {
+  async function read(before?: number): Promise<void> {
     const number = sheet.sheet?.number
-    const before = entries.value.at(-1)?.revision
-    if (!number || before === undefined || isLoading.value) return
+    if (!number) return
+    const mine = ++turn
     isLoading.value = true
     problem.value = null
     try {
-      const page = await call(listRevisions, { params: { sheet: number }, query: { before, limit: PAGE } })
-      if (sheet.sheet?.number === number) older.value = [...older.value, ...page.entries]
+      const query = { ...filter(), limit: PAGE, ...(before === undefined ? {} : { before }) }
+      const page = await call(listRevisions, { params: { sheet: number }, query })
+      if (mine !== turn) return
+      const joined = joinPages({ entries: entries.value, next: next.value }, page)
+      entries.value = joined.entries
+      next.value = joined.next
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error
-      problem.value = error.problem
+      if (mine === turn) problem.value = error.problem
     } finally {
-      isLoading.value = false
+      if (mine === turn) isLoading.value = false
     }
   }
 
-  return { entries, hasOlder, isLoading, problem, loadOlder }
+  watch(
+    [() => sheet.sheet?.number, filter, () => sheet.saved.revision],
+    ([number, now], [numberBefore, before]) => {
+      if (number !== numberBefore || !before || !isSameFilter(now, before)) {
+        entries.value = []
+        next.value = null
+      }
+      void read()
+    },
+    { immediate: true },
+  )
+
+  const readOlder = (): Promise<void> =>
+    next.value === null || isLoading.value ? Promise.resolve() : read(next.value)
+
+  return { entries, next, isLoading, problem, readOlder }
 }

@@ -26,6 +26,8 @@ export interface PageGround {
   min: XY
   max: XY
   scale: number
+  /** A page whose margin is left out: the map face alone, with its frame. */
+  bare?: boolean
 }
 
 export interface PageBoxes {
@@ -42,27 +44,27 @@ interface Edges {
   right: Px
 }
 
-function edgesAt(pxPerMetre: number, scale: number, symbols: 'print' | 'screen'): Edges {
+function edgesAt(pxPerMetre: number, { scale, bare }: PageGround, symbols: 'print' | 'screen'): Edges {
   const grown = Math.max(1, symbolPxPerMm(printShare(pxPerMetre, scale), symbols) / EDGE_PX_PER_MM)
   return {
     left: EDGE.left * grown,
     top: EDGE.top * grown,
     bottom: EDGE.bottom * grown,
-    gutter: EDGE.gutter * grown,
-    right: EDGE.right,
+    gutter: (bare ? EDGE.left : EDGE.gutter) * grown,
+    right: bare ? 0 : EDGE.right,
   }
 }
 
-const marginWidth = (deskWidth: Px): Px =>
-  Math.round(Math.min(MARGIN.most, Math.max(MARGIN.least, deskWidth * MARGIN.shareOfDesk)))
+const marginWidth = (deskWidth: Px, { bare }: PageGround): Px =>
+  bare ? 0 : Math.round(Math.min(MARGIN.most, Math.max(MARGIN.least, deskWidth * MARGIN.shareOfDesk)))
 
 /** Where face, paper and margin lie on screen. The margin stands in the page while all of it is in view, and becomes a
  *  column at the right edge when it is not. */
 export function pageBoxes(view: ViewFrame, ground: PageGround, symbols: 'print' | 'screen'): PageBoxes {
-  const edges = edgesAt(view.pxPerMetre, ground.scale, symbols)
+  const edges = edgesAt(view.pxPerMetre, ground, symbols)
   const [left, bottom] = toPx(view, ground.min)
   const [right, top] = toPx(view, ground.max)
-  const width = marginWidth(view.width)
+  const width = marginWidth(view.width, ground)
   const paper = {
     left: left - edges.left,
     top: top - edges.top,
@@ -94,17 +96,18 @@ export function fitPage(
   symbols: 'print' | 'screen',
 ): { center: XY; pxPerMetre: number } {
   const [east, north] = [ground.max[0] - ground.min[0], ground.max[1] - ground.min[1]]
-  let edges: Edges = { ...EDGE }
+  let edges = edgesAt(0, ground, symbols)
   let pxPerMetre = 0
   // The edges follow the symbols' size, which follows the fit: three turns settle it to less than a pixel.
   for (let turn = 0; turn < 3; turn++) {
-    const besides = edges.left + edges.gutter + marginWidth(size.width) + edges.right
+    const besides = edges.left + edges.gutter + marginWidth(size.width, ground) + edges.right
     const width = Math.max(80, size.width - 2 * DESK_EDGE - besides)
     const height = Math.max(80, size.height - 2 * DESK_EDGE - edges.top - edges.bottom)
     pxPerMetre = Math.min(width / east, height / north)
-    edges = edgesAt(pxPerMetre, ground.scale, symbols)
+    edges = edgesAt(pxPerMetre, ground, symbols)
   }
-  const paperWidth = edges.left + east * pxPerMetre + edges.gutter + marginWidth(size.width) + edges.right
+  const margin = marginWidth(size.width, ground)
+  const paperWidth = edges.left + east * pxPerMetre + edges.gutter + margin + edges.right
   const faceMiddle: PxPoint = [
     (size.width - paperWidth) / 2 + edges.left + (east * pxPerMetre) / 2,
     (size.height + edges.top - edges.bottom) / 2,

@@ -61,14 +61,15 @@ export class ViewMoves {
   /** Moves so that some ground fills the free part of the view, but no nearer than 200 %. */
   showGround({ min, max }: GroundBox): void {
     const [width = 1, height = 1] = this.map.getSize() ?? []
-    const free = { width: Math.max(120, width - DOCKED_WIDTH - 80), height: Math.max(120, height - 80) }
+    const docked = this.ground.bare ? 0 : DOCKED_WIDTH
+    const free = { width: Math.max(120, width - docked - 80), height: Math.max(120, height - 80) }
     const fit = Math.min(
       free.width / Math.max(1, max[0] - min[0]),
       free.height / Math.max(1, max[1] - min[1]),
     )
     const pxPerMetre = Math.min(fit, pxPerMetreAt(2, this.ground.scale))
     const [east, north] = middle({ min, max })
-    this.go([east + DOCKED_WIDTH / 2 / pxPerMetre, north], pxPerMetre, true)
+    this.go([east + docked / 2 / pxPerMetre, north], pxPerMetre, true)
   }
 
   showItems(items: readonly (LineItem | PointItem)[]): void {

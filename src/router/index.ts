@@ -37,6 +37,12 @@ const sheetPlaces: RouteRecordRaw[] = [
     component: () => import('@/views/LedgerView.vue'),
     meta: place('Ledger'),
   },
+  {
+    path: 'compare',
+    name: 'compare',
+    component: () => import('@/views/CompareView.vue'),
+    meta: place('Compare'),
+  },
 ]
 
 function place(title: string) {

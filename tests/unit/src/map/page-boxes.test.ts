@@ -25,6 +25,16 @@ describe('the page on its desk', () => {
     expect(face.width).toBeGreaterThan(size.width * 0.4)
   })
 
+  it.each(desks)('without its margin has the map face in its middle, and larger, on %o', (size) => {
+    const bare = { ...ground, bare: true }
+    const fit = fitPage(size, bare, 'print')
+    const { paper, face } = pageBoxes({ ...size, ...fit }, bare, 'print')
+    const [left, right] = [face.left - paper.left, paper.left + paper.width - face.left - face.width]
+    expect(Math.abs(left - right)).toBeLessThan(PIXEL)
+    expect(Math.abs(paper.left - (size.width - paper.left - paper.width))).toBeLessThan(PIXEL)
+    expect(fit.pxPerMetre).toBeGreaterThanOrEqual(fitPage(size, ground, 'print').pxPerMetre)
+  })
+
   it('docks the margin at the right edge once the page’s own has left the view', () => {
     const [size = { width: 0, height: 0 }] = desks
     const fit = fitPage(size, ground, 'print')

@@ -1,0 +1,54 @@
+import { fieldWords, valueWords } from '@shared/changes/describe-changes'
+import type { Difference } from '@shared/changes/differences'
+import { itemKinds, kindWords, type ItemKind } from '@shared/items/item'
+import type { DifferenceCount } from '@shared/api/comparisons'
+
+/** Differences of one kind of item. */
+export interface ComparedGroup {
+  kind: ItemKind
+  /** "contacts: 3 added, 1 moved" */
+  words: string
+  differences: Difference[]
+}
+
+const parts = [
+  ['added', 'added'],
+  ['removed', 'removed'],
+  ['moved', 'moved'],
+  ['reattributed', 're-attributed'],
+] as const
+
+/** How many differ, in words: "3 added, 1 moved". */
+export const countWords = (count: DifferenceCount): string =>
+  parts.flatMap(([key, word]) => (count[key] > 0 ? [`${count[key]} ${word}`] : [])).join(', ')
+
+/** Differences under their kinds, in the order of kinds; a kind that has none read yet stands there with its counts. */
+export function groupByKind(
+  differences: readonly Difference[],
+  counts: readonly DifferenceCount[],
+): ComparedGroup[] {
+  return itemKinds.flatMap((kind) => {
+    const count = counts.find((each) => each.kind === kind)
+    if (!count) return []
+    const ofKind = differences.filter((difference) => difference.kind === kind)
+    return [{ kind, words: `${kindWords[kind].many}: ${countWords(count)}`, differences: ofKind }]
+  })
+}
+
+/** How an item differs: "added", "moved 42 m, re-attributed". */
+export function howWords({ what, place, fields }: Difference): string {
+  if (what !== 'changed') return what
+  const moved = place && (place.metres > 0 ? `${place.how} ${metresWords(place.metres)}` : place.how)
+  return [moved, fields.length > 0 ? 're-attributed' : null].filter(Boolean).join(', ')
+}
+
+/** A distance as figures need it: below ten metres to the decimetre. */
+const metresWords = (metres: number): string => `${metres < 10 ? metres.toFixed(1) : Math.round(metres)} m`
+
+/** The fields that differ, each with both values in words; colours and labels of units, margins of the sheet face too. */
+export const fieldRows = ({ fields }: Difference): { field: string; before: string; after: string }[] =>
+  fields.map(({ field, before, after }) => ({
+    field: fieldWords(field),
+    before: valueWords(before),
+    after: valueWords(after),
+  }))
