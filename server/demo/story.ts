@@ -75,7 +75,7 @@ export function shortStory(sheet: DemoSheet): Chapter[] {
     chapter('editor', 205, 'legend from sheet MI-14', sheet.units),
     chapter('compiler', 150, 'linework to the edges of MI-14', rest),
     chapter('editor', 90, 'unit labels for all areas', sheet.labels),
-    chapter('compiler', 60, 'attitudes, lineations and stations of the coast party', [...points]),
+    chapter('compiler', 60, 'attitudes, lineations and stations of the summer traverses', [...points]),
   ]
 }
 
