@@ -20,7 +20,7 @@ export interface SheetPaint {
   isFaceHidden(unit: string | null): boolean
   /** False in the middle of a move: pictures of patterns, and the frame, made for another scale will do for now. */
   settle: boolean
-  /** Lines whose drawing is not ready are drawn plainly, so that there is something to see at once. */
+  /** Lines whose drawing is not ready are drawn plainly and points not at all, so that there is something to see at once. */
   isFirst?: boolean
   /** Without the frame: the picture lies over one that has it. */
   frameless?: boolean
@@ -36,7 +36,8 @@ export function* paintSheet(
   const { view, ratio } = paint
   const relative = relativeScale(view, scene.sheet.scale, paint.symbols)
   const { symbolPx } = relative
-  const [band, step] = [bandOf(relative.scale), thinningStep(relative.scale)]
+  // Points come with the second picture, and so does the work of thinning them out.
+  const [band, step] = [bandOf(relative.scale), paint.isFirst ? 0 : thinningStep(relative.scale)]
   context.save()
   clipToFace(context, scene, paint)
   const ground = groundInView(view, 0)
@@ -52,8 +53,8 @@ export function* paintSheet(
   const notReady: LineItem[] = []
   for (const item of scene.index.within(groundInView(view, SYMBOL_REACH * symbolPx))) {
     if (paint.isHidden(item, step)) continue
-    if (paint.isFirst && isLineItem(item) && !scene.isReady(item, band)) {
-      notReady.push(item)
+    if (paint.isFirst && !scene.isReady(item, band)) {
+      if (isLineItem(item)) notReady.push(item)
       continue
     }
     const drawing = scene.drawingOf(item, band)

@@ -122,8 +122,8 @@ export class Scene {
     return this.kept.of(item, band, () => this.make(item, band))
   }
 
-  /** Whether a line's drawing for a band is there already. */
-  isReady(item: LineItem, band: number): boolean {
+  /** Whether an item's drawing for a band is there already. */
+  isReady(item: LineItem | PointItem, band: number): boolean {
     return this.kept.has(item, band)
   }
 
