@@ -10,7 +10,7 @@ export type ItemVersion = z.infer<typeof itemVersionSchema>
 /** Selecting one thing after another should not ask about each. */
 const SETTLE_MS = 200
 
-/** Every version of an item, newest first, asked for once for each item. Waits while changes are unsent: an item just
+/** Every version of an item, newest first, asked for anew once the item has changed. Waits while changes are unsent: an item just
  *  drawn is not on the server before. Empty until the answer is there. */
 export function useItemHistory(id: () => string): {
   versions: Readonly<Ref<readonly ItemVersion[]>>
@@ -34,14 +34,14 @@ export function useItemHistory(id: () => string): {
   }
 
   watch(
-    [id, () => sheet.saved.waiting === 0],
-    ([item, isSaved], before) => {
+    [id, () => sheet.saved.waiting === 0, () => (void sheet.itemsVersion, sheet.get(id()))],
+    ([item, isSaved, version], before) => {
       clearTimeout(timer)
       if (item !== before[0]) {
         versions.value = []
         problem.value = null
         asked = ''
-      }
+      } else if (version !== before[2]) asked = ''
       const number = sheet.sheet?.number
       if (isSaved && number && asked !== item) timer = setTimeout(() => void ask(number, item), SETTLE_MS)
     },

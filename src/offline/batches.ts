@@ -9,6 +9,8 @@ export interface Batch {
   edits: readonly Edit[]
   /** One sentence per gesture, in order. */
   labels: readonly string[]
+  /** Why the person makes these edits, where they said so: the ledger's message instead of the labels. */
+  whys?: readonly string[]
   request: { key: string; body: ChangeSet } | null
 }
 
@@ -19,15 +21,24 @@ const LONGEST_MESSAGE = 500
  *  batch at all: what was never sent and then undone is never sent. */
 export function addEdits(
   batches: readonly Batch[],
-  added: { base: number; label: string; edits: readonly Edit[] },
+  added: { base: number; label: string; edits: readonly Edit[]; why?: string },
 ): Batch[] {
   const last = batches.at(-1)
   if (!last || last.request) {
-    return [...batches, { base: added.base, edits: added.edits, labels: [added.label], request: null }]
+    const { base, edits, label, why } = added
+    return [...batches, { base, edits, labels: [label], ...withWhy([], why), request: null }]
   }
   const edits = composeEdits(last.edits, added.edits)
   const before = batches.slice(0, -1)
-  return edits.length === 0 ? before : [...before, { ...last, edits, labels: [...last.labels, added.label] }]
+  if (edits.length === 0) return before
+  const labels = [...last.labels, added.label]
+  return [...before, { ...last, edits, labels, ...withWhy(last.whys ?? [], added.why) }]
+}
+
+/** Each reason once, in order; nothing where none was given. */
+function withWhy(whys: readonly string[], why: string | undefined): Pick<Batch, 'whys'> {
+  const all = [...new Set([...whys, ...(why ? [why] : [])])]
+  return all.length > 0 ? { whys: all } : {}
 }
 
 /** The first batch with its request fixed under a key; batches without a first one stay as they are. */
@@ -36,7 +47,7 @@ export function freezeFirst(batches: readonly Batch[], key: string): Batch[] {
   if (!first || first.request) return [...batches]
   const body: ChangeSet = {
     base: first.base,
-    message: messageOf(first.labels),
+    message: messageOf(first.whys ?? first.labels),
     changes: toChanges(first.edits),
   }
   return [{ ...first, request: { key, body } }, ...rest]

@@ -116,9 +116,10 @@ export class SheetExchange {
     this.retry()
   }
 
-  /** Takes checked edits: shown at once, kept in the outbox, sent as soon as may be. */
-  put(label: string, edits: readonly Edit[]): void {
-    void this.keep(addEdits(this.batches, { base: this.revision, label, edits }))
+  /** Takes checked edits: shown at once, kept in the outbox, sent as soon as may be.
+   *  @param why what the ledger shall say instead of the label; empty where nobody said */
+  put(label: string, edits: readonly Edit[], why = ''): void {
+    void this.keep(addEdits(this.batches, { base: this.revision, label, edits, why }))
     this.show(edits.map(editedId))
     if (editsShapeFaces(edits)) this.ports.facesChanged('here')
     // What was refused may be mended, or taken back, by this very change.

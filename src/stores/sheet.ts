@@ -62,6 +62,8 @@ export const useSheetStore = defineStore('sheet', () => {
   const jobs = shallowRef<Job[]>([])
   const undoLabel = ref<string | null>(null)
   const redoLabel = ref<string | null>(null)
+  /** Why the person makes the changes that follow, for the ledger; empty where it shall say what was done. */
+  const why = ref('')
   const saved = shallowRef<Saved>(NOTHING_SAVED)
   /** False where this browser keeps no unsent changes over a closed page. */
   const keepsUnsent = ref(true)
@@ -155,6 +157,7 @@ export const useSheetStore = defineStore('sheet', () => {
     entries.value = []
     members.value = []
     jobs.value = []
+    why.value = ''
     itemsVersion.value += 1
     report()
   }
@@ -197,7 +200,8 @@ export const useSheetStore = defineStore('sheet', () => {
   function put(label: string, edits: readonly Edit[]): ReturnType<typeof checkEdits> {
     if (!now || readOnly.value) return refusal(readOnly.value ?? 'No sheet is open.')
     const checked = checkEdits(edits, get, sheet.value?.crs)
-    if (checked.outcome === 'ok' && checked.edits.length > 0) now.exchange.put(label, checked.edits)
+    if (checked.outcome === 'ok' && checked.edits.length > 0)
+      now.exchange.put(label, checked.edits, why.value)
     return checked
   }
 
@@ -267,6 +271,7 @@ export const useSheetStore = defineStore('sheet', () => {
     jobs,
     undoLabel,
     redoLabel,
+    why,
     saved,
     keepsUnsent,
     listening,

@@ -54,6 +54,8 @@ export const useWorkplaceStore = defineStore('workplace', () => {
   const percent = ref(100)
   /** Counts how often the view has come to rest, for whoever follows it. */
   const viewRests = ref(0)
+  /** Ground in view when it last came to rest, sheet metres: west, south, east, north; null before. */
+  const viewExtent = shallowRef<readonly [number, number, number, number] | null>(null)
   const viewRequest = shallowRef<ViewRequest | null>(null)
   /** One plain sentence for the foot: what the instrument expects, or why it refused. */
   const hint = ref('')
@@ -121,6 +123,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     hiddenEntries.value = new Set()
     thinned.value = new Map()
     viewRequest.value = null
+    viewExtent.value = null
     cursor.value = null
     unitHere.value = null
     hint.value = ''
@@ -144,6 +147,7 @@ export const useWorkplaceStore = defineStore('workplace', () => {
     unitHere,
     percent,
     viewRests,
+    viewExtent,
     viewRequest,
     hint,
     choose,

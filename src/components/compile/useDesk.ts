@@ -53,7 +53,8 @@ export function useDesk() {
           seen = view
           lay(elements, boxes)
         },
-        rest() {
+        rest(view) {
+          workplace.viewExtent = extentOf(view)
           workplace.percent = map.percent()
           workplace.viewRests += 1
         },

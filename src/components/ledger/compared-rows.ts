@@ -1,3 +1,4 @@
+import { z } from 'zod'
 import { fieldWords, valueWords } from '@shared/changes/describe-changes'
 import type { Difference } from '@shared/changes/differences'
 import { itemKinds, kindWords, type ItemKind } from '@shared/items/item'
@@ -10,6 +11,9 @@ export interface ComparedGroup {
   words: string
   differences: Difference[]
 }
+
+/** A reading, whatever it is of. */
+const writtenSchema = z.object({ text: z.string() })
 
 const parts = [
   ['added', 'added'],
@@ -45,10 +49,33 @@ export function howWords({ what, place, fields }: Difference): string {
 /** A distance as figures need it: below ten metres to the decimetre. */
 const metresWords = (metres: number): string => `${metres < 10 ? metres.toFixed(1) : Math.round(metres)} m`
 
-/** The fields that differ, each with both values in words; colours and labels of units, margins of the sheet face too. */
-export const fieldRows = ({ fields }: Difference): { field: string; before: string; after: string }[] =>
-  fields.map(({ field, before, after }) => ({
+/** The fields that differ, each with both values in words.
+ *  @param labelOf label of a legend unit by its id; undefined for one that is gone */
+export function fieldRows(
+  { fields }: Difference,
+  labelOf: (unit: string) => string | undefined,
+): { field: string; before: string; after: string }[] {
+  const words = (field: string, value: unknown): string => {
+    if (field === 'unit' && typeof value === 'string') return labelOf(value) ?? 'a unit that is gone'
+    // How a reading was written says it all; the rest of it is what follows from that.
+    const written = field === 'reading' ? writtenSchema.safeParse(value).data : undefined
+    return written ? `“${written.text}”` : valueWords(value)
+  }
+  return fields.map(({ field, before, after }) => ({
     field: fieldWords(field),
-    before: valueWords(before),
-    after: valueWords(after),
+    before: words(field, before),
+    after: words(field, after),
   }))
+}
+
+/** One item of a list in a few words: "attitude GH-001: dip 53 → 35", "contact: moved 363 m". */
+export function differenceWords(
+  difference: Difference,
+  labelOf: (unit: string) => string | undefined,
+): string {
+  const fields = fieldRows(difference, labelOf).map(
+    ({ field, before, after }) => `${field} ${before} → ${after}`,
+  )
+  const how = fields.length > 0 && !difference.place ? [] : [howWords({ ...difference, fields: [] })]
+  return `${difference.name}: ${[...how, ...fields].join(', ')}`
+}

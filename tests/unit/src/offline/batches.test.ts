@@ -43,6 +43,20 @@ describe('batches of unsent edits', () => {
     })
   })
 
+  it('says why instead of what was done, each reason once', () => {
+    const why = 'after the spring visit'
+    const batches = addEdits(addEdits(addEdits([], { ...drew, why }), { ...move, why }), {
+      ...move,
+      edits: [{ before: moved, after: contact }],
+      why: 'the old line was right',
+    })
+    expect(freezeFirst(batches, 'key')[0]?.request?.body.message).toBe(
+      'after the spring visit; the old line was right',
+    )
+    const silent = freezeFirst(addEdits([], { ...drew, why: '' }), 'key')
+    expect(silent[0]?.request?.body.message).toBe('drew a contact')
+  })
+
   it('leaves nothing to send of what was drawn and taken back before it was sent', () => {
     expect(addEdits(addEdits([], drew), undo)).toEqual([])
   })

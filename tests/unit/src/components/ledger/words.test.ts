@@ -2,10 +2,10 @@ import { describe, expect, it } from 'vitest'
 import type { DifferenceCount } from '@shared/api/comparisons'
 import { toDifference } from '@shared/changes/differences'
 import type { XY } from '@shared/units'
-import { fieldRows, groupByKind, howWords } from '@/components/ledger/compared-rows'
+import { differenceWords, fieldRows, groupByKind, howWords } from '@/components/ledger/compared-rows'
 import { restoreWords } from '@/components/ledger/restore-words'
 import { stateOptions, stateWords } from '@/components/ledger/state-words'
-import { aLine, aPoint } from '../../../../support/sheet-items'
+import { aLine, aPoint, aUnit } from '../../../../support/sheet-items'
 import { rosa } from '../../../../support/ledger-rows'
 
 const count = (kind: DifferenceCount['kind'], figures: Partial<DifferenceCount>): DifferenceCount => ({
@@ -56,6 +56,8 @@ describe('states of a sheet', () => {
 })
 
 describe('rows of a comparison', () => {
+  const unit = aUnit({ label: 'Sv' })
+  const labelOf = (id: string) => (id === unit.id ? 'Sv' : undefined)
   const contact = aLine(
     'contact',
     [
@@ -74,7 +76,12 @@ describe('rows of a comparison', () => {
       },
     },
   })
-  const attitude = aPoint('attitude', [284_500, 5_278_400], { type: 'bedding', strike: 40, dip: 35 })
+  const attitude = aPoint('attitude', [284_500, 5_278_400], {
+    type: 'bedding',
+    strike: 40,
+    dip: 35,
+    station: '14',
+  })
   const reread = toDifference({
     before: attitude,
     after: { ...attitude, properties: { ...attitude.properties, dip: 53 } },
@@ -83,8 +90,34 @@ describe('rows of a comparison', () => {
   it('say how far an item was moved, and which fields say something else', () => {
     expect(howWords(moved)).toBe('moved 30 m')
     expect(howWords(reread)).toBe('re-attributed')
-    expect(fieldRows(reread)).toEqual([{ field: 'dip', before: '35', after: '53' }])
+    expect(fieldRows(reread, labelOf)).toEqual([{ field: 'dip', before: '35', after: '53' }])
     expect(howWords(toDifference({ before: null, after: contact }))).toBe('added')
+  })
+
+  it('name units by their labels and readings as they were written', () => {
+    const label = aPoint('unit-label', [284_500, 5_278_400], { unit: unit.id })
+    const other = { ...label, properties: { ...label.properties, unit: contact.id } }
+    expect(fieldRows(toDifference({ before: label, after: other }), labelOf)).toEqual([
+      { field: 'unit', before: 'Sv', after: 'a unit that is gone' },
+    ])
+    const reading = {
+      text: '040/35',
+      convention: 'strike-dip',
+      northReference: 'true',
+      declination: null,
+    } as const
+    const read = { ...attitude, properties: { ...attitude.properties, reading } }
+    expect(fieldRows(toDifference({ before: attitude, after: read }), labelOf)).toEqual([
+      { field: 'reading', before: 'none', after: '“040/35”' },
+    ])
+  })
+
+  it('are told in one line each', () => {
+    expect(differenceWords(moved, labelOf)).toBe('contact: moved 30 m')
+    expect(differenceWords(reread, labelOf)).toBe('attitude 14: dip 35 → 53')
+    expect(differenceWords(toDifference({ before: attitude, after: null }), labelOf)).toBe(
+      'attitude 14: removed',
+    )
   })
 
   it('stand under their kinds with the counts of the whole', () => {
