@@ -24,6 +24,7 @@ const places: { who: Visitor; path: string; shows: string }[] = [
   { who: 'compiler', path: '/sheets/MI-14/intake', shows: 'Field files' },
   { who: 'compiler', path: '/sheets/MI-14/review', shows: 'toward edition 1' },
   { who: 'compiler', path: '/sheets/MI-14/ledger', shows: 'Every change of sheet MI-14' },
+  { who: 'compiler', path: '/sheets/MI-14/compare?from=1', shows: 'CSV' },
   { who: 'administrator', path: '/administration', shows: 'Invite a person' },
 ]
 

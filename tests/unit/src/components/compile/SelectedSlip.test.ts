@@ -1,4 +1,4 @@
-import { flushPromises, mount } from '@vue/test-utils'
+import { flushPromises, mount, RouterLinkStub } from '@vue/test-utils'
 import { createPinia, setActivePinia } from 'pinia'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import type { Item } from '@shared/items/item'
@@ -22,7 +22,7 @@ async function select(items: Item[], ids = items.map((item) => item.id), as = {}
   const sheet = useSheetFake()
   sheet.start(items, as)
   const workplace = useWorkplaceStore()
-  const slip = mount(SelectedSlip)
+  const slip = mount(SelectedSlip, { global: { stubs: { RouterLink: RouterLinkStub } } })
   workplace.select(ids)
   await flushPromises()
   return { sheet, workplace, slip }
