@@ -1,5 +1,4 @@
 import { composeEdits, editedId, toChanges, type ChangeSet, type Edit } from '@shared/changes/change-set'
-import { isSame } from '@shared/changes/same-value'
 
 /** Edits that wait to be sent as one change set. Once it has a `request` it is frozen: key and body were stored before
  *  the first sending, and every retry sends the same ones. */
@@ -17,12 +16,17 @@ export interface Batch {
 /** Longest message that a ledger entry takes, characters. */
 const LONGEST_MESSAGE = 500
 
+/** Edits as a gesture makes them. */
+export interface Added {
+  base: number
+  label: string
+  edits: readonly Edit[]
+  why?: string
+}
+
 /** Adds edits to the last batch, or opens a new one where the last is frozen. Edits that take each other back leave no
  *  batch at all: what was never sent and then undone is never sent. */
-export function addEdits(
-  batches: readonly Batch[],
-  added: { base: number; label: string; edits: readonly Edit[]; why?: string },
-): Batch[] {
+export function addEdits(batches: readonly Batch[], added: Added): Batch[] {
   const last = batches.at(-1)
   if (!last || last.request) {
     const { base, edits, label, why } = added
@@ -70,34 +74,6 @@ export function advanceBase(
     const staysBehind = batch.base !== from || batch.edits.some((edit) => foreign.has(editedId(edit)))
     return batch.request || staysBehind ? batch : { ...batch, base: to }
   })
-}
-
-/** What becomes of an item that two people changed: `before` as it is now, `after` as it was decided to be. */
-export type Decision = Edit
-
-/** The refused first batch with what was decided on its items in conflict, put on top of a revision. What later batches
- *  did to those items is part of the decision already. A later batch follows to the revision, unless somebody else
- *  changed another of its items: that conflict has not been seen yet.
- *  @param foreign ids of items that others changed */
-export function decideItems(
-  batches: readonly Batch[],
-  {
-    revision,
-    decisions,
-    foreign,
-  }: { revision: number; decisions: ReadonlyMap<string, Decision>; foreign: ReadonlySet<string> },
-): Batch[] {
-  const [first, ...rest] = batches.map((batch) => ({
-    ...batch,
-    edits: batch.edits.filter((edit) => !decisions.has(editedId(edit))),
-  }))
-  if (!first) return []
-  const decided = [...decisions.values()].filter(({ before, after }) => !isSame(before, after))
-  const settled = { ...first, base: revision, edits: [...first.edits, ...decided] }
-  const later = rest.map((batch) =>
-    batch.edits.some((edit) => foreign.has(editedId(edit))) ? batch : { ...batch, base: revision },
-  )
-  return [settled, ...later].filter((batch) => batch.edits.length > 0)
 }
 
 /** Batches without the edits of some items; empty batches go. */

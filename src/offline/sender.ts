@@ -15,7 +15,8 @@ export interface SenderPorts<A> {
   post(body: ChangeSet, key: string): Promise<Delivery<A>>
   /** The first batch is done; must take it from the batches. May ask for other people's changes before the next. */
   acknowledge(answer: A): Promise<void>
-  refuse(problem: Problem): Promise<void>
+  /** The first batch was refused. Whether the others may be sent all the same, or somebody has to act first. */
+  refuse(problem: Problem): Promise<'go on' | 'stop'>
   state(state: SenderState): void
   newKey(): string
   /** Runs something later; answers how to cancel it. */
@@ -26,7 +27,7 @@ export interface SenderPorts<A> {
 const BACKOFF_MS = [1000, 2000, 5000, 10_000, 30_000] as const
 
 /** Sends waiting batches one at a time, in order. A request's key and body are on disk before its first sending and stay
- *  the same over all tries. A refusal stops the sender until somebody decides; silence makes it wait and try again. */
+ *  the same over all tries. A refusal may stop the sender until somebody acts; silence makes it wait and try again. */
 export class Sender<A> {
   private state: SenderState = 'idle'
   private failures = 0
@@ -66,10 +67,8 @@ export class Sender<A> {
       if (delivery.outcome === 'unreachable') return this.wait()
       this.failures = 0
       if (delivery.outcome === 'refused') {
-        await this.ports.refuse(delivery.problem)
-        return this.enter('stopped')
-      }
-      await this.ports.acknowledge(delivery.answer)
+        if ((await this.ports.refuse(delivery.problem)) === 'stop') return this.enter('stopped')
+      } else await this.ports.acknowledge(delivery.answer)
     }
     if (this.state !== 'idle') this.enter('idle')
   }

@@ -6,12 +6,12 @@ import {
   addEdits,
   advanceBase,
   countWaiting,
-  decideItems,
   dropItems,
   thawFirst,
   touchedIds,
   type Batch,
 } from '@/offline/batches'
+import { addToHeld, decideBatch, holdFirst, type HeldWork } from '@/offline/held-work'
 import type { Outbox } from '@/offline/outbox'
 import { Sender, type Delivery, type SenderState } from '@/offline/sender'
 import { editsShapeFaces, shapesFaces } from './faces-keeper'
@@ -57,7 +57,10 @@ export class SheetExchange {
   readonly items = new LocalItems()
   /** Ledger entries by which somebody else changed an item while this page was open. */
   readonly foreignEntries = new Map<string, readonly LedgerEntry[]>()
+  /** What is to be sent, in order. */
   private batches: readonly Batch[]
+  /** What two people changed: not sent until it is decided. */
+  private held: readonly HeldWork[] = []
   /** Revision that the confirmed items are of, and the highest one announced. */
   private revision: number
   private announced: number
@@ -88,17 +91,24 @@ export class SheetExchange {
   }
 
   get saved(): Saved {
+    const problem = this.problem ?? this.held[0]?.problem
+    const isHeld = this.state === 'idle' && this.held.length > 0
     return {
-      state: savedStates[this.state],
+      state: isHeld ? 'stopped' : savedStates[this.state],
       revision: this.revision,
-      waiting: countWaiting(this.batches),
-      ...(this.problem ? { problem: this.problem } : {}),
+      waiting: countWaiting(this.all),
+      ...(problem ? { problem } : {}),
     }
   }
 
   /** Whether waiting changes touch lines or labels. */
   get waitingShapesFaces(): boolean {
-    return this.batches.some((batch) => editsShapeFaces(batch.edits))
+    return this.all.some((batch) => editsShapeFaces(batch.edits))
+  }
+
+  /** Everything that is not acknowledged yet; held work and queue have no item in common. */
+  private get all(): Batch[] {
+    return [...this.held.map(({ batch }) => batch), ...this.batches]
   }
 
   /** Begins to send what a closed page left waiting. Batches on whose items nobody worked since move to the present
@@ -119,7 +129,10 @@ export class SheetExchange {
   /** Takes checked edits: shown at once, kept in the outbox, sent as soon as may be.
    *  @param why what the ledger shall say instead of the label; empty where nobody said */
   put(label: string, edits: readonly Edit[], why = ''): void {
-    void this.keep(addEdits(this.batches, { base: this.revision, label, edits, why }))
+    const added = { base: this.revision, label, edits, why }
+    const held = addToHeld(this.held, added)
+    if (held) this.held = held
+    void this.keep(held ? this.batches : addEdits(this.batches, added))
     this.show(edits.map(editedId))
     if (editsShapeFaces(edits)) this.ports.facesChanged('here')
     // What was refused may be mended, or taken back, by this very change.
@@ -140,21 +153,26 @@ export class SheetExchange {
     this.follow()
   }
 
-  /** Settles a conflict: each of its items becomes what was decided, on top of what the others did, as a new entry.
-   *  Nothing is sent of an item that was decided to be as the others left it. */
+  /** Settles the first conflict: each of its items becomes what was decided, on top of what the others did, as a new
+   *  entry. Nothing is sent of an item that was decided to be as the others left it. */
   async settle(decided: ReadonlyMap<string, Item | null>): Promise<void> {
-    const touched = touchedIds(this.batches)
+    const [first, ...others] = this.held
+    if (!first) return
     const decisions = new Map(
       [...decided].map(([id, after]) => [id, { before: this.items.confirmedItem(id) ?? null, after }]),
     )
-    const foreign = new Set(this.foreignEntries.keys())
-    await this.keep(decideItems(this.batches, { revision: this.revision, decisions, foreign }))
-    this.show(touched)
+    const settled = decideBatch(first.batch, { revision: this.revision, decisions })
+    this.held = others
+    await this.keep(settled ? [...this.batches, settled] : this.batches)
+    this.show([...touchedIds([first.batch]), ...decided.keys()])
     this.retry()
   }
 
   /** Gives up what waits of some items, and sends the rest. */
   async giveUp(ids: readonly string[]): Promise<void> {
+    this.held = this.held.flatMap(({ batch, problem }) =>
+      dropItems([batch], new Set(ids)).map((left) => ({ batch: left, problem })),
+    )
     await this.keep(dropItems(this.batches, new Set(ids)))
     this.show(ids)
     this.retry()
@@ -162,7 +180,8 @@ export class SheetExchange {
 
   /** Gives up everything that waits. */
   async discard(): Promise<void> {
-    const touched = touchedIds(this.batches)
+    const touched = touchedIds(this.all)
+    this.held = []
     await this.keep([])
     this.show(touched)
     this.retry()
@@ -190,11 +209,11 @@ export class SheetExchange {
   private async keep(batches: readonly Batch[]): Promise<void> {
     this.batches = batches
     this.ports.told()
-    await this.outbox.save(batches)
+    await this.outbox.save(this.all)
   }
 
   private show(ids: readonly string[]): void {
-    this.items.show(ids, this.batches)
+    this.items.show(ids, this.all)
     this.ports.shown(ids)
   }
 
@@ -226,10 +245,18 @@ export class SheetExchange {
     this.items.confirm([...put, ...answer.altered], removed)
   }
 
-  private async refused(problem: Problem): Promise<void> {
-    await this.keep(thawFirst(this.batches))
-    if (problem.type.endsWith('/item-conflict')) await this.catchUp(new Set()).catch(() => undefined)
-    this.problem = problem
+  /** What two people changed is held for a decision, and the rest goes on; any other refusal stops the sending. */
+  private async refused(problem: Problem): Promise<'go on' | 'stop'> {
+    if (!problem.type.endsWith('/item-conflict')) {
+      await this.keep(thawFirst(this.batches))
+      this.problem = problem
+      return 'stop'
+    }
+    const { held, queue } = holdFirst(this.batches, problem)
+    this.held = [...this.held, ...held]
+    await this.keep(queue)
+    await this.catchUp(new Set()).catch(() => undefined)
+    return 'go on'
   }
 
   /** A request under way may be the very one announced, so its answer comes first. */

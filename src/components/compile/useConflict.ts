@@ -12,7 +12,7 @@ export function useConflict() {
   const compared = useComparedStore()
   const { context } = useWords()
 
-  const problem = computed(() => (sheet.saved.state === 'stopped' ? sheet.saved.problem : undefined))
+  const problem = computed(() => sheet.saved.problem)
   const conflicts = computed(() => {
     // Follows what either side does to its items meanwhile.
     void sheet.itemsVersion

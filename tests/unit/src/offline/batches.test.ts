@@ -3,7 +3,6 @@ import {
   addEdits,
   advanceBase,
   countWaiting,
-  decideItems,
   dropItems,
   freezeFirst,
   messageOf,
@@ -94,35 +93,6 @@ describe('batches of unsent edits', () => {
     const both = addEdits(addEdits([], move), { ...drew, edits: [{ before: null, after: other }] })
     expect(dropItems(both, new Set([contact.id]))).toMatchObject([{ base: 7, edits: [{ after: other }] }])
     expect(dropItems(both, new Set([contact.id, other.id]))).toEqual([])
-  })
-
-  it('drops the edits of items decided to be as the others left them, and a batch that has none left', () => {
-    const decisions = new Map([[contact.id, { before: contact, after: contact }]])
-    expect(decideItems(addEdits([], move), { revision: 9, decisions, foreign: new Set() })).toEqual([])
-  })
-
-  it('puts a decision in the place of all that waits for its item, on top of the revision', () => {
-    const renamed = { ...moved, properties: { ...moved.properties, name: 'Skua' } }
-    const behind = addEdits(freezeFirst(addEdits([], move), 'key'), {
-      ...move,
-      edits: [{ before: moved, after: renamed }],
-    })
-    const decisions = new Map([[contact.id, { before: contact, after: renamed }]])
-    const decided = decideItems(thawFirst(behind), { revision: 9, decisions, foreign: new Set([contact.id]) })
-    expect(decided).toEqual([
-      { base: 9, edits: [{ before: contact, after: renamed }], labels: [move.label], request: null },
-    ])
-  })
-
-  it('leaves a later batch behind whose other conflict nobody has seen yet', () => {
-    const other = { ...contact, id: '00000000-0000-4000-8000-00000000ffff' }
-    const drewOther = { ...drew, edits: [{ before: null, after: other }] }
-    const both = thawFirst(addEdits(freezeFirst(addEdits([], move), 'key'), drewOther))
-    const decisions = new Map([[contact.id, { before: contact, after: moved }]])
-    const basesWith = (foreign: string[]) =>
-      decideItems(both, { revision: 9, decisions, foreign: new Set(foreign) }).map(({ base }) => base)
-    expect(basesWith([contact.id])).toEqual([9, 9])
-    expect(basesWith([contact.id, other.id])).toEqual([9, 7])
   })
 
   it('counts equal gestures and keeps the message within what the ledger takes', () => {

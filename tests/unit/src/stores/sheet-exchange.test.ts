@@ -258,6 +258,21 @@ describe('other people’s changes', () => {
     expect(ledger.received).toHaveLength(1)
   })
 
+  it('hold up only what they touch: other work is saved while the decision waits', async () => {
+    const { exchange, id } = await inConflict()
+    const fresh = aContact()
+    exchange.put('drew a contact', [{ before: null, after: fresh }])
+    await settle()
+    expect(ledger.items.get(fresh.id)).toEqual(fresh)
+    expect(exchange.saved).toMatchObject({ state: 'stopped', revision: 9, waiting: 1 })
+    expect(noteOf(exchange.items.get(id))).toBe('mine')
+    expect(kept).toHaveLength(1)
+    await exchange.settle(new Map([[id, exchange.items.get(id) ?? null]]))
+    await settle()
+    expect(noteOf(ledger.items.get(id))).toBe('mine')
+    expect(exchange.saved).toEqual({ state: 'saved', revision: 10, waiting: 0 })
+  })
+
   it('stand when theirs is chosen, and nothing is sent', async () => {
     const { exchange, id } = await inConflict()
     await exchange.settle(new Map([[id, exchange.items.confirmedItem(id) ?? null]]))
