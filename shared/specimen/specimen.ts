@@ -60,8 +60,11 @@ const lineEntry = (symbol: LineSymbol): SpecimenEntry => ({
   dimensions: lineDimensions(symbol),
   drivenBy: symbol.drivenBy.map(inWords),
   published: locationConfidences.flatMap((confidence): PublishedNumber[] => {
-    const published = symbol.published?.[confidence]
-    return published ? [{ of: confidence, ...published }] : []
+    const [plain, queried] = [symbol.published?.[confidence], symbol.publishedQueried?.[confidence]]
+    return [
+      ...(plain ? [{ of: confidence, ...plain }] : []),
+      ...(queried ? [{ of: `${confidence}, queried`, ...queried }] : []),
+    ]
   }),
   cases: lineCases(symbol),
 })

@@ -70,6 +70,8 @@ export interface LineSymbol {
   core?: { width: Millimetres; ink: Ink }
   decoration?: Decoration
   published?: Partial<Record<LocationConfidence, Published>>
+  /** The same with queries in the line. */
+  publishedQueried?: Partial<Record<LocationConfidence, Published>>
 }
 
 /** What a point symbol says of itself beside its drawing. */

@@ -1,5 +1,5 @@
 import Flatbush from 'flatbush'
-import type { Item, PointItem } from '@shared/items/item'
+import type { Item, ItemOf, PointItem } from '@shared/items/item'
 import { importanceOf, planesApart, type Standing } from '@shared/symbols/importance'
 import { pointEntryIdOf } from '@shared/symbols/point-entries'
 import { mmPerMetreAtScale } from '@shared/symbols/frame'
@@ -9,7 +9,9 @@ import type { Degrees, Metres, Millimetres } from '@shared/units'
  *  beside it. Near print size, where everything is shown
  *  however crowded, only the nearest give way. */
 const CLEAR: Millimetres = 7
-const clearAt = (step: number): Millimetres => CLEAR * Math.min(1, 0.2 + 0.2 * step)
+/** Unit letters are smaller, and were given room in print. */
+const LABELS_CLEAR: Millimetres = 5
+const shareAt = (step: number): number => Math.min(1, 0.2 + 0.2 * step)
 /** Steps to the octave at which symbols drop out when one zooms out. */
 const STEPS_PER_OCTAVE = 4
 /** Steps that are told apart: beyond, a sheet is smaller than its symbols. */
@@ -17,7 +19,7 @@ const MOST_STEPS = 28
 /** Neighbours of the same sort that a plane is compared with. */
 const NEIGHBOURS = 3
 
-/** Every point but unit labels: each area keeps its letters. */
+/** Points with a symbol. Unit letters give way to one another only: an area without any says less than a crowded one. */
 type ThinnedPoint = Exclude<PointItem, { kind: 'unit-label' }>
 
 /** The step of a zoom: 0 from the print's size on, where everything is shown; then growing with every step farther out.
@@ -25,18 +27,26 @@ type ThinnedPoint = Exclude<PointItem, { kind: 'unit-label' }>
 export const thinningStep = (relative: number): number =>
   relative > 0.999 ? 0 : Math.min(MOST_STEPS, Math.max(1, Math.ceil(-Math.log2(relative) * STEPS_PER_OCTAVE)))
 
-/** For every crowded point symbol, the farthest step of zooming out at which it is still shown; labels and symbols that
- *  have room at all steps are not listed. Decided over the whole sheet, so panning changes nothing; from the farthest step
+/** For every crowded point, the farthest step of zooming out at which it is still shown; those that have room at all steps are
+ *  not listed. Decided over the whole sheet, so panning changes nothing; from the farthest step
  *  inward, each step keeping what the one before showed, so a symbol once shown stays shown when one zooms in.
  *  @param scale denominator of the printed scale */
 export function thinOut(points: readonly PointItem[], scale: number): Map<Item, number> {
-  const places = points.filter((item): item is ThinnedPoint => item.kind !== 'unit-label')
-  const waiting = byImportance(places)
+  const symbols = points.filter((item): item is ThinnedPoint => item.kind !== 'unit-label')
+  const labels = points.filter((item) => item.kind === 'unit-label')
+  return new Map([
+    ...lastSteps(byImportance(symbols), CLEAR, scale),
+    ...lastSteps(rareFirst(labels), LABELS_CLEAR, scale),
+  ])
+}
+
+/** @param waiting the most important first   @param clearMm what one keeps clear of another */
+function lastSteps(waiting: readonly PointItem[], clearMm: Millimetres, scale: number): Map<Item, number> {
   const steps = new Map<Item, number>()
   const shown = new Neighbourhood()
   let left = waiting
   for (let step = MOST_STEPS; step >= 1 && left.length > 0; step--) {
-    const clear = clearanceAt(step, scale)
+    const clear = clearanceAt(step, clearMm, scale)
     shown.spread(clear)
     left = left.filter((item) => {
       if (shown.hasWithin(item.geometry.coordinates, clear)) return true
@@ -50,8 +60,16 @@ export function thinOut(points: readonly PointItem[], scale: number): Map<Item, 
 }
 
 /** Ground that a symbol keeps clear at a step; steps end where the zoom is farthest in them. */
-const clearanceAt = (step: number, scale: number): Metres =>
-  (clearAt(step) / mmPerMetreAtScale(scale)) * 2 ** (step / STEPS_PER_OCTAVE)
+const clearanceAt = (step: number, clearMm: Millimetres, scale: number): Metres =>
+  ((clearMm * shareAt(step)) / mmPerMetreAtScale(scale)) * 2 ** (step / STEPS_PER_OCTAVE)
+
+/** Labels of the rarest unit first, so that every unit keeps one as long as may be; of equals, always the same one. */
+function rareFirst(labels: readonly ItemOf<'unit-label'>[]): readonly PointItem[] {
+  const counts = new Map<string, number>()
+  for (const { properties } of labels) counts.set(properties.unit, (counts.get(properties.unit) ?? 0) + 1)
+  const countOf = (label: ItemOf<'unit-label'>): number => counts.get(label.properties.unit) ?? 0
+  return labels.toSorted((a, b) => countOf(a) - countOf(b) || (a.id < b.id ? -1 : 1))
+}
 
 /** The most important first; of equals, always the same one. */
 function byImportance(places: readonly ThinnedPoint[]): ThinnedPoint[] {

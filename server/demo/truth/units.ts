@@ -176,7 +176,7 @@ export const coverUnits: readonly (Described & { cover: CoverKind })[] = [
     cover: 'sea',
     label: 'w',
     name: 'Sea',
-    age: 'Quaternary',
+    age: '',
     colour: '#d9ebf0',
     pattern: 'none',
     description: 'at mean sea level',

@@ -19,5 +19,6 @@ export const contacts: readonly LineSymbol[] = [
     }),
     // Read in the standard for these two; the numbers of the other two follow only from their place in its list.
     published: { certain: fgdc('1.1.1'), approximate: fgdc('1.1.3') },
+    publishedQueried: { certain: fgdc('1.1.2'), approximate: fgdc('1.1.4') },
   },
 ]

@@ -163,8 +163,13 @@ export const folds: readonly LineSymbol[] = [
   symbol('syncline', limbArrows('toward', 'open'), 'limbs dip toward the trace'),
   symbol('antiform', limbArrows('away', 'outlined'), 'limbs dip away; age order not known'),
   symbol('synform', limbArrows('toward', 'outlined'), 'limbs dip toward it; age order not known'),
-  symbol('overturned-anticline', turnedArrow('away'), 'arrows show the way both limbs dip', ['side']),
-  symbol('overturned-syncline', turnedArrow('toward'), 'arrows show the way both limbs dip', ['side']),
+  symbol('overturned-anticline', turnedArrow('away'), 'arrows point the way both limbs dip', ['side']),
+  symbol(
+    'overturned-syncline',
+    turnedArrow('toward'),
+    'arrows stand where both limbs dip to, and point to the trace',
+    ['side'],
+  ),
   symbol('monocline-anticlinal-bend', bend('away'), 'arrow toward the steeper limb', ['side']),
   symbol('monocline-synclinal-bend', bend('toward'), 'arrow on the steeper limb', ['side']),
 ]

@@ -59,7 +59,15 @@ describe('thinning of crowded point symbols', () => {
     expect(shownAt(repeated, thinOut(repeated, SCALE), 0.5)).toEqual([repeated[1]])
   })
 
-  it('never hides a symbol that stands alone, nor a unit label', () => {
+  it('lets unit letters give way to one another, those of a common unit to those of a rare one', () => {
+    const [common, rare] = [1, 2].map((digit) => `00000000-0000-4000-8000-00000000000${digit}`)
+    const label = (unit: string | undefined, east: number) => aPoint('unit-label', [east, 0], { unit })
+    const crowd = [label(common, 0), label(rare, 30), label(common, 60), label(common, 9000)]
+    expect(shownAt(crowd, thinOut(crowd, SCALE), 1)).toEqual(crowd)
+    expect(shownAt(crowd, thinOut(crowd, SCALE), 0.4)).toEqual([crowd[1], crowd[3]])
+  })
+
+  it('never hides a symbol that stands alone, nor the letters of an area for a symbol', () => {
     const label = aPoint('unit-label', [3, 3], { unit: '00000000-0000-4000-8000-000000000001' })
     const apart = aPoint('attitude', [0, 0], { strike: 40, dip: 30 })
     const sparse = [label, apart]

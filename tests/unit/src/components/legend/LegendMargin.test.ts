@@ -291,7 +291,7 @@ describe('crowded symbols', () => {
     expect(count.text()).toBe('1 of 3')
     expect(count.attributes('aria-label')).toBe('1 of 3 shown at this scale')
     expect(margin.get('.hidden-note').text().replaceAll('\u00a0', ' ')).toBe(
-      '2 crowded symbols hidden until 100 %.',
+      '2 crowded symbols and labels are not shown; zoom in to see them.',
     )
   })
 })
