@@ -49,10 +49,21 @@ export function useComparison(states: () => { from: string; to: string }) {
       next.value = page.next
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error
-      if (mine === turn) problem.value = error.problem
+      if (mine !== turn) return
+      problem.value = error.problem
+      if (after === undefined) forget()
     } finally {
       if (mine === turn) isLoading.value = false
     }
+  }
+
+  /** Nothing of other states stays under the names of these. */
+  function forget(): void {
+    differences.value = []
+    counts.value = []
+    items.value = []
+    compared.value = null
+    next.value = null
   }
 
   /** What the later state has on the sheet; the open sheet itself where that is it. */

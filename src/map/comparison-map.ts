@@ -17,6 +17,8 @@ const SYMBOLS = 'print'
 /** Slate and oxide: the inks of what is selected and of folds. */
 const INKS = { before: 'selection', after: 'fold' } as const
 const BEYOND_PAGE = 1.4
+/** Most items in view that stand on a light of their ink: more of it would only dim the sheet. */
+const MOST_LIT = 150
 /** How near a click counts. */
 const REACH_PX = 8
 /** How what is the same in both states stands back. */
@@ -91,13 +93,14 @@ export class ComparisonMap {
     )
   }
 
-  /** What differs is drawn whole, however crowded, on a light of its ink. */
+  /** What differs is drawn whole, however crowded; where it is not much, on a light of its ink. */
   private inkedLayer(state: keyof typeof INKS): SheetLayer {
     const scene = this.scenes[state]
     const halo = { colour: inkColour(INKS[state]), alpha: 0.2, width: 8 }
     return new SheetLayer(function* ({ context, ...request }) {
       const { view, ratio } = request
-      paintHalos(context, scene.index.within(groundInView(view, 2 * halo.width)), { view, ratio, ...halo })
+      const inView = scene.index.within(groundInView(view, 2 * halo.width))
+      if (inView.length <= MOST_LIT) paintHalos(context, inView, { view, ratio, ...halo })
       yield* paintSheet(context, scene, {
         ...request,
         symbols: SYMBOLS,

@@ -119,7 +119,7 @@ describe('two states of a sheet', () => {
     const row = page.getByRole('button', { name: `Attitude ${reading.properties.station}` })
     await row.click()
     expect(await row.getAttribute('aria-pressed')).toBe('true')
-    await page.getByText('attitudes: 1 re-attributed').waitFor()
+    await page.getByText('attitude: 1 re-attributed').waitFor()
     await page.getByText('beds undulate').waitFor()
   })
 

@@ -35,7 +35,9 @@ export function groupByKind(
     const count = counts.find((each) => each.kind === kind)
     if (!count) return []
     const ofKind = differences.filter((difference) => difference.kind === kind)
-    return [{ kind, words: `${kindWords[kind].many}: ${countWords(count)}`, differences: ofKind }]
+    const only = count.added + count.removed + Math.max(count.moved, count.reattributed) === 1
+    const words = `${kindWords[kind][only ? 'one' : 'many']}: ${countWords(count)}`
+    return [{ kind, words, differences: ofKind }]
   })
 }
 

@@ -126,7 +126,7 @@ describe('rows of a comparison', () => {
       groupByKind([reread, moved], counts).map(({ words, differences }) => [words, differences]),
     ).toEqual([
       ['contacts: 4000 removed, 1 moved', [moved]],
-      ['attitudes: 1 re-attributed', [reread]],
+      ['attitude: 1 re-attributed', [reread]],
     ])
   })
 })
