@@ -83,7 +83,7 @@ describe('the specimen', () => {
 
   it('gives published numbers where they were verified, and says so where none was', () => {
     expect(publishedWords(entryOf('contact').published)).toBe(
-      'FGDC-STD-013-2006: 1.1.1 (certain), 1.1.3 (approximate)',
+      'FGDC-STD-013-2006: 1.1.1 (certain), 1.1.2 (certain, queried), 1.1.3 (approximate), 1.1.4 (approximate, queried)',
     )
     expect(publishedWords(entryOf('fault.thrust').published)).toBe('No published number verified.')
   })
