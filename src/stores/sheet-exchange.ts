@@ -92,13 +92,18 @@ export class SheetExchange {
 
   get saved(): Saved {
     const problem = this.problem ?? this.held[0]?.problem
-    const isHeld = this.state === 'idle' && this.held.length > 0
     return {
-      state: isHeld ? 'stopped' : savedStates[this.state],
+      state: this.state === 'idle' ? this.restState() : savedStates[this.state],
       revision: this.revision,
       waiting: countWaiting(this.all),
       ...(problem ? { problem } : {}),
     }
+  }
+
+  /** Where things stand while nothing is under way: what was just decided is about to be. */
+  private restState(): Saved['state'] {
+    if (this.batches.length > 0) return 'saving'
+    return this.held.length > 0 ? 'stopped' : 'saved'
   }
 
   /** Whether waiting changes touch lines or labels. */

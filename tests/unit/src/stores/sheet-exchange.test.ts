@@ -118,6 +118,11 @@ describe('sending', () => {
     expect(exchange.saved.state).toBe('saved')
   })
 
+  it('never says saved while something waits, also before the sending begins', () => {
+    const drew = { base: 7, label: 'drew a contact', edits: [{ before: null, after: aContact() }] }
+    expect(open([], addEdits([], drew)).saved).toEqual({ state: 'saving', revision: 7, waiting: 1 })
+  })
+
   it('sends what a closed page left one after the other, without taking its own for somebody else’s', async () => {
     const [mine, theirs] = [aContact(), aContact()]
     ledger = new FakeLedger(7, [mine, theirs])
@@ -267,7 +272,9 @@ describe('other people’s changes', () => {
     expect(exchange.saved).toMatchObject({ state: 'stopped', revision: 9, waiting: 1 })
     expect(noteOf(exchange.items.get(id))).toBe('mine')
     expect(kept).toHaveLength(1)
-    await exchange.settle(new Map([[id, exchange.items.get(id) ?? null]]))
+    const settled = exchange.settle(new Map([[id, exchange.items.get(id) ?? null]]))
+    expect(exchange.saved).toEqual({ state: 'saving', revision: 9, waiting: 1 })
+    await settled
     await settle()
     expect(noteOf(ledger.items.get(id))).toBe('mine')
     expect(exchange.saved).toEqual({ state: 'saved', revision: 10, waiting: 0 })
