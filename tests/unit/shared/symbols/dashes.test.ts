@@ -38,6 +38,19 @@ describe('dashes', () => {
     }
   })
 
+  it('keep the stated gaps, whatever length they fit, where dashes are longer than gaps', () => {
+    for (const pattern of patterns.filter(([drawn = 0, left = 0]) => drawn >= left)) {
+      for (let length = 4; length < 60; length += 1.3) {
+        const dashes = flatten(cutDashes(polyline(straight(10, length)), pattern))
+        const gaps = dashes.slice(1).map(([from], index) => {
+          const end = dashes[index]?.at(-1)
+          return from && end ? lengthOf([end, from]) : NaN
+        })
+        for (const gap of gaps) expect(gap).toBeCloseTo(pattern[1] ?? NaN, 6)
+      }
+    }
+  })
+
   it('are cut anew in each part of a path', () => {
     const parts = [...polyline(straight(0, 10)), ...polyline(straight(0, 10, [5, 0]))]
     const dashes = flatten(cutDashes(parts, [2, 1]))
