@@ -7,6 +7,7 @@ import type { CursorShape, MapPort } from '@/editor/map-port'
 import type { SheetMap } from '@/map/sheet-map'
 import { newId } from '@/offline/new-id'
 import { keepSketch, readKeptSketch } from '@/stores/kept-sketch'
+import { useSessionStore } from '@/stores/session'
 import { useSheetStore } from '@/stores/sheet'
 import { isUnitPen, useWorkplaceStore } from '@/stores/workplace'
 
@@ -23,9 +24,10 @@ const cursors: Record<CursorShape, string> = {
 export function useSheetEditor(map: SheetMap) {
   const sheet = useSheetStore()
   const workplace = useWorkplaceStore()
+  const session = useSessionStore()
 
   const neatline = (sheet.sheet?.neatline ?? []).map(([east, north]): XY => [east, north])
-  const number = sheet.sheet?.number ?? ''
+  const owner = { account: session.account?.id ?? '', sheet: sheet.sheet?.number ?? '' }
   const port: MapPort = {
     metresPerPx: () => map.metresPerPx(),
     linesNear: (at, radius) => [
@@ -76,10 +78,10 @@ export function useSheetEditor(map: SheetMap) {
     pen,
     keepSketch(line) {
       const entry = heldEntry()
-      if (entry) keepSketch(number, line.length > 0 ? { entry: entry.id, line: [...line] } : null)
+      if (entry) keepSketch(owner, line.length > 0 ? { entry: entry.id, line: [...line] } : null)
     },
     keptSketch() {
-      const kept = readKeptSketch(number)
+      const kept = readKeptSketch(owner)
       return kept && kept.entry === heldEntry()?.id ? kept.line : []
     },
     askReading: (at) => (workplace.pendingReadingPlace = at),
@@ -100,7 +102,7 @@ export function useSheetEditor(map: SheetMap) {
 
   /** Goes on with the instrument that is held, or with the line that was left unfinished. */
   function takeUp(): void {
-    const kept = sheet.readOnly === null ? readKeptSketch(number) : null
+    const kept = sheet.readOnly === null ? readKeptSketch(owner) : null
     const entry = kept && legendEntries.find(({ id }) => id === kept.entry)
     if (entry && heldEntry()?.id !== entry.id) workplace.draw(entry)
     else if (workplace.tool !== 'select') editor.take(workplace.tool)

@@ -8,7 +8,7 @@ export interface InkedItem {
   ink: 'before' | 'after'
 }
 
-/** What lies over the map in two inks, to be compared: two sides of a conflict, or two states of the sheet. */
+/** What lies over the map in two inks, to be compared: both sides of a conflict. Whole states have a map of their own. */
 export const useComparedStore = defineStore('compared', () => {
   const inked = shallowRef<readonly InkedItem[]>([])
 

@@ -9,22 +9,30 @@ const keptSketchSchema = z.object({
 })
 export type KeptSketch = z.infer<typeof keptSketchSchema>
 
-const keyOf = (sheet: string): string => `sheetwright-sketch ${sheet}`
+/** Whose sketch it is: nobody goes on with another person's line in the same tab. */
+export interface SketchOwner {
+  /** Account id. */
+  account: string
+  /** Number of the sheet. */
+  sheet: string
+}
 
-/** The unfinished line of this tab on a sheet, over going elsewhere and over a reload; null where there is none. */
-export function readKeptSketch(sheet: string): KeptSketch | null {
+const keyOf = ({ account, sheet }: SketchOwner): string => `sheetwright-sketch ${account} ${sheet}`
+
+/** The unfinished line of a person on a sheet in this tab, over going elsewhere and over a reload; null where there is none. */
+export function readKeptSketch(owner: SketchOwner): KeptSketch | null {
   try {
-    return keptSketchSchema.safeParse(JSON.parse(sessionStorage.getItem(keyOf(sheet)) ?? 'null')).data ?? null
+    return keptSketchSchema.safeParse(JSON.parse(sessionStorage.getItem(keyOf(owner)) ?? 'null')).data ?? null
   } catch {
     return null
   }
 }
 
 /** Keeps an unfinished line, or forgets it. */
-export function keepSketch(sheet: string, sketch: KeptSketch | null): void {
+export function keepSketch(owner: SketchOwner, sketch: KeptSketch | null): void {
   try {
-    if (sketch) sessionStorage.setItem(keyOf(sheet), JSON.stringify(sketch))
-    else sessionStorage.removeItem(keyOf(sheet))
+    if (sketch) sessionStorage.setItem(keyOf(owner), JSON.stringify(sketch))
+    else sessionStorage.removeItem(keyOf(owner))
   } catch {
     // A browser that keeps nothing still draws; the line is then lost with the page.
   }
