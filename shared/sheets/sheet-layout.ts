@@ -3,6 +3,7 @@ import { sheetProjection } from '../geometry/projection'
 import { faceSize, fitsPage, proposePage } from '../sheet-face/page-layout'
 import type { LonLat, Millimetres, XY } from '../units'
 import { sheetArea } from './sheet-area'
+import { upperFirst } from '../words'
 
 /** Smallest side of a map face that is still a map. */
 export const SMALLEST_FACE: Millimetres = 10
@@ -70,7 +71,7 @@ function choosePage(
       fits,
       reason: fits
         ? `${needs} and fits with its legend column.`
-        : `${needs}; with its legend column it does not fit this page. ${mend.charAt(0).toUpperCase()}${mend.slice(1)}.`,
+        : `${needs}; with its legend column it does not fit this page. ${upperFirst(mend)}.`,
     }
   }
   if (!proposed) {

@@ -4,6 +4,7 @@ import { gridAzimuth } from '../geometry/bearings'
 import { normalizeAzimuth, type XY } from '../units'
 import { compassWords } from './compass'
 import { sideAzimuth, sideWords, type ConvergenceAt } from './line-side'
+import { upperFirst } from '../words'
 
 /** What a person calls a fault of each type. */
 export const faultWords: Record<FaultType, string> = {
@@ -30,7 +31,7 @@ export function describeFault(
   line: readonly XY[],
   convergenceAt: ConvergenceAt,
 ): string {
-  const name = faultWords[type].charAt(0).toUpperCase() + faultWords[type].slice(1)
+  const name = upperFirst(faultWords[type])
   if (type === 'rotational') return `${name}, ${rotationWords(side, line, convergenceAt)}`
   const toward = sideWords(line, side, convergenceAt)
   const meaning = sideMeanings[type]

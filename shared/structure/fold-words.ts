@@ -1,6 +1,7 @@
 import { foldWords, isSidedFold, type AxialTraceProperties, type FoldForm } from '../items/lines'
 import { normalizeAzimuth, type Azimuth, type Degrees } from '../units'
 import { azimuthFigure } from './compass'
+import { upperFirst } from '../words'
 
 /** What the side of a fold is, where its form has one. */
 export const foldSideMeaning = (form: FoldForm): string | undefined => {
@@ -13,10 +14,9 @@ type Axis = Pick<AxialTraceProperties, 'form' | 'plunge' | 'trend' | 'doubly' | 
 /** A fold and its axis in words: `Anticline, plunging 21° toward 028°`; the form alone where no plunge is stated.
  *  @param side the side of a sided fold as the ground has it: `east` */
 export function describeFold(axis: Axis, side?: string): string {
-  const words = foldWords[axis.form]
   const meaning = foldSideMeaning(axis.form)
   return [
-    words.charAt(0).toUpperCase() + words.slice(1),
+    upperFirst(foldWords[axis.form]),
     ...(meaning && side ? [`${meaning} ${side}`] : []),
     ...axisWords(axis),
   ].join(', ')

@@ -1,11 +1,10 @@
 import { lineationWords, type LineationProperties } from '../items/points'
 import { describeAttitude } from './attitude-words'
 import { azimuthFigure, compassWords } from './compass'
+import { lowerFirst, upperFirst } from '../words'
 
 /** What a lineation's words depend on. */
 export type DescribedLineation = Pick<LineationProperties, 'type' | 'trend' | 'plunge' | 'plane'>
-
-const upperFirst = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1)
 
 /** A lineation in words: `Lineation, plunges 35° toward 120° (south-east), on foliation that strikes 045°, dips 40° toward
  *  135° (south-east)`. */
@@ -21,5 +20,3 @@ function describePlunge(trend: number | null, plunge: number): string {
   if (plunge === 0) return `horizontal, trending ${azimuthFigure(trend)}°`
   return `plunges ${Math.round(plunge * 10) / 10}° toward ${azimuthFigure(trend)}° (${compassWords(trend)})`
 }
-
-const lowerFirst = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1)

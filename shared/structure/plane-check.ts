@@ -11,6 +11,7 @@ import {
   quadrantFigure,
 } from './compass'
 import { dipDirectionOf, strikeFrom, type Plane } from './plane'
+import { upperFirst } from '../words'
 
 /** How a reading was written: one of the two sheet conventions, or in quadrants. */
 export type Notation = Reading['convention']
@@ -47,7 +48,7 @@ export function planeFromFields(fields: PlaneFields, convention: AttitudeConvent
 }
 
 function azimuthProblem(azimuth: Degrees, name: string): string | undefined {
-  const title = name.charAt(0).toUpperCase() + name.slice(1)
+  const title = upperFirst(name)
   if (!Number.isFinite(azimuth)) return `The ${name} is not a number.`
   if (azimuth < 0) return `${title} ${azimuth} is less than 0: azimuths run from 0 to 360.`
   if (azimuth > 360) return `${title} ${azimuth} is more than 360: azimuths run from 0 to 360.`

@@ -3,6 +3,7 @@ import { foldWords, type FoldForm } from '../../items/lines'
 import { confidenceStrokes, type Decoration, type LineSymbol, type SideSign } from '../definition'
 import type { Mark, PathStep } from '../display-list'
 import { polyline, QUARTER_HANDLE } from '../paths'
+import { upperFirst } from '../../words'
 
 const fold = {
   kind: 'axial-trace',
@@ -151,7 +152,7 @@ const symbol = (
   ...fold,
   id: `axial-trace.${form}`,
   variant: form,
-  title: foldWords[form].charAt(0).toUpperCase() + foldWords[form].slice(1),
+  title: upperFirst(foldWords[form]),
   explains,
   drivenBy: ['locationConfidence', 'identity', ...sided, ...AXIS],
   decoration,

@@ -8,6 +8,7 @@ import type { Box } from '@shared/sheet-face/page-layout'
 import type { DisplayList } from '@shared/symbols/display-list'
 import { lineSymbols } from '@shared/symbols/draw-item'
 import { drawLine } from '@shared/symbols/draw-line'
+import { upperFirst } from '@shared/words'
 
 /** A drawn sample that stands for a value. */
 export interface SampleOption<V extends string> {
@@ -23,7 +24,7 @@ const MARGIN = 1
 
 /** The four location confidences as drawn samples: plain lines, heavy enough to be told apart on a slip. */
 export const locationOptions: readonly SampleOption<LocationConfidence>[] = locationConfidences.map((value) =>
-  option(value, capital(value), { locationConfidence: value }),
+  option(value, upperFirst(value), { locationConfidence: value }),
 )
 
 const identityTitles: Record<Identity, string> = {
@@ -62,8 +63,4 @@ function sampleLine({
     ],
     { locationConfidence, identity, attributes: { side: 1 } },
   )
-}
-
-function capital(word: string): string {
-  return word.charAt(0).toUpperCase() + word.slice(1)
 }

@@ -9,6 +9,7 @@ import { describeLineation } from '@shared/structure/lineation-words'
 import { legendEntryOf } from '@shared/symbols/legend-entries'
 import { describePlace } from '@shared/symbols/place-words'
 import type { Degrees, Metres, XY } from '@shared/units'
+import { lowerFirst, upperFirst } from '@shared/words'
 
 /** What the words of an item need beside it. */
 export interface WordsContext {
@@ -51,13 +52,11 @@ function unitLabelTitle(unit: UnitProperties | undefined, identity: string): str
 }
 
 function attitudeTitle({ properties }: ItemOf<'attitude'>): string {
-  const type = capital(properties.type)
+  const type = upperFirst(properties.type)
   const words = describeAttitude(properties)
   const separator = words.startsWith('Horizontal') ? ', ' : ' '
-  return `${type}${separator}${words.charAt(0).toLowerCase()}${words.slice(1)}`
+  return `${type}${separator}${lowerFirst(words)}`
 }
-
-const capital = (word: string): string => word.charAt(0).toUpperCase() + word.slice(1)
 
 const located = (item: LineItem, title: string): string => {
   const { locationConfidence } = item.properties

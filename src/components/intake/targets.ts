@@ -7,6 +7,7 @@ import { places } from '@shared/symbols/definitions/points'
 import { lineSymbols } from '@shared/symbols/draw-item'
 import { legendEntries, type LegendEntry } from '@shared/symbols/legend-entries'
 import type { Option, OptionGroup } from './option-groups'
+import { upperFirst } from '@shared/words'
 
 /** One choice of what a value becomes. */
 export interface TargetOption<T> extends Option {
@@ -35,8 +36,6 @@ const option = <T extends Target>(title: string, target: T): TargetOption<T> => 
   title,
   target,
 })
-
-const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1).replaceAll('-', ' ')
 
 const lineGroupTitles: Record<(typeof lineKinds)[number], string> = {
   contact: 'Contacts',
@@ -86,7 +85,7 @@ function planeTitle(target: PointTarget): string {
   if (target.kind !== 'attitude') return ''
   const { type, overturned, topsKnown, undulating } = target
   const words = [overturned && 'overturned', topsKnown && 'tops known', undulating && 'undulating']
-  return [capital(type), ...words.filter(Boolean)].join(', ')
+  return [upperFirst(type).replaceAll('-', ' '), ...words.filter(Boolean)].join(', ')
 }
 
 /** The option with a key. */

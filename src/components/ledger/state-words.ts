@@ -1,4 +1,5 @@
 import type { NamedRevision } from '@shared/api/ledger'
+import { upperFirst } from '@shared/words'
 
 /** A state of a sheet in words, as the address names it: "revision 12", "edition 2", "the latest revision". */
 export function stateWords(state: string): string {
@@ -27,6 +28,5 @@ export function stateOptions(
     { value: '0', words: 'The empty sheet' },
   ]
   if (chosen === '' || options.some(({ value }) => value === chosen)) return options
-  const words = stateWords(chosen)
-  return [{ value: chosen, words: words.charAt(0).toUpperCase() + words.slice(1) }, ...options]
+  return [{ value: chosen, words: upperFirst(stateWords(chosen)) }, ...options]
 }
